@@ -13,7 +13,10 @@ export function decodeText(fileName: string, bytes: Uint8Array): Decoded {
   try {
     const text = new TextDecoder('utf-8', { fatal: true }).decode(bytes);
     if (text.trim() === '') {
-      return { ok: false, problem: fileProblem({ fileName }, 'the file holds no text, only blanks.') };
+      return {
+        ok: false,
+        problem: fileProblem({ fileName }, 'the file holds no text, only blanks.'),
+      };
     }
     // DOS programs end a text with Ctrl-Z.
     return { ok: true, lines: text.replace(/\u001a\s*$/, '').split(/\r\n|\n|\r/) };

@@ -38,7 +38,9 @@ export function guessStoppingLayout(tables: readonly Table[]): StoppingLayout {
     layout: columns.length > tables.length ? 'matrix' : 'per-energy',
     depthUnit: depthUnitIn(depthHeading) ?? depthUnitInComments(tables) ?? 'nm',
     positionsAre: first && looksLikeEdges(first) ? 'edges' : 'centres',
-    weightsAre: /density|dichte|pdf|per[ _]nm|\/ ?nm|nm\^?-1|nm⁻¹/i.test(words) ? 'density' : 'counts',
+    weightsAre: /density|dichte|pdf|per[ _]nm|\/ ?nm|nm\^?-1|nm⁻¹/i.test(words)
+      ? 'density'
+      : 'counts',
     energiesKeV: columns.map(({ energyKeV }) => energyKeV),
     implantedPerEnergy: implantedIn(tables),
   };
@@ -79,13 +81,16 @@ function depthUnitIn(heading: string): DepthUnit | null {
   const text = heading.replace(/_/g, ' ');
   if (/(?<![a-z])nm(?![a-z])/i.test(text)) return 'nm';
   if (/[\u00b5\u03bc]m|(?<![a-z])um(?![a-z])|micron/i.test(text)) return 'um';
-  return /[\u00c5\u212b]|(?<![a-z])ang(?![a-z])|(?<![A-Za-z])A(?![A-Za-z])/.test(text) || /angstr/i.test(text)
+  return /[\u00c5\u212b]|(?<![a-z])ang(?![a-z])|(?<![A-Za-z])A(?![A-Za-z])/.test(text) ||
+    /angstr/i.test(text)
     ? 'A'
     : null;
 }
 
 function depthUnitInComments(tables: readonly Table[]): DepthUnit | null {
-  const about = tables.flatMap(({ comments }) => comments).find(({ text }) => /depth|tiefe/i.test(text));
+  const about = tables
+    .flatMap(({ comments }) => comments)
+    .find(({ text }) => /depth|tiefe/i.test(text));
   return about ? depthUnitIn(about.text) : null;
 }
 

@@ -2,7 +2,8 @@ import type { Decimal } from './table';
 
 const WITH_POINT = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eEdD][+-]?\d+)?$/;
 const WITH_COMMA = /^[+-]?(?:\d+,?\d*|,\d+)(?:[eEdD][+-]?\d+)?$/;
-const NOT_A_NUMBER = /^[+-]?(?:nan|inf|infinity|n\/a|na|null|none|#num!|#n\/a|#div\/0!|#wert!|1\.#.*|-+)$/i;
+const NOT_A_NUMBER =
+  /^[+-]?(?:nan|inf|infinity|n\/a|na|null|none|#num!|#n\/a|#div\/0!|#wert!|1\.#.*|-+)$/i;
 
 /**
  * The number in a cell, or null. Strict: no thousands marks, no units, nothing after the number.

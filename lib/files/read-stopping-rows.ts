@@ -26,7 +26,12 @@ export function readStoppingRows(
   const rows = table.rows.filter((row) => !skipped.has(row.line));
   const edges = options.positionsAre === 'edges';
   const closing = edges ? closingRow(rows) : null;
-  const result: StoppingRows = { positionsNm: [], weights: columns.map(() => []), problems: [], warnings: [] };
+  const result: StoppingRows = {
+    positionsNm: [],
+    weights: columns.map(() => []),
+    problems: [],
+    warnings: [],
+  };
   for (const row of rows) {
     readDepth(table, row, options.depthUnit, result);
     if (row === closing) continue;
@@ -48,7 +53,9 @@ function closingRow(rows: readonly TableRow[]): TableRow | null {
 function readDepth(table: Table, row: TableRow, unit: DepthUnit, result: StoppingRows): void {
   const cell = row.cells[0] ?? '';
   const complain = (sentence: string) =>
-    result.problems.push(fileProblem({ fileName: table.fileName, line: row.line, column: 1 }, sentence));
+    result.problems.push(
+      fileProblem({ fileName: table.fileName, line: row.line, column: 1 }, sentence),
+    );
   const value = parseNumber(cell, table.decimal);
   if (value === null) {
     complain(whyNotANumber(cell, table.decimal, 'the depth'));
@@ -58,7 +65,9 @@ function readDepth(table: Table, row: TableRow, unit: DepthUnit, result: Stoppin
   const before = result.positionsNm.at(-1);
   if (depthNm < 0) complain(`expected a depth of 0 or more, found ${cell}.`);
   else if (before !== undefined && depthNm <= before) {
-    complain(`expected depths in ascending order, found ${cell} after ${short(before / NM_PER[unit])}.`);
+    complain(
+      `expected depths in ascending order, found ${cell} after ${short(before / NM_PER[unit])}.`,
+    );
   }
   // Kept even when out of order, so that one misplaced line is not reported again by all that follow.
   result.positionsNm.push(depthNm);
@@ -92,29 +101,49 @@ function closeLastBin({ fileName }: Table, { positionsNm, warnings }: StoppingRo
   );
 }
 
-function checkAmount({ fileName, headerLine }: Table, rows: readonly TableRow[], { weights, problems }: StoppingRows): void {
+function checkAmount(
+  { fileName, headerLine }: Table,
+  rows: readonly TableRow[],
+  { weights, problems }: StoppingRows,
+): void {
   const bins = weights[0]?.length ?? 0;
   if (bins > MAX_BINS) {
     const line = rows[MAX_BINS]?.line ?? null;
-    problems.push(fileProblem({ fileName, line }, `expected at most ${MAX_BINS} depth bins, found ${bins}.`));
+    problems.push(
+      fileProblem({ fileName, line }, `expected at most ${MAX_BINS} depth bins, found ${bins}.`),
+    );
   } else if (bins < 2) {
     const line = rows[0]?.line ?? headerLine;
-    problems.push(fileProblem({ fileName, line }, `expected at least two depth bins, found ${bins}.`));
+    problems.push(
+      fileProblem({ fileName, line }, `expected at least two depth bins, found ${bins}.`),
+    );
   }
 }
 
 /** More than this share of the stops in the last bin means that the depths end too early (common practice, no source). */
 const LAST_BIN_SHARE = 0.005;
 
-function checkColumns(table: Table, columns: readonly StoppingColumn[], result: StoppingRows): void {
+function checkColumns(
+  table: Table,
+  columns: readonly StoppingColumn[],
+  result: StoppingRows,
+): void {
   columns.forEach(({ column, energyKeV }, index) => {
     const weights = result.weights[index] ?? [];
     const total = weights.reduce((sum, weight) => sum + weight, 0);
     if (total === 0) {
-      const place = { fileName: table.fileName, line: table.rows[0]?.line ?? null, column: column + 1 };
-      result.problems.push(fileProblem(place, `expected some counts at ${energyKeV} keV, found zero on every line.`));
+      const place = {
+        fileName: table.fileName,
+        line: table.rows[0]?.line ?? null,
+        column: column + 1,
+      };
+      result.problems.push(
+        fileProblem(place, `expected some counts at ${energyKeV} keV, found zero on every line.`),
+      );
     } else if ((weights.at(-1) ?? 0) > LAST_BIN_SHARE * total) {
-      result.warnings.push(`${table.fileName}: at ${energyKeV} keV muons still stop in the last bin; the depths may end too early.`);
+      result.warnings.push(
+        `${table.fileName}: at ${energyKeV} keV muons still stop in the last bin; the depths may end too early.`,
+      );
     }
   });
 }

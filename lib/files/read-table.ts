@@ -21,20 +21,31 @@ export function readTable(
 ): ReadTableResult {
   const decoded = decodeText(fileName, bytes);
   if (!decoded.ok) return { ok: false, problems: [decoded.problem] };
-  const format = detectFormat(decoded.lines.filter((line) => !/^\s*[#%;]/.test(line)), options);
+  const format = detectFormat(
+    decoded.lines.filter((line) => !/^\s*[#%;]/.test(line)),
+    options,
+  );
   const { lines, comments } = takeComments(decoded.lines, format);
   const { rows, badQuotes } = splitRows(lines, format.delimiter);
   if (badQuotes.length > 0) {
     return { ok: false, problems: badQuotes.map((line) => quoteProblem(fileName, line)) };
   }
   if (rows.length === 0) {
-    return { ok: false, problems: [fileProblem({ fileName }, 'the file holds comments only; expected lines of numbers.')] };
+    return {
+      ok: false,
+      problems: [
+        fileProblem({ fileName }, 'the file holds comments only; expected lines of numbers.'),
+      ],
+    };
   }
   return { ok: true, table: toTable(fileName, format, rows, comments) };
 }
 
 function quoteProblem(fileName: string, line: number): FileProblem {
-  return fileProblem({ fileName, line }, 'a cell opens with a double quote that is not closed properly.');
+  return fileProblem(
+    { fileName, line },
+    'a cell opens with a double quote that is not closed properly.',
+  );
 }
 
 interface WithoutComments {
@@ -45,7 +56,8 @@ interface WithoutComments {
 
 function takeComments(original: readonly string[], format: Format): WithoutComments {
   const comments: Table['comments'] = [];
-  const keep = (line: number, text: string) => comments.push({ line, text: text.replace(/^[\s#%;]+/, '').trim() });
+  const keep = (line: number, text: string) =>
+    comments.push({ line, text: text.replace(/^[\s#%;]+/, '').trim() });
   const lines = original.map((text, index) => {
     if (isComment(text, format)) {
       keep(index + 1, text);
@@ -100,7 +112,9 @@ function filledLength(cells: readonly string[]): number {
  */
 function looksLikeHeader(cells: readonly string[], decimal: Decimal): boolean {
   const filled = cells.filter((cell) => cell !== '');
-  const words = filled.filter((cell) => parseNumber(cell, decimal) === null && !saysNotANumber(cell));
+  const words = filled.filter(
+    (cell) => parseNumber(cell, decimal) === null && !saysNotANumber(cell),
+  );
   if (words.length === 0) return false;
   return words.length === filled.length || HEADING.depth.test((cells[0] ?? '').toLowerCase());
 }

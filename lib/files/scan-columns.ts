@@ -42,7 +42,11 @@ export function guessScanColumns(table: Table): ScanColumns | null {
   };
   if (guess.energy === null || guess.value === null || guess.sigma === null) return null;
   const columns = { energy: guess.energy, value: guess.value, sigma: guess.sigma };
-  return { ...columns, counts: counts ?? findCounts(table, taken), note: note ?? findWords(table, taken) };
+  return {
+    ...columns,
+    counts: counts ?? findCounts(table, taken),
+    note: note ?? findWords(table, taken),
+  };
 }
 
 /** eV when the heading says so, or when the numbers are too large for keV. */
@@ -62,7 +66,9 @@ function findHeading(table: Table, pattern: RegExp, taken: ReadonlySet<number>):
 }
 
 function columnsLeft(table: Table, taken: ReadonlySet<number>): number[] {
-  return Array.from({ length: table.columnCount }, (_, index) => index).filter((index) => !taken.has(index));
+  return Array.from({ length: table.columnCount }, (_, index) => index).filter(
+    (index) => !taken.has(index),
+  );
 }
 
 function numbersIn(table: Table, column: number): number[] {
@@ -74,7 +80,9 @@ function numbersIn(table: Table, column: number): number[] {
 /** The next column that is mostly numbers: one bad cell must not push a column aside. */
 function findNumbers(table: Table, taken: ReadonlySet<number>): number | null {
   const enough = table.rows.length / 2;
-  return columnsLeft(table, taken).find((column) => numbersIn(table, column).length > enough) ?? null;
+  return (
+    columnsLeft(table, taken).find((column) => numbersIn(table, column).length > enough) ?? null
+  );
 }
 
 function findCounts(table: Table, taken: Set<number>): number | null {

@@ -36,17 +36,26 @@ const MOST_ROWS_LOOKED_AT = 5 * MAX_ENERGIES;
  * with σ_F = σ_A/A_max. A row with a fault gives problems and no point; the scan may be stored only
  * when `problems` is empty.
  */
-export function readScan(table: Table, columns: ScanColumns, options: ScanReadOptions): ScanReading {
+export function readScan(
+  table: Table,
+  columns: ScanColumns,
+  options: ScanReadOptions,
+): ScanReading {
   const reading: ScanReading = {
     points: [],
     problems: [],
-    asymmetryScaleError: options.asymmetry ? options.asymmetry.sigma / options.asymmetry.maximum : null,
+    asymmetryScaleError: options.asymmetry
+      ? options.asymmetry.sigma / options.asymmetry.maximum
+      : null,
   };
   const skipped = new Set(options.skipLines ?? []);
   const rows = table.rows.filter((row) => !skipped.has(row.line));
   for (const row of rows.slice(0, MOST_ROWS_LOOKED_AT)) {
     const { point, problems } = readRow(table, row, columns, options);
-    reading.problems.push(...problems, ...(point ? clashes(table, point, columns, reading.points) : []));
+    reading.problems.push(
+      ...problems,
+      ...(point ? clashes(table, point, columns, reading.points) : []),
+    );
     if (point) reading.points.push(point);
   }
   reading.problems.push(...wholeScanProblems(table, rows, options));
@@ -76,7 +85,10 @@ function readRow(
   const energy = read(columns.energy, 'the energy');
   const value = read(columns.value, options.observable === 'rate' ? 'the rate' : 'the fraction');
   const sigma = read(columns.sigma, 'σ');
-  const counts = columns.counts === null || (row.cells[columns.counts] ?? '') === '' ? null : read(columns.counts, 'the counts');
+  const counts =
+    columns.counts === null || (row.cells[columns.counts] ?? '') === ''
+      ? null
+      : read(columns.counts, 'the counts');
   if (energy !== null && energy <= 0) {
     complain(columns.energy, `expected an energy above 0 ${options.energyUnit}, found ${energy}.`);
   }
@@ -106,12 +118,16 @@ function readRow(
 }
 
 /** A value that noise cannot have carried out of its range; null when it may stand. */
-function whyOutside({ value, sigma }: ScanPoint, { observable, asymmetry }: ScanReadOptions): string | null {
+function whyOutside(
+  { value, sigma }: ScanPoint,
+  { observable, asymmetry }: ScanReadOptions,
+): string | null {
   const below = value < -NOISE_SIGMAS * sigma;
   const above = observable === 'fraction' && value > 1 + NOISE_SIGMAS * sigma;
   if (!below && !above) return null;
   const found = `found ${short(value)} ± ${short(sigma)}`;
-  if (observable === 'rate') return `expected a rate of 0 or more within ${NOISE_SIGMAS} σ, ${found}.`;
+  if (observable === 'rate')
+    return `expected a rate of 0 or more within ${NOISE_SIGMAS} σ, ${found}.`;
   const name = asymmetry ? 'amplitude over largest asymmetry' : 'fraction';
   return `expected a ${name} between 0 and 1 within ${NOISE_SIGMAS} σ, ${found}.`;
 }
@@ -153,7 +169,12 @@ function wholeScanProblems(
   return problems;
 }
 
-function rowProblem(fileName: string, line: number, column: number | null, sentence: string): RowProblem {
+function rowProblem(
+  fileName: string,
+  line: number,
+  column: number | null,
+  sentence: string,
+): RowProblem {
   const place = { fileName, line, column: column === null ? null : column + 1 };
   return { ...fileProblem(place, sentence), line };
 }

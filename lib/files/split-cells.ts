@@ -13,7 +13,10 @@ function splitBlanks(line: string): string[] {
 /** Cells of a single line, trimmed. */
 export function splitLine(line: string, delimiter: Delimiter): string[] {
   if (delimiter === 'blanks') return splitBlanks(line);
-  const [cells = []] = Papa.parse<string[]>(line, { delimiter: CHARACTER[delimiter], newline: '\n' }).data;
+  const [cells = []] = Papa.parse<string[]>(line, {
+    delimiter: CHARACTER[delimiter],
+    newline: '\n',
+  }).data;
   return cells.map((cell) => cell.trim());
 }
 

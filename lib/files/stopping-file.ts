@@ -62,14 +62,29 @@ function tableProblems(tables: readonly Table[]): FileProblem[] {
     const { fileName, rows, columnCount } = table;
     const line = rows[0]?.line ?? table.headerLine;
     if (columnCount < 2) {
-      return [fileProblem({ fileName, line }, 'expected a depth column and at least one column of counts, found one column.')];
+      return [
+        fileProblem(
+          { fileName, line },
+          'expected a depth column and at least one column of counts, found one column.',
+        ),
+      ];
     }
     const tooLong = rows[MAX_BINS + 1];
     if (tooLong) {
-      return [fileProblem({ fileName, line: tooLong.line }, `expected at most ${MAX_BINS} depth bins, found ${rows.length} lines of data.`)];
+      return [
+        fileProblem(
+          { fileName, line: tooLong.line },
+          `expected at most ${MAX_BINS} depth bins, found ${rows.length} lines of data.`,
+        ),
+      ];
     }
     return rows.length < 2
-      ? [fileProblem({ fileName, line }, `expected at least two lines of depth and counts, found ${rows.length}.`)]
+      ? [
+          fileProblem(
+            { fileName, line },
+            `expected at least two lines of depth and counts, found ${rows.length}.`,
+          ),
+        ]
       : [];
   });
 }
@@ -77,8 +92,14 @@ function tableProblems(tables: readonly Table[]): FileProblem[] {
 function energyProblems(columns: readonly StoppingColumn[]): FileProblem[] {
   const tooMany = columns[MAX_ENERGIES];
   if (tooMany) {
-    const place = { fileName: tooMany.table.fileName, line: tooMany.table.headerLine, column: tooMany.column + 1 };
-    return [fileProblem(place, `expected at most ${MAX_ENERGIES} energies, found ${columns.length}.`)];
+    const place = {
+      fileName: tooMany.table.fileName,
+      line: tooMany.table.headerLine,
+      column: tooMany.column + 1,
+    };
+    return [
+      fileProblem(place, `expected at most ${MAX_ENERGIES} energies, found ${columns.length}.`),
+    ];
   }
   const headless = new Set<Table>();
   return columns.flatMap((column, index) => {
@@ -88,13 +109,23 @@ function energyProblems(columns: readonly StoppingColumn[]): FileProblem[] {
       if (!table.header) headless.add(table);
       return [noEnergy(column)];
     }
-    if (energyKeV <= 0) return [atHeading(column, `expected an energy above 0 keV, found ${energyKeV}.`)];
+    if (energyKeV <= 0)
+      return [atHeading(column, `expected an energy above 0 keV, found ${energyKeV}.`)];
     const twin = columns
       .slice(0, index)
-      .find((other) => other.energyKeV !== null && Math.abs(other.energyKeV - energyKeV) <= SAME_ENERGY * energyKeV);
+      .find(
+        (other) =>
+          other.energyKeV !== null &&
+          Math.abs(other.energyKeV - energyKeV) <= SAME_ENERGY * energyKeV,
+      );
     if (!twin) return [];
     const where = twin.table === table ? `column ${twin.column + 1}` : twin.table.fileName;
-    return [atHeading(column, `expected each energy once, found ${energyKeV} keV again; ${where} has it already.`)];
+    return [
+      atHeading(
+        column,
+        `expected each energy once, found ${energyKeV} keV again; ${where} has it already.`,
+      ),
+    ];
   });
 }
 
@@ -113,7 +144,10 @@ function noEnergy(column: StoppingColumn): FileProblem {
     );
   }
   const heading = table.header[column.column] ?? '';
-  return atHeading(column, `expected a heading with an energy (such as “12.5 keV”), found "${heading}".`);
+  return atHeading(
+    column,
+    `expected a heading with an energy (such as “12.5 keV”), found "${heading}".`,
+  );
 }
 
 function atHeading({ table, column }: StoppingColumn, sentence: string): FileProblem {

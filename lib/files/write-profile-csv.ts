@@ -36,16 +36,30 @@ export function profileCsv(input: ProfileCsvInput): string {
   return csvText([...input.head, ...aboutTheColumns(input, isShare)], columns, rows);
 }
 
-function aboutTheColumns({ profile, depthUnit, concentrationUnit, grid }: ProfileCsvInput, isShare: boolean): HeadLine[] {
+function aboutTheColumns(
+  { profile, depthUnit, concentrationUnit, grid }: ProfileCsvInput,
+  isShare: boolean,
+): HeadLine[] {
   const bands = { bootstrap: 'parametric bootstrap', delta: 'delta method' } as const;
   const reach = Number((profile.reachNm * DEPTH_PER_NM[depthUnit]).toPrecision(6));
   return [
     ['depth unit', `${depthUnit} below the semiconductor surface`],
-    ['value', isShare ? 'populated share of the carriers, 0 to 1, without unit' : `concentration of carriers in ${concentrationUnit}`],
+    [
+      'value',
+      isShare
+        ? 'populated share of the carriers, 0 to 1, without unit'
+        : `concentration of carriers in ${concentrationUnit}`,
+    ],
     ['grid', grid],
     ['bands', profile.bands ? `68 % and 95 %, ${bands[profile.bands]}, pointwise` : 'none'],
     ['reach', `${reach} ${depthUnit}; deeper points are flagged "beyond reach"`],
-    ['carriers, not doping', 'the value is that of carriers and never of doping; inside a depletion layer the two differ'],
-    ['caution', 'a fitted profile is a model-dependent estimate, valid only within its reach; it does not replace process qualification'],
+    [
+      'carriers, not doping',
+      'the value is that of carriers and never of doping; inside a depletion layer the two differ',
+    ],
+    [
+      'caution',
+      'a fitted profile is a model-dependent estimate, valid only within its reach; it does not replace process qualification',
+    ],
   ];
 }
