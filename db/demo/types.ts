@@ -1,18 +1,13 @@
-import type { ScanColumns, ScanReadOptions } from '@/lib/files/scan-file';
-import type { StoppingReadOptions } from '@/lib/files/stopping-file';
-import type {
-  CarrierScale,
-  Observable,
-  ParameterName,
-  ParameterSetting,
-  Polarity,
-  ProfileKind,
-  Response,
-} from '@/lib/inversion/index';
+import type { Role } from '@/lib/schemas/common';
+import type { FitSpec } from '@/lib/schemas/fit';
+import type { SampleInput } from '@/lib/schemas/sample';
+import type { ScanMeta, ScanReading } from '@/lib/schemas/scan';
+import type { StoppingMeta, StoppingReading } from '@/lib/schemas/stopping-set';
 
 /**
- * What the demo generator hands to the seed: plain data, no ids. Things refer to each other by
- * `key`. Every number comes from a formula and the seed, and everything carries `invented: true`.
+ * What the demo generator hands to the seed: plain data in the shapes that the verbs take, without
+ * ids. Things refer to each other by `key`. Every number comes from a formula and the seed, and
+ * everything carries `invented: true`.
  */
 export interface DemoData {
   seed: number;
@@ -30,7 +25,7 @@ export interface DemoPerson {
   key: string;
   name: string;
   email: string;
-  role: 'owner' | 'analyst' | 'reviewer' | 'modeller';
+  role: Role;
   invented: true;
 }
 
@@ -42,85 +37,48 @@ export interface DemoFile {
 
 export interface DemoSample {
   key: string;
-  name: string;
-  material: string;
-  /** n: electrons, p: holes. */
-  carrierType: 'n' | 'p';
-  dopingPerCm3: number;
-  dopingSigmaPerCm3: number;
-  capMaterial: string;
-  capThicknessNm: number;
-  treatment: string;
-  notes: string;
+  input: SampleInput;
   invented: true;
 }
 
 export interface DemoStoppingSet {
   key: string;
-  name: string;
-  layerStack: string;
-  capThicknessNm: number;
+  meta: StoppingMeta;
+  /** In the order of `reading.files`. */
   files: readonly DemoFile[];
-  /** Options with which lib/files/stopping-file reads `files` without a problem. */
-  readAs: StoppingReadOptions;
-  notes: string;
+  reading: StoppingReading;
   invented: true;
 }
-
-export type DemoIllumination = 'dark' | 'ultraviolet lamp' | 'after lamp';
 
 export interface DemoScan {
   key: string;
   sampleKey: string;
-  name: string;
-  observable: Observable;
-  temperatureK: number;
-  fieldMillitesla: number;
-  illumination: DemoIllumination;
-  gateBiasV: number | null;
-  /** Calendar day, YYYY-MM-DD. */
-  measuredOn: string;
+  meta: ScanMeta;
   file: DemoFile;
-  /** Columns and options with which lib/files/scan-file reads `file` without a problem. */
-  readAs: { columns: ScanColumns; options: ScanReadOptions };
-  notes: string;
+  reading: ScanReading;
   invented: true;
 }
 
-/** Where a comment points; `fit` is the whole of it. */
-export type DemoAnchor =
-  | { kind: 'fit' }
-  | { kind: 'point'; energyKeV: number }
-  | { kind: 'depth'; depthNm: number }
-  | { kind: 'check'; checkId: string };
-
-export interface DemoComment {
+/** One step in the history of a fit, in order. A return carries its reason, a comment may point at something. */
+export interface DemoReviewEvent {
+  kind: 'submitted' | 'comment' | 'accepted' | 'returned';
   byKey: string;
-  text: string;
-  anchor: DemoAnchor;
+  body: string;
+  /** Such as "point 14 keV", "depth 80 nm" or "check runs-test"; empty for the whole fit. */
+  target: string;
 }
 
 export interface DemoFit {
   key: string;
   name: string;
+  notes: string;
   scanKey: string;
   stoppingKey: string;
   authorKey: string;
   /** The fit that this one was made from; null for a first one. */
-  fromFitKey: string | null;
-  profile: ProfileKind;
-  polarity: Polarity;
-  response: Response;
-  carriers: CarrierScale;
-  capThicknessNm: number;
-  parameters: Partial<Record<ParameterName, ParameterSetting>>;
-  /** Energies (keV) of points that are switched off. */
-  switchedOffKeV: readonly number[];
-  resamples: number;
-  resampleSeed: number;
+  parentKey: string | null;
+  spec: FitSpec;
   outcome: 'draft' | 'submitted' | 'accepted' | 'returned';
-  comments: readonly DemoComment[];
-  /** Who decided and why; null for a draft or a fit still in review. */
-  decision: { byKey: string; reason: string } | null;
+  events: readonly DemoReviewEvent[];
   invented: true;
 }

@@ -32,10 +32,7 @@ export function readStoppingFiles(
   tables: readonly Table[],
   options: StoppingReadOptions,
 ): StoppingReading {
-  const named = stoppingColumns(tables).map((column, index) => ({
-    ...column,
-    energyKeV: options.energiesKeV?.[index] ?? column.energyKeV,
-  }));
+  const named = withGivenEnergies(tables, options.energiesKeV ?? []);
   const problems = [...tableProblems(tables), ...energyProblems(named)];
   if (problems.length > 0) return { set: null, problems, warnings: [] };
 
@@ -55,6 +52,20 @@ export function readStoppingFiles(
   }
   if (problems.length > 0) return { set: null, problems, warnings };
   return { set: createStoppingSet(profiles), problems, warnings };
+}
+
+/** Given energies are one per profile, or one per file when there are as many as files (a matrix ignores it). */
+function withGivenEnergies(
+  tables: readonly Table[],
+  given: readonly (number | null)[],
+): StoppingColumn[] {
+  const columns = stoppingColumns(tables);
+  const perFile = given.length === tables.length && given.length !== columns.length;
+  return columns.map((column, index) => {
+    const isAlone = columns.filter(({ table }) => table === column.table).length === 1;
+    const typed = perFile ? (isAlone ? given[tables.indexOf(column.table)] : null) : given[index];
+    return { ...column, energyKeV: typed ?? column.energyKeV };
+  });
 }
 
 function tableProblems(tables: readonly Table[]): FileProblem[] {
