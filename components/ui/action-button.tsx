@@ -1,0 +1,38 @@
+'use client';
+
+import { startTransition, useActionState, type ReactNode } from 'react';
+
+import { Button, type ButtonProps } from './button';
+import type { FormActionFunction } from './form-state';
+import { Mark } from './mark';
+
+type ActionButtonProps = Omit<ButtonProps, 'onClick' | 'pending' | 'type'> & {
+  action: FormActionFunction;
+  input: object;
+  pendingLabel?: ReactNode;
+};
+
+/** One press, one server action: archive, restore, end a session. A refusal shows beside the button. */
+export function ActionButton({
+  action,
+  input,
+  pendingLabel,
+  children,
+  ...rest
+}: ActionButtonProps) {
+  const [state, dispatch, pending] = useActionState(action, null);
+  return (
+    <span className="inline-flex flex-wrap items-center gap-2">
+      <Button {...rest} pending={pending} onClick={() => startTransition(() => dispatch(input))}>
+        {pending && pendingLabel ? pendingLabel : children}
+      </Button>
+      <span role="status">
+        {state?.ok === false && (
+          <span className="inline-flex items-center gap-1.5 text-[0.8125rem] text-coral-ink">
+            <Mark kind="problem" /> {state.message}
+          </span>
+        )}
+      </span>
+    </span>
+  );
+}
