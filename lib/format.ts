@@ -41,6 +41,16 @@ export function significant(value: number, digits = 3): string {
   return withDecimals(value, digits - 1 - exponent);
 }
 
+/** A number that a person set, with the digits they gave: "0.32", "1.1×10¹⁶". */
+export function asEntered(value: number): string {
+  const [mantissa = '0', exponent] = String(Number(value.toPrecision(12))).split('e');
+  if (exponent !== undefined)
+    return `${mantissa.replace('-', MINUS)}×${powerOfTen(Number(exponent))}`;
+  if (Math.abs(value) < 1e6) return mantissa.replace('-', MINUS);
+  const power = Math.floor(Math.log10(Math.abs(value)));
+  return `${asEntered(value / 10 ** power)}×${powerOfTen(power)}`;
+}
+
 export function powerOfTen(exponent: number): string {
   const raised = String(exponent).replace('-', '⁻');
   return `10${raised.replace(/\d/g, (digit) => SUPERSCRIPTS[Number(digit)] ?? digit)}`;

@@ -19,7 +19,10 @@ export function comparability(fits: readonly Fit[]): Comparability {
   if (!first) return { comparable: false, reason: 'There is no fit to compare.' };
   for (const other of others) {
     if (other.scanId !== first.scanId) {
-      return { comparable: false, reason: `“${other.name}” is a fit of another scan, ${other.scanName}.` };
+      return {
+        comparable: false,
+        reason: `“${other.name}” is a fit of another scan, ${other.scanName}.`,
+      };
     }
     if (other.hashes.points !== first.hashes.points) {
       return {

@@ -9,7 +9,14 @@ export function compareAddress(ids: readonly string[]): string {
 /** Ids in an address, in order, without blanks and repeats. */
 export function idsInAddress(value: string | string[] | undefined): string[] {
   const joined = Array.isArray(value) ? value.join(',') : (value ?? '');
-  return [...new Set(joined.split(',').map((id) => id.trim()).filter((id) => id !== ''))];
+  return [
+    ...new Set(
+      joined
+        .split(',')
+        .map((id) => id.trim())
+        .filter((id) => id !== ''),
+    ),
+  ];
 }
 
 export function withFirst(ids: readonly string[], id: string): string[] {

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 
 import {
+  asEntered,
   decimalsFor,
   intervalParts,
   powerOfTen,
@@ -62,4 +63,16 @@ describe('intervals', () => {
   it('falls back to three digits when there is no interval', () => {
     expect(withInterval(78.412, [null, null])).toBe('78.4');
   });
+});
+
+it('keeps the digits of a number that a person set', () => {
+  expect([0.32, 25, 0, -0.5, 1.1e16, 1.25e-6, 5.32e-7].map(asEntered)).toEqual([
+    '0.32',
+    '25',
+    '0',
+    '−0.5',
+    '1.1×10¹⁶',
+    '0.00000125',
+    '5.32×10⁻⁷',
+  ]);
 });
