@@ -54,3 +54,6 @@ function rangeWords({ min, max, above }: { min?: number; max?: number; above?: n
 
 /** Moment in UTC as ISO 8601. */
 export const momentSchema = z.iso.datetime();
+
+/** Input of a verb that needs nothing but the row. */
+export const byIdSchema = z.object({ id: idSchema });

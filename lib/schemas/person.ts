@@ -32,6 +32,10 @@ export const acceptInvitationSchema = z.object({
   password: newPassword,
 });
 
+export const readInvitationSchema = acceptInvitationSchema.pick({ token: true });
+/** A session is named by the hash of its token. */
+export const revokeSessionSchema = z.object({ id: z.string().min(1).max(200) });
+
 export const invitationSchema = z.object({
   email: z.string(),
   role: roleSchema,

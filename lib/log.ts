@@ -1,0 +1,5 @@
+import { env } from '@/lib/env';
+import pino from 'pino';
+
+/** One line of JSON per event on standard output; `err` carries the whole chain of causes. */
+export const log = pino({ level: env.STRANDLINE_LOG_LEVEL, base: undefined });
