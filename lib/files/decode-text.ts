@@ -8,6 +8,8 @@ export type Decoded = { ok: true; lines: string[] } | { ok: false; problem: File
  * Refuses what is too large, empty, binary, or in another encoding, each with its own sentence.
  */
 export function decodeText(fileName: string, bytes: Uint8Array): Decoded {
+  const tooLarge = sizeProblem(fileName, bytes.length);
+  if (tooLarge) return { ok: false, problem: tooLarge };
   const reason = whyNotText(bytes);
   if (reason !== null) return { ok: false, problem: fileProblem({ fileName }, reason) };
   try {
@@ -26,11 +28,16 @@ export function decodeText(fileName: string, bytes: Uint8Array): Decoded {
   }
 }
 
+/** Whether a file is too large to be taken in; its size is enough to tell, so no byte need be read. */
+export function sizeProblem(fileName: string, byteLength: number): FileProblem | null {
+  if (byteLength <= MAX_FILE_BYTES) return null;
+  const limit = megabytes(MAX_FILE_BYTES);
+  const sentence = `the file has ${megabytes(byteLength)} MB; the limit is ${limit} MB.`;
+  return fileProblem({ fileName }, sentence);
+}
+
 function whyNotText(bytes: Uint8Array): string | null {
   if (bytes.length === 0) return 'the file is empty.';
-  if (bytes.length > MAX_FILE_BYTES) {
-    return `the file has ${megabytes(bytes.length)} MB; the limit is ${megabytes(MAX_FILE_BYTES)} MB.`;
-  }
   const [first, second, third] = bytes;
   if ((first === 0xff && second === 0xfe) || (first === 0xfe && second === 0xff)) {
     return 'the file is UTF-16 text; save it as UTF-8 (in a spreadsheet: “CSV UTF-8”).';
