@@ -6,20 +6,20 @@ import { Button, type ButtonProps } from './button';
 import type { FormActionFunction } from './form-state';
 import { Mark } from './mark';
 
-type ActionButtonProps = Omit<ButtonProps, 'onClick' | 'pending' | 'type'> & {
-  action: FormActionFunction;
+type ActionButtonProps<Answer> = Omit<ButtonProps, 'onClick' | 'pending' | 'type'> & {
+  action: FormActionFunction<Answer>;
   input: object;
   pendingLabel?: ReactNode;
 };
 
 /** One press, one server action: archive, restore, end a session. A refusal shows beside the button. */
-export function ActionButton({
+export function ActionButton<Answer>({
   action,
   input,
   pendingLabel,
   children,
   ...rest
-}: ActionButtonProps) {
+}: ActionButtonProps<Answer>) {
   const [state, dispatch, pending] = useActionState(action, null);
   return (
     <span className="inline-flex flex-wrap items-center gap-2">

@@ -14,7 +14,7 @@ import { DialogSheet } from './dialog-parts';
 import type { FormActionFunction, FormState } from './form-state';
 import { Notice } from './notice';
 
-type ConfirmDialogProps = {
+type ConfirmDialogProps<Answer> = {
   trigger: ReactElement;
   /** A question: "Discard this fit?" */
   title: ReactNode;
@@ -22,7 +22,7 @@ type ConfirmDialogProps = {
   confirmLabel: ReactNode;
   cancelLabel?: ReactNode;
   /** Server action, or any function of the same form. */
-  action: FormActionFunction;
+  action: FormActionFunction<Answer>;
   input: object;
   onDone?: () => void;
   variant?: 'danger' | 'primary';
@@ -31,7 +31,7 @@ type ConfirmDialogProps = {
 };
 
 /** Asks before what cannot be undone. It stays open, with the reason, when the server refuses. */
-export function ConfirmDialog({
+export function ConfirmDialog<Answer>({
   trigger,
   title,
   confirmLabel,
@@ -41,9 +41,9 @@ export function ConfirmDialog({
   onDone,
   variant = 'danger',
   children,
-}: ConfirmDialogProps) {
+}: ConfirmDialogProps<Answer>) {
   const [open, setOpen] = useState(false);
-  const [state, confirm, pending] = useActionState(async (previous: FormState) => {
+  const [state, confirm, pending] = useActionState(async (previous: FormState<Answer>) => {
     const answer = await action(previous, input);
     if (answer?.ok) {
       setOpen(false);

@@ -1,10 +1,10 @@
 /** What a form's server action answers; null before the first try. */
-export type FormState =
-  | { ok: true; answer?: unknown }
+export type FormState<Answer = unknown> =
+  | { ok: true; answer?: Answer }
   | { ok: false; message: string; fields: Record<string, string> }
   | null;
 
-export type FormActionFunction = (
-  previous: FormState,
+export type FormActionFunction<Answer = unknown> = (
+  previous: FormState<Answer>,
   data: FormData | object,
-) => Promise<FormState>;
+) => Promise<FormState<Answer>>;

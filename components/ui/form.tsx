@@ -14,14 +14,14 @@ import { FormContext } from './form-context';
 import type { FormActionFunction, FormState } from './form-state';
 import { Notice } from './notice';
 
-type FormProps = {
-  action: FormActionFunction;
+type FormProps<Answer> = {
+  action: FormActionFunction<Answer>;
   /** Accessible name, where no heading names the form. */
   label?: string;
   labelledBy?: string;
   className?: string;
   /** Called once with each answer that went well. */
-  onDone?: (state: Extract<FormState, { ok: true }>) => void;
+  onDone?: (answer: Answer | undefined) => void;
   children: ReactNode;
 };
 
@@ -29,11 +29,18 @@ type FormProps = {
  * A form over a server action. Fields with a `name` find their own error in the answer; the first
  * wrong field takes the focus.
  */
-export function Form({ action, label, labelledBy, className, onDone, children }: FormProps) {
+export function Form<Answer>({
+  action,
+  label,
+  labelledBy,
+  className,
+  onDone,
+  children,
+}: FormProps<Answer>) {
   const [state, dispatch, pending] = useActionState(action, null);
   const form = useRef<HTMLFormElement>(null);
-  const handleAnswer = useEffectEvent((answer: FormState) => {
-    if (answer?.ok) onDone?.(answer);
+  const handleAnswer = useEffectEvent((answer: FormState<Answer>) => {
+    if (answer?.ok) onDone?.(answer.answer);
     if (answer?.ok === false) focusFirstError(form.current);
   });
   useEffect(() => handleAnswer(state), [state]);
