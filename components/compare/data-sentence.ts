@@ -1,4 +1,4 @@
-import { significant, withDecimals } from '@/lib/format';
+import { formatProbability, withDecimals } from '@/lib/format';
 import type { Fit } from '@/lib/schemas/fit';
 
 import type { Comparability } from './comparability';
@@ -50,7 +50,7 @@ export function dataSentences(
 }
 
 export function widthSentence({ statistic, pValue, sigmas, graded, sharp }: WidthTest): string {
-  const figures = `χ² falls by ${withDecimals(statistic, 1)}, p = ${probability(pValue)}`;
+  const figures = `χ² falls by ${withDecimals(statistic, 1)}, p ${isProbability(pValue)}`;
   if (pValue > 0.05) {
     return `The data do not tell a graded edge from a sharp one: “${graded.name}” fits no better than “${sharp.name}” by more than chance allows (${figures}).`;
   }
@@ -85,11 +85,12 @@ function poorSentence(fits: readonly Fit[]): string[] {
   const best = Math.max(...judged);
   if (judged.length < fits.length || best >= POOR_FIT) return [];
   return [
-    `None of these fits describes the scan within its error bars (best p = ${probability(best)}): a ranking among them only says which one misses by least.`,
+    `None of these fits describes the scan within its error bars (best p ${isProbability(best)}): a ranking among them only says which one misses by least.`,
   ];
 }
 
-/** p as people read it: two digits, and never a bare 0. */
-export function probability(p: number): string {
-  return p < 1e-4 ? 'less than 0.0001' : significant(p, 2);
+/** "= 0.27", or "below 0.0001" where the digits would mean nothing. */
+function isProbability(p: number): string {
+  const words = formatProbability(p);
+  return words.startsWith('below') ? words : `= ${words}`;
 }
