@@ -1,0 +1,5 @@
+import { expose } from 'comlink';
+
+import { createInversionService } from './service';
+
+expose(createInversionService());
