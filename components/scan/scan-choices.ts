@@ -1,3 +1,4 @@
+import { typedNumber } from '@/components/upload/typed-number';
 import { guessEnergyUnit, guessScanColumns, readScan, type ScanColumns, type ScanReading } from '@/lib/files/scan-file';
 import type { Decimal, Delimiter, Table } from '@/lib/files/table';
 import type { Scan, ScanReading as ScanReadingSent } from '@/lib/schemas/scan';
@@ -89,16 +90,11 @@ function settledColumns(match: ColumnMatch): ScanColumns | string {
 /** Maximum asymmetry and σ as typed; null when the values are no amplitudes; a sentence when it is not settled. */
 function readAmplitudes({ on, maximum, sigma }: ScanChoices['amplitudes']): { maximum: number; sigma: number } | string | null {
   if (!on) return null;
-  const limit = decimalOf(maximum);
+  const limit = typedNumber(maximum) ?? Number.NaN;
   if (!(limit > 0 && limit <= 1)) return 'Write the maximum asymmetry: a number above 0 and at most 1.';
-  const spread = decimalOf(sigma);
+  const spread = typedNumber(sigma) ?? Number.NaN;
   if (!(spread >= 0 && spread <= 1)) return 'Write σ of the maximum asymmetry: a number from 0 to 1.';
   return { maximum: limit, sigma: spread };
-}
-
-/** A typed number with a decimal point or comma; blank is NaN, never zero. */
-function decimalOf(text: string): number {
-  return text.trim() === '' ? Number.NaN : Number(text.trim().replace(',', '.'));
 }
 
 function whyBlocked({ problems, points }: ScanReading): string | null {
