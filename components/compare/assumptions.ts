@@ -108,7 +108,7 @@ function isTold(name: ParameterName, fits: readonly Fit[]): boolean {
   return true;
 }
 
-function settingLabel(name: ParameterName): string {
+export function settingLabel(name: ParameterName): string {
   const words: Record<ParameterName, string> = {
     edgeDepthNm: 'Edge depth',
     edgeWidthNm: 'Edge width (σ)',
