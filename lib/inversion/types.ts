@@ -51,12 +51,7 @@ export type Response =
 export type ResponseKind = Response['kind'];
 
 export type ParameterName =
-  | 'edgeDepthNm'
-  | 'edgeWidthNm'
-  | 'levelTop'
-  | 'levelBulk'
-  | 'levelCap'
-  | 'depthScale';
+  'edgeDepthNm' | 'edgeWidthNm' | 'levelTop' | 'levelBulk' | 'levelCap' | 'depthScale';
 
 export interface GaussianPrior {
   mean: number;
@@ -114,7 +109,12 @@ export interface FitParameter {
 }
 
 export type Covariance =
-  | { ok: true; names: readonly ParameterName[]; matrix: readonly (readonly number[])[]; correlation: readonly (readonly number[])[] }
+  | {
+      ok: true;
+      names: readonly ParameterName[];
+      matrix: readonly (readonly number[])[];
+      correlation: readonly (readonly number[])[];
+    }
   | { ok: false; reason: string };
 
 export type FitStatus = 'converged' | 'stalled' | 'iteration-limit';

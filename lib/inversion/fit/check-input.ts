@@ -1,0 +1,113 @@
+import { MAX_ENERGIES } from '../constants';
+import { InversionError } from '../errors';
+import { RESPONSES } from '../response/responses';
+import { sameEnergy } from '../stopping/same-energy';
+import type { FitInput } from '../types';
+
+/** @throws InversionError with one clear sentence for whatever a fit cannot start from. */
+export function checkInput(input: FitInput): void {
+  checkPoints(input);
+  checkResponse(input);
+  checkCarriers(input);
+  if (!(input.capThicknessNm >= 0 && Number.isFinite(input.capThicknessNm))) {
+    throw new InversionError(
+      'bad-cap',
+      `The cap layer cannot be ${input.capThicknessNm} nm thick.`,
+    );
+  }
+  if (input.stopping.profiles.length === 0) {
+    throw new InversionError(
+      'empty-stopping-set',
+      'A fit needs a stopping set with at least one stopping profile.',
+    );
+  }
+}
+
+function checkPoints({ points }: FitInput): void {
+  if (points.length === 0) throw new InversionError('empty-scan', 'The energy scan has no points.');
+  if (points.length > MAX_ENERGIES) {
+    throw new InversionError(
+      'too-many-points',
+      `The energy scan has ${points.length} points; at most ${MAX_ENERGIES} are taken.`,
+    );
+  }
+  points.forEach(({ energyKeV, value, sigma }, index) => {
+    const where = `Point ${index + 1} of the energy scan`;
+    if (!(energyKeV > 0 && Number.isFinite(energyKeV))) {
+      throw new InversionError(
+        'bad-energy',
+        `${where} has the energy ${energyKeV} keV; a positive number was expected.`,
+        { index },
+      );
+    }
+    if (!Number.isFinite(value)) {
+      throw new InversionError(
+        'bad-value',
+        `${where} (${energyKeV} keV) has the value ${value}; a finite number was expected.`,
+        { index },
+      );
+    }
+    if (!(sigma > 0 && Number.isFinite(sigma))) {
+      throw new InversionError(
+        'bad-sigma',
+        `${where} (${energyKeV} keV) has the uncertainty ${sigma}; a positive number was expected.`,
+        { index },
+      );
+    }
+  });
+  const sorted = points.map(({ energyKeV }) => energyKeV).sort((a, b) => a - b);
+  for (let i = 1; i < sorted.length; i++) {
+    if (sameEnergy(sorted[i]!, sorted[i - 1]!)) {
+      throw new InversionError(
+        'duplicate-energy',
+        `The energy scan holds ${sorted[i]!} keV twice.`,
+        { energyKeV: sorted[i]! },
+      );
+    }
+  }
+}
+
+function checkResponse({ response, observable }: FitInput): void {
+  if (RESPONSES[response.kind].observable !== observable) {
+    throw new InversionError(
+      'wrong-response',
+      observable === 'rate'
+        ? 'A scan of capture rates needs the capture-rate response.'
+        : 'A scan of fractions needs the two-level response.',
+    );
+  }
+  if (response.kind !== 'capture-rate') return;
+  const { gammaCm3PerS, gammaSigmaCm3PerS, baselinePerUs } = response;
+  if (!(gammaCm3PerS > 0 && Number.isFinite(gammaCm3PerS))) {
+    throw new InversionError(
+      'bad-gamma',
+      `The capture coefficient must be a positive number of cm³/s, not ${gammaCm3PerS}.`,
+    );
+  }
+  if (
+    gammaSigmaCm3PerS !== null &&
+    !(gammaSigmaCm3PerS >= 0 && Number.isFinite(gammaSigmaCm3PerS))
+  ) {
+    throw new InversionError(
+      'bad-gamma',
+      `The uncertainty of the capture coefficient cannot be ${gammaSigmaCm3PerS} cm³/s.`,
+    );
+  }
+  if (!(baselinePerUs >= 0 && Number.isFinite(baselinePerUs))) {
+    throw new InversionError(
+      'bad-baseline',
+      `The rate without carriers cannot be ${baselinePerUs} µs⁻¹.`,
+    );
+  }
+}
+
+function checkCarriers({ carriers }: FitInput): void {
+  for (const value of [carriers.bulkPerCm3, carriers.bulkSigmaPerCm3, carriers.topPerCm3]) {
+    if (value !== null && !(value >= 0 && Number.isFinite(value))) {
+      throw new InversionError(
+        'bad-concentration',
+        `A carrier concentration cannot be ${value} cm⁻³.`,
+      );
+    }
+  }
+}

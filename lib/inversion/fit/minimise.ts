@@ -1,0 +1,68 @@
+import { evaluate } from './evaluate';
+import { minimiseOnLine } from './minimise-on-line';
+import type { Problem } from './model';
+import { refine, type RefineResult, type RefineScratch } from './refine';
+
+/** Index of the edge whose borders χ² has kinks at. */
+const EDGE = 0;
+
+/**
+ * Local minimum of Φ over everything not held, θ improved in place. A smooth trial profile needs refine alone. For a
+ * sharp edge Φ has kinks where the edge crosses a bin border; there the edge is bracketed and minimised on a line with
+ * everything else re-optimised at each step.
+ */
+export function minimise(
+  problem: Problem,
+  theta: Float64Array,
+  held: Uint8Array,
+  scratch: MinimiseScratch,
+  options: { maxIterations: number; tolerance: number },
+): RefineResult {
+  const result = refine(problem, theta, held, scratch.refine, options);
+  if (!problem.model.trial.kinked || held[EDGE]) return result;
+  const { model } = problem;
+  const { inner, innerHeld } = scratch;
+  innerHeld.set(held);
+  innerHeld[EDGE] = 1;
+  inner.set(theta);
+  const linear = held[model.scaleIndex] === 1;
+  const at = (edgeNm: number): number => {
+    inner[EDGE] = edgeNm;
+    return linear
+      ? evaluate(problem, inner, innerHeld)
+      : refine(problem, inner, innerHeld, scratch.refine, options).chiSquare;
+  };
+  const span = 2 * binWidthAt(problem, theta);
+  const best = minimiseOnLine(
+    at,
+    Math.max(model.lower[EDGE]!, theta[EDGE]! - span),
+    theta[EDGE]!,
+    Math.min(model.upper[EDGE]!, theta[EDGE]! + span),
+    1e-9 * model.upper[EDGE]!,
+  );
+  if (best.value < result.chiSquare) {
+    result.chiSquare = at(best.x);
+    theta.set(inner);
+  }
+  evaluate(problem, theta, held);
+  return { ...result, converged: true, predictedReduction: Math.min(result.predictedReduction, 0) };
+}
+
+export interface MinimiseScratch {
+  refine: RefineScratch;
+  inner: Float64Array;
+  innerHeld: Uint8Array;
+}
+
+/** Widest bin round the edge, in depths of the profile. */
+function binWidthAt({ model }: Problem, theta: Float64Array): number {
+  const scale = theta[model.scaleIndex]!;
+  const u = (theta[EDGE]! + model.capNm) / scale;
+  let widest = 0;
+  for (const { edgesNm } of model.kernel.groups) {
+    let j = 1;
+    while (j < edgesNm.length - 1 && edgesNm[j]! < u) j++;
+    widest = Math.max(widest, edgesNm[j]! - edgesNm[j - 1]!);
+  }
+  return widest * scale;
+}

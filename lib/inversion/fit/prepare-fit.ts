@@ -1,0 +1,167 @@
+import { InversionError } from '../errors';
+import { compileKernel } from '../fold/kernel';
+import { TRIAL_PROFILES } from '../profile/trial-profiles';
+import { stoppingProfileAt } from '../stopping/stopping-profile-at';
+import type { FitInput, ScanPoint, StoppingProfile, StoppingSet } from '../types';
+import { checkInput } from './check-input';
+import { meanLevel } from './evaluate';
+import type { Data, Model } from './model';
+import { depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
+import type { PreparedFit } from './prepared-fit';
+import { createRefineScratch } from './refine';
+import { buildSearchGrid } from './search-grid';
+import { createWorkspace } from './workspace';
+
+/**
+ * Checks a fit input and compiles it to typed arrays.
+ *
+ * @throws InversionError for input that a fit cannot start from, and 'too-few-points' where the enabled points and priors
+ * are fewer than the free parameters.
+ */
+export function prepareFit(input: FitInput): PreparedFit {
+  const prepared = compileInput(input);
+  const observations = prepared.enabledCount + prepared.priorCount;
+  if (observations < prepared.freeNames.length) {
+    throw new InversionError(
+      'too-few-points',
+      `The fit has ${prepared.freeNames.length} free parameters but only ${prepared.enabledCount} points in use${
+        prepared.priorCount > 0 ? ` and ${prepared.priorCount} priors` : ''
+      }; hold parameters or add points.`,
+      {
+        freeParameters: prepared.freeNames.length,
+        points: prepared.enabledCount,
+        priors: prepared.priorCount,
+      },
+    );
+  }
+  return prepared;
+}
+
+/** prepareFit without the count of points: a template for simulation has none to fit. */
+export function compileInput(input: FitInput): PreparedFit {
+  checkInput(input);
+  const trial = TRIAL_PROFILES[input.profile];
+  const profiles = input.points.map((point) => profileOf(input.stopping, point));
+  const enabledCount = input.points.filter((point) => point.enabled).length;
+  if (enabledCount === 0)
+    throw new InversionError('empty-scan', 'Every point of the energy scan is switched off.');
+  const rows = rowsByEnergy(input.points, profiles);
+  const scaleSetting = depthScaleSetting(input);
+  const scale = scaleSetting.held ? (scaleSetting.value ?? 1) : scaleSetting.prior!.mean;
+  const deepestNm = deepestStop(input.points, profiles) * scale - input.capThicknessNm;
+  if (!(deepestNm > 0)) {
+    throw new InversionError(
+      'cap-too-thick',
+      `No muon passes the cap of ${input.capThicknessNm} nm at the energies in use.`,
+    );
+  }
+  const table = parameterTable(input, trial, deepestNm);
+  const model = compileModel(input, table, profiles, rows, deepestNm);
+  const data = compileData(input, table, rows);
+  const free = table.filter((row) => !row.held);
+  const size = table.length;
+  return {
+    input,
+    parameterNames: model.names,
+    freeNames: free.map((row) => row.name),
+    profiles,
+    deepestNm,
+    priorCount: free.filter((row) => row.prior !== null).length,
+    enabledCount,
+    problem: { model, data, work: createWorkspace(model), fallback: meanLevel(data) },
+    scratch: {
+      refine: createRefineScratch(size),
+      inner: new Float64Array(size),
+      innerHeld: new Uint8Array(size),
+    },
+    curves: { key: '', fold: null },
+  };
+}
+
+function profileOf(
+  stopping: StoppingSet,
+  { energyKeV, enabled }: ScanPoint,
+): StoppingProfile | null {
+  try {
+    return stoppingProfileAt(stopping, energyKeV);
+  } catch (error) {
+    if (!enabled && error instanceof InversionError && error.code === 'energy-outside-stopping-set')
+      return null;
+    throw error;
+  }
+}
+
+/** Points that have a stopping profile, in ascending energy: the order of a scan then changes nothing, to the last bit. */
+function rowsByEnergy(
+  points: readonly ScanPoint[],
+  profiles: readonly (StoppingProfile | null)[],
+): Int32Array {
+  const used = points.map((_, index) => index).filter((index) => profiles[index] !== null);
+  return Int32Array.from(used.sort((a, b) => points[a]!.energyKeV - points[b]!.energyKeV));
+}
+
+/** Last bin edge of the enabled points that still closes a bin with stops in it. */
+function deepestStop(
+  points: readonly ScanPoint[],
+  profiles: readonly (StoppingProfile | null)[],
+): number {
+  let deepest = 0;
+  profiles.forEach((profile, index) => {
+    if (!profile || !points[index]!.enabled) return;
+    let last = profile.mass.length;
+    while (last > 0 && profile.mass[last - 1] === 0) last--;
+    deepest = Math.max(deepest, profile.edgesNm[last]!);
+  });
+  return deepest;
+}
+
+function compileModel(
+  input: FitInput,
+  table: readonly ParameterRow[],
+  profiles: readonly (StoppingProfile | null)[],
+  rows: Int32Array,
+  deepestNm: number,
+): Model {
+  const trial = TRIAL_PROFILES[input.profile];
+  const kernel = compileKernel(Array.from(rows, (index) => profiles[index]!));
+  const shapeCount = trial.shapeNames.length;
+  const shapeHeld = (k: number): number | null =>
+    k < shapeCount && table[k]!.held ? table[k]!.neutral : null;
+  return {
+    rowCount: rows.length,
+    pointOfRow: rows,
+    kernel,
+    trial,
+    capNm: input.capThicknessNm,
+    names: table.map((row) => row.name),
+    size: table.length,
+    shapeCount,
+    levelCount: table.length - shapeCount - 1,
+    scaleIndex: table.length - 1,
+    lower: Float64Array.from(table, (row) => row.lower),
+    upper: Float64Array.from(table, (row) => row.upper),
+    held: Uint8Array.from(table, (row) => (row.held ? 1 : 0)),
+    neutral: Float64Array.from(table, (row) => row.neutral),
+    priorInverseSigma: Float64Array.from(table, (row) => (row.prior ? 1 / row.prior.sigma : 0)),
+    grid: buildSearchGrid({
+      kernel,
+      trial,
+      capNm: input.capThicknessNm,
+      scale: table[table.length - 1]!.neutral,
+      heldDepthNm: shapeHeld(0),
+      heldWidthNm: shapeHeld(1),
+      deepestNm,
+      enabled: Uint8Array.from(rows, (index) => (input.points[index]!.enabled ? 1 : 0)),
+    }),
+  };
+}
+
+function compileData({ points }: FitInput, table: readonly ParameterRow[], rows: Int32Array): Data {
+  return {
+    y: Float64Array.from(rows, (index) => points[index]!.value),
+    inverseSigma: Float64Array.from(rows, (index) =>
+      points[index]!.enabled ? 1 / points[index]!.sigma : 0,
+    ),
+    priorMean: Float64Array.from(table, (row) => row.prior?.mean ?? 0),
+  };
+}

@@ -1,0 +1,105 @@
+import { foldStart } from '../fold/fold-edge';
+import type { Kernel } from '../fold/kernel';
+import type { TrialProfile } from '../profile/trial-profile';
+import type { SearchGrid } from './model';
+import { createShareFold } from './workspace';
+
+/** Depth nodes of a graded edge; an edge moves the fold on the scale of the straggling, so tens of nodes find every valley. */
+const GRADED_DEPTHS = 32;
+/** Widths tried, as shares of the depth range: a step, then log-spaced. */
+const WIDTH_SHARES = [0, 0.012, 0.035, 0.09, 0.22, 0.5];
+/** A sharp edge is tried at every bin border and middle up to this many, else at this many depths. */
+const SHARP_DEPTHS = 640;
+
+export interface GridInput {
+  kernel: Kernel;
+  trial: TrialProfile;
+  capNm: number;
+  /** Neutral depth scale. */
+  scale: number;
+  /** Held depth and width, or null. */
+  heldDepthNm: number | null;
+  heldWidthNm: number | null;
+  deepestNm: number;
+  /** Rows that are used: they say where the stops are. */
+  enabled: Uint8Array;
+}
+
+/** Folds on the search lattice. Nodes lie denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
+export function buildSearchGrid(input: GridInput): SearchGrid {
+  const { kernel, trial, capNm, scale } = input;
+  const depths = input.heldDepthNm === null ? searchDepths(input) : [input.heldDepthNm];
+  const widths = trial.shapeNames.length < 2 ? [0] : searchWidths(input);
+  const shapeCount = trial.shapeNames.length;
+  const nodeCount = widths.length * depths.length;
+  const shapes = new Float64Array(nodeCount * shapeCount);
+  const shares = new Float64Array(nodeCount * kernel.rowCount);
+  const capShares = new Float64Array(kernel.rowCount);
+  if (capNm > 0) foldStart(kernel, capNm / scale, capShares, new Float64Array(kernel.rowCount));
+  const fold = createShareFold({ rowCount: kernel.rowCount, kernel, shapeCount });
+  let node = 0;
+  for (const width of widths) {
+    for (const depth of depths) {
+      const shape = shapes.subarray(node * shapeCount, (node + 1) * shapeCount);
+      shape[0] = depth;
+      if (shapeCount > 1) shape[1] = width;
+      trial.fold(kernel, shape, capNm, scale, fold);
+      shares.set(fold.share, node * kernel.rowCount);
+      node++;
+    }
+  }
+  return { nodeCount, shapes, shares, capShares, lattice: [widths.length, depths.length] };
+}
+
+function searchWidths({ heldWidthNm, deepestNm }: GridInput): number[] {
+  return heldWidthNm === null ? WIDTH_SHARES.map((share) => share * deepestNm) : [heldWidthNm];
+}
+
+function searchDepths(input: GridInput): number[] {
+  if (!input.trial.kinked) return blendedDepths(input, GRADED_DEPTHS);
+  const borders = binBorders(input);
+  return borders.length <= SHARP_DEPTHS ? borders : blendedDepths(input, SHARP_DEPTHS);
+}
+
+/** Every bin border and bin middle below the cap, in depths of the profile. */
+function binBorders({ kernel, capNm, scale, deepestNm }: GridInput): number[] {
+  const depths = new Set<number>([0, deepestNm]);
+  for (const { edgesNm } of kernel.groups) {
+    for (let j = 0; j < edgesNm.length; j++) {
+      depths.add(edgesNm[j]! * scale - capNm);
+      if (j > 0) depths.add(((edgesNm[j - 1]! + edgesNm[j]!) / 2) * scale - capNm);
+    }
+    if (depths.size > 4 * SHARP_DEPTHS) break;
+  }
+  return [...depths].filter((depth) => depth >= 0 && depth <= deepestNm).sort((a, b) => a - b);
+}
+
+function blendedDepths(
+  { kernel, capNm, scale, deepestNm, enabled }: GridInput,
+  count: number,
+): number[] {
+  const fine = 512;
+  const blend = new Float64Array(fine + 1);
+  const share = new Float64Array(kernel.rowCount);
+  const density = new Float64Array(kernel.rowCount);
+  for (let k = 0; k <= fine; k++) {
+    foldStart(kernel, (capNm + (deepestNm * k) / fine) / scale, share, density);
+    let sum = 0;
+    let used = 0;
+    for (let i = 0; i < share.length; i++) {
+      if (!enabled[i]) continue;
+      sum += share[i]!;
+      used++;
+    }
+    blend[k] = sum / used + k / fine;
+  }
+  const depths: number[] = [];
+  let k = 0;
+  for (let node = 0; node < count; node++) {
+    const goal = blend[0]! + ((blend[fine]! - blend[0]!) * node) / (count - 1);
+    while (k < fine - 1 && blend[k + 1]! < goal) k++;
+    const t = Math.min(1, Math.max(0, (goal - blend[k]!) / (blend[k + 1]! - blend[k]!)));
+    depths.push((deepestNm * (k + t)) / fine);
+  }
+  return depths;
+}

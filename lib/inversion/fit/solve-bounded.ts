@@ -1,0 +1,148 @@
+/** A pivot this much smaller than its diagonal is rounding: the unknown is then not determined. */
+const SINGULAR = 1e-12;
+
+const FREE = 0;
+const AT_LOWER = 1;
+const AT_UPPER = 2;
+const HELD = 3;
+
+/** Scratch for up to three unknowns. */
+const state = new Uint8Array(3);
+const trial = new Float64Array(3);
+const matrix = new Float64Array(9);
+const rhs = new Float64Array(3);
+const index = new Int32Array(3);
+
+/**
+ * Exact minimum of cᵀGc − 2hᵀc over lower ≤ c ≤ upper for up to three unknowns, G positive semidefinite (row-major n×n).
+ * A convex quadratic over a box has its minimum in the interior or on a face whose own minimum is feasible, so after
+ * the unconstrained solve all faces are tried: at most 27. An unknown that G does not determine takes `fallback`
+ * (clamped). Unknowns with held[k] = 1 keep the value that c carries on entry.
+ *
+ * @returns cᵀGc − 2hᵀc at the answer, written to c.
+ */
+export function solveBounded(
+  n: number,
+  gram: Float64Array,
+  moment: Float64Array,
+  lower: Float64Array,
+  upper: Float64Array,
+  offset: number,
+  held: Uint8Array,
+  fallback: number,
+  c: Float64Array,
+): number {
+  for (let k = 0; k < n; k++) {
+    state[k] = held[k] ? HELD : FREE;
+    trial[k] = c[k]!;
+  }
+  if (solveFace(n, gram, moment, lower, upper, offset, fallback)) return keep(n, gram, moment, c);
+  let best = Infinity;
+  const faces = n === 1 ? 3 : n === 2 ? 9 : 27;
+  for (let face = 1; face < faces; face++) {
+    if (!enterFace(n, face, lower, upper, offset, held, c)) continue;
+    if (!solveFace(n, gram, moment, lower, upper, offset, fallback)) continue;
+    const value = objective(n, gram, moment, trial);
+    if (value < best) {
+      best = value;
+      for (let k = 0; k < n; k++) bestTrial[k] = trial[k]!;
+    }
+  }
+  for (let k = 0; k < n; k++) c[k] = bestTrial[k]!;
+  return best;
+}
+
+const bestTrial = new Float64Array(3);
+
+function keep(n: number, gram: Float64Array, moment: Float64Array, c: Float64Array): number {
+  for (let k = 0; k < n; k++) c[k] = trial[k]!;
+  return objective(n, gram, moment, c);
+}
+
+/** Face number in base 3: digit k is free, at the lower or at the upper bound. False where the face does not exist. */
+function enterFace(
+  n: number,
+  face: number,
+  lower: Float64Array,
+  upper: Float64Array,
+  offset: number,
+  held: Uint8Array,
+  c: Float64Array,
+): boolean {
+  let rest = face;
+  for (let k = 0; k < n; k++) {
+    const digit = rest % 3;
+    rest = (rest - digit) / 3;
+    if (held[k]) {
+      if (digit !== FREE) return false;
+      state[k] = HELD;
+      trial[k] = c[k]!;
+      continue;
+    }
+    state[k] = digit;
+    const bound =
+      digit === AT_LOWER ? lower[offset + k]! : digit === AT_UPPER ? upper[offset + k]! : 0;
+    if (!Number.isFinite(bound)) return false;
+    if (digit !== FREE) trial[k] = bound;
+  }
+  return true;
+}
+
+/** Solves for the free unknowns of the face; true when they are feasible. */
+function solveFace(
+  n: number,
+  gram: Float64Array,
+  moment: Float64Array,
+  lower: Float64Array,
+  upper: Float64Array,
+  offset: number,
+  fallback: number,
+): boolean {
+  let m = 0;
+  for (let k = 0; k < n; k++) if (state[k] === FREE) index[m++] = k;
+  for (let a = 0; a < m; a++) {
+    const i = index[a]!;
+    let right = moment[i]!;
+    for (let k = 0; k < n; k++) if (state[k] !== FREE) right -= gram[i * n + k]! * trial[k]!;
+    rhs[a] = right;
+    for (let b = 0; b < m; b++) matrix[3 * a + b] = gram[i * n + index[b]!]!;
+  }
+  eliminate(m);
+  for (let a = m - 1; a >= 0; a--) {
+    const i = index[a]!;
+    if (matrix[3 * a + a]! <= SINGULAR * gram[i * n + i]! || gram[i * n + i]! <= Number.MIN_VALUE) {
+      trial[i] = Math.min(Math.max(fallback, lower[offset + i]!), upper[offset + i]!);
+      continue;
+    }
+    let value = rhs[a]!;
+    for (let b = a + 1; b < m; b++) value -= matrix[3 * a + b]! * trial[index[b]!]!;
+    value /= matrix[3 * a + a]!;
+    if (!(value >= lower[offset + i]! && value <= upper[offset + i]!)) return false;
+    trial[i] = value;
+  }
+  return true;
+}
+
+/** Gaussian elimination without exchange: G is symmetric positive semidefinite. A row without a pivot eliminates nothing. */
+function eliminate(m: number): void {
+  for (let a = 0; a < m; a++) {
+    const pivot = matrix[3 * a + a]!;
+    if (!(pivot > 0)) continue;
+    for (let b = a + 1; b < m; b++) {
+      const factor = matrix[3 * b + a]! / pivot;
+      for (let c = a; c < m; c++)
+        matrix[3 * b + c] = matrix[3 * b + c]! - factor * matrix[3 * a + c]!;
+      rhs[b] = rhs[b]! - factor * rhs[a]!;
+    }
+  }
+}
+
+function objective(n: number, gram: Float64Array, moment: Float64Array, c: Float64Array): number {
+  let value = 0;
+  for (let i = 0; i < n; i++) {
+    let row = -2 * moment[i]!;
+    for (let k = 0; k < n; k++) row += gram[i * n + k]! * c[k]!;
+    value += row * c[i]!;
+  }
+  return value;
+}

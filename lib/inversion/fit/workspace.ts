@@ -1,0 +1,35 @@
+import { createEdgeFold, createFoldScratch } from '../fold/fold-edge';
+import type { ShareFold } from '../profile/trial-profile';
+import type { Model, Workspace } from './model';
+
+type Shape = Pick<Model, 'rowCount' | 'kernel' | 'shapeCount' | 'size' | 'levelCount'>;
+
+export function createShareFold({
+  rowCount,
+  kernel,
+  shapeCount,
+}: Pick<Shape, 'rowCount' | 'kernel' | 'shapeCount'>): ShareFold {
+  return {
+    share: new Float64Array(rowCount),
+    byShape: Array.from({ length: shapeCount }, () => new Float64Array(rowCount)),
+    byScale: new Float64Array(rowCount),
+    scratch: createFoldScratch(kernel),
+    edge: createEdgeFold(rowCount),
+  };
+}
+
+export function createWorkspace(model: Shape): Workspace {
+  const { rowCount, size, levelCount } = model;
+  return {
+    fold: createShareFold(model),
+    capShare: new Float64Array(rowCount),
+    capByStart: new Float64Array(rowCount),
+    predicted: new Float64Array(rowCount),
+    residual: new Float64Array(rowCount),
+    jacobian: new Float64Array(size * rowCount),
+    gram: new Float64Array(levelCount * levelCount),
+    moment: new Float64Array(levelCount),
+    levels: new Float64Array(levelCount),
+    heldLevel: new Uint8Array(levelCount),
+  };
+}

@@ -1,0 +1,33 @@
+import type { CarrierScale, FitInput, Polarity, ProfileUnit, Response } from '../types';
+
+/** Concentration (or share) as a linear function of the populated share: value = offset + slope·s. */
+export interface ConcentrationLine {
+  offset: number;
+  slope: number;
+}
+
+/**
+ * How an observable follows from the carriers. Both responses here are linear in s, so the levels are linear parameters.
+ * A new one is one file that exports this and one line in responses.ts.
+ */
+export interface ResponseModel {
+  observable: FitInput['observable'];
+  /** Lowest and highest level that means anything. */
+  levelBounds(response: Response): readonly [number, number];
+  capBounds: readonly [number, number];
+  unit(response: Response, carriers: CarrierScale, polarity: Polarity): ProfileUnit;
+  /** Profile value at levels (top, bulk). */
+  line(
+    levelTop: number,
+    levelBulk: number,
+    input: Pick<FitInput, 'response' | 'carriers' | 'polarity'>,
+  ): ConcentrationLine;
+  /** Whether the profile value depends on the fitted levels, so that their uncertainty widens its band. */
+  followsLevels: boolean;
+  /** Change of the profile value that moves the observable by `change`, at this contrast of the levels. */
+  valueOfChange(
+    change: number,
+    contrast: number,
+    input: Pick<FitInput, 'response' | 'carriers' | 'polarity'>,
+  ): number;
+}

@@ -1,0 +1,9 @@
+import type { ResponseKind } from '../types';
+import { captureRate } from './capture-rate';
+import type { ResponseModel } from './response-model';
+import { twoLevel } from './two-level';
+
+export const RESPONSES: Readonly<Record<ResponseKind, ResponseModel>> = {
+  'two-level': twoLevel,
+  'capture-rate': captureRate,
+};
