@@ -57,3 +57,9 @@ export const momentSchema = z.iso.datetime();
 
 /** Input of a verb that needs nothing but the row. */
 export const byIdSchema = z.object({ id: idSchema });
+
+/** A yes or no that may come from JSON or from the query of an address. */
+export const flagSchema = z.preprocess(
+  (raw) => (raw === 'true' ? true : raw === 'false' ? false : raw),
+  z.boolean().default(false),
+);

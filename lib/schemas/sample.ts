@@ -1,6 +1,6 @@
 import { z } from 'zod';
 
-import { idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
+import { flagSchema, idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
 
 export const CARRIERS = ['electrons', 'holes'] as const;
 
@@ -16,6 +16,9 @@ export const sampleInputSchema = z.object({
   notes: optionalText('Notes', 4000),
 });
 export type SampleInput = z.input<typeof sampleInputSchema>;
+
+export const editSampleSchema = sampleInputSchema.extend({ id: idSchema });
+export const listSamplesSchema = z.object({ archived: flagSchema });
 
 export const sampleSchema = z.object({
   id: idSchema,

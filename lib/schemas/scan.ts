@@ -1,7 +1,7 @@
 import { MAX_ENERGIES } from '@/lib/inversion/constants';
 import { z } from 'zod';
 
-import { idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
+import { flagSchema, idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
 
 export const OBSERVABLES = ['fraction', 'rate'] as const;
 export const ILLUMINATIONS = ['dark', 'illuminated', 'after illumination'] as const;
@@ -65,6 +65,8 @@ export const editScanSchema = z.object({
   /** null leaves the points as they are. */
   points: z.array(typedPointSchema).min(1).max(MAX_ENERGIES).nullable(),
 });
+
+export const listScansSchema = z.object({ sampleId: idSchema.optional(), archived: flagSchema });
 
 export const scanSchema = z.object({
   id: idSchema,

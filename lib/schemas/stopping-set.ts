@@ -1,6 +1,6 @@
 import { z } from 'zod';
 
-import { idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
+import { flagSchema, idSchema, momentSchema, optionalNumber, optionalText, text } from './common';
 
 export const stoppingMetaSchema = z.object({
   name: text('Name', 80),
@@ -39,6 +39,8 @@ export const createStoppingSetSchema = stoppingUploadSchema.extend({
 });
 
 export const editStoppingSetSchema = z.object({ id: idSchema, meta: stoppingMetaSchema });
+
+export const listStoppingSetsSchema = z.object({ archived: flagSchema });
 
 export const stoppingSetRowSchema = z.object({
   id: idSchema,

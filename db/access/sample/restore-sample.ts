@@ -1,0 +1,25 @@
+import { audit } from '@/db/access/audit';
+import type { Context } from '@/db/access/context';
+import { parse } from '@/db/access/parse';
+import { allow } from '@/db/access/policy';
+import { transaction } from '@/db/access/transaction';
+import { samples } from '@/db/schema/samples';
+import { AppError } from '@/lib/errors';
+import { byIdSchema } from '@/lib/schemas/common';
+import { and, eq } from 'drizzle-orm';
+
+/** Back into the lists. */
+export async function restoreSample(ctx: Context, input: unknown): Promise<{ id: string }> {
+  const viewer = allow(ctx, 'edit data');
+  const { id } = parse(byIdSchema, input);
+  return transaction(ctx, async (tx) => {
+    const [restored] = await tx
+      .update(samples)
+      .set({ archivedAt: null })
+      .where(and(eq(samples.id, id), eq(samples.teamId, viewer.teamId)))
+      .returning({ name: samples.name });
+    if (restored === undefined) throw new AppError('not_found', 'There is no such sample.');
+    await audit(tx, { by: viewer, at: ctx.now, verb: 'restore-sample', subject: restored.name });
+    return { id };
+  });
+}
