@@ -16,7 +16,9 @@ export interface Format {
  * is a number counts for, each that is not counts half against; a line of one cell counts nothing.
  */
 export function detectFormat(lines: readonly string[], given: Partial<Format> = {}): Format {
-  const sample = lines.filter((line) => line.trim() !== '').slice(0, SAMPLE_LINES);
+  const filled = lines.filter((line) => line.trim() !== '');
+  // The first line is often a header, whose words and units would be split at blanks.
+  const sample = filled.slice(filled.length > 1 ? 1 : 0, SAMPLE_LINES);
   const delimiters = given.delimiter ? [given.delimiter] : CANDIDATES;
   const decimals: readonly Decimal[] = given.decimal ? [given.decimal] : ['point', 'comma'];
   let best: Format = { delimiter: delimiters.at(-1) ?? 'blanks', decimal: decimals[0] ?? 'point' };

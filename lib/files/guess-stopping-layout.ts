@@ -57,7 +57,11 @@ export function stoppingColumns(tables: readonly Table[]): StoppingColumn[] {
     const named = headings.filter((energy) => energy !== null).length;
     const single = energyInText(table.fileName) ?? energyInComments(table);
     const isMatrix = named >= 2 || (table.columnCount > 2 && single === null);
-    if (!isMatrix) return [{ table, column: 1, energyKeV: headings[0] ?? single }];
+    if (!isMatrix) {
+      // A heading or a name with a unit says more than a heading that is a bare number.
+      const energyKeV = energyInText(table.header?.[1] ?? '') ?? single ?? headings[0] ?? null;
+      return [{ table, column: 1, energyKeV }];
+    }
     return headings.map((energyKeV, index) => ({ table, column: index + 1, energyKeV }));
   });
 }

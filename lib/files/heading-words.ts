@@ -3,10 +3,11 @@ export const HEADING = {
   energy: /energ|\bk?ev\b|^e$|^e[_ (\[]|implant/,
   depth:
     /depth|tiefe|position|\bedge|\bbin\b|^[xz]$|^[xz][_ (\[]|_nm\b|\bnm\b|µm|μm|\bum\b|å|angstrom/,
-  sigma: /σ|sigma|\berr|error|fehler|uncert|±|\bstd|stdev|^d[ayf]$|^s$|delta/,
-  value: /frac|anteil|f_?dia|diamag|rate|lambda|λ|asym|ampl|value|wert|^[fay]$/,
-  note: /note|run\b|comment|remark|bemerk|label/,
-  counts: /count|event|stat|^n$/,
+  sigma: /σ|sigma|(?<![a-z])err|fehler|uncert|±|(?<![a-z])std|stdev|^d[ayf]$|^s$|delta/,
+  value:
+    /(?<![a-z])frac|anteil|f_?dia|diamag|(?<![a-z])rate|lambda|λ|asym|(?<![a-z])ampl|value|wert|^[fay]$/,
+  note: /(?<![a-z])note|(?<![a-z])run(?![a-z])|comment|remark|bemerk|label/,
+  counts: /(?<![a-z])count|(?<![a-z])event|statistics|^n$/,
 } as const;
 
 export function isKnownHeading(cell: string): boolean {

@@ -119,8 +119,11 @@ function looksLikeHeader(cells: readonly string[], decimal: Decimal): boolean {
   return words.length === filled.length || HEADING.depth.test((cells[0] ?? '').toLowerCase());
 }
 
+/** Not a remark such as "implanted: 1000" or "depth 320", which only happens to have as many words. */
 function headerInComment(text: string, delimiter: Delimiter, columnCount: number): string[] | null {
   const cells = splitLine(text, delimiter);
-  const fits = cells.length === columnCount && columnCount > 1;
+  const numbers = cells.filter((cell) => parseNumber(cell, 'point') !== null).length;
+  const isRemark = numbers === 1 || cells.some((cell) => cell.endsWith(':'));
+  const fits = cells.length === columnCount && columnCount > 1 && !isRemark;
   return fits && cells.some(isKnownHeading) ? cells : null;
 }
