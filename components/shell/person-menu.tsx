@@ -21,8 +21,8 @@ import { ThemeGroup } from './theme-group';
 type PersonMenuProps = {
   viewer: Viewer;
   theme: Theme;
-  signOut: FormActionFunction;
-  switchTeam: FormActionFunction;
+  signOut: FormActionFunction<null>;
+  switchTeam: FormActionFunction<null>;
 };
 
 export function PersonMenu({ viewer, theme, signOut, switchTeam }: PersonMenuProps) {

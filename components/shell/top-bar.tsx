@@ -11,8 +11,8 @@ type TopBarProps = {
   viewer: Viewer;
   theme: Theme;
   waiting: number;
-  signOut: FormActionFunction;
-  switchTeam: FormActionFunction;
+  signOut: FormActionFunction<null>;
+  switchTeam: FormActionFunction<null>;
 };
 
 export function TopBar({ viewer, theme, waiting, signOut, switchTeam }: TopBarProps) {
