@@ -20,7 +20,7 @@ import { PointsSheet } from './points-sheet';
 import { NEW_SCAN } from './scan-draft';
 import { ScanFilePreview } from './scan-file-preview';
 import { ScanMetaFields } from './scan-meta-fields';
-import { readTypedPoints } from './typed-points';
+import { readTypedPoints, whyTypedBlocked } from './typed-points';
 import { useScanFile } from './use-scan-file';
 
 interface AddScanFormProps {
@@ -131,9 +131,4 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
       </section>
     </div>
   );
-}
-
-function whyTypedBlocked({ points, errors }: ReturnType<typeof readTypedPoints>): string | null {
-  if (errors.length > 0) return errors.length === 1 ? 'One cell needs mending.' : `${errors.length} cells need mending.`;
-  return points.length === 0 ? 'Type or paste at least one point.' : null;
 }

@@ -86,3 +86,9 @@ export function linesOfPoints(points: readonly TypedPoint[]): SheetLine[] {
     kept: true,
   }));
 }
+
+/** Why a grid cannot be stored yet; null when it can. */
+export function whyTypedBlocked({ points, errors }: TypedReading): string | null {
+  if (errors.length > 0) return errors.length === 1 ? 'One cell needs mending.' : `${errors.length} cells need mending.`;
+  return points.length === 0 ? 'Type or paste at least one point.' : null;
+}

@@ -1,14 +1,13 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useCallback, useRef, useState } from 'react';
+import { useState } from 'react';
 
 import { DropZone } from '@/components/upload/drop-zone';
 import { fieldFaults, withoutPrefix } from '@/components/upload/field-faults';
 import { ProblemList } from '@/components/upload/problem-list';
 import { SaveBar } from '@/components/upload/save-bar';
 import { sendUpload } from '@/components/upload/send-details';
-import { useDeferredReading } from '@/components/upload/use-deferred-reading';
 import { useLeaveWarning } from '@/components/upload/use-leave-warning';
 import type { FileProblem } from '@/lib/files/problem';
 import { stoppingMetaSchema } from '@/lib/schemas/stopping-set';
@@ -16,12 +15,12 @@ import { stoppingMetaSchema } from '@/lib/schemas/stopping-set';
 import { FileRow } from './file-row';
 import { LayoutChoices } from './layout-choices';
 import { lossWarnings } from './loss-warnings';
-import { mayLeaveOut } from './may-leave-out';
-import { previewStopping, type FilePreview, type TableCache } from './preview-stopping';
-import { NO_STOPPING_CHOICES, withFileChoices, withFiles, withLineLeftOut, withoutFile } from './stopping-choices';
+import { leaveOutTest } from './may-leave-out';
+import { NO_STOPPING_CHOICES, withFileChoices, withFiles, withLinesLeftOut, withoutFile } from './stopping-choices';
 import { NEW_STOPPING } from './stopping-draft';
 import { StoppingFigure } from './stopping-figure';
 import { StoppingMetaFields } from './stopping-meta-fields';
+import { useStoppingPreview } from './use-stopping-preview';
 import { WarningList } from './warning-list';
 
 /** A stopping set from one matrix file or many files; nothing is sent before all of them read cleanly. */
@@ -32,10 +31,7 @@ export function AddStoppingForm() {
   const [faults, setFaults] = useState<Record<string, string>>({});
   const [refusal, setRefusal] = useState<string | null>(null);
   const [saving, setSaving] = useState(false);
-  const cache = useRef<TableCache>(new WeakMap());
-  const { result: preview, reading } = useDeferredReading(
-    useCallback(() => previewStopping(choices, cache.current), [choices]),
-  );
+  const { preview, reading } = useStoppingPreview(choices);
   const { entries } = choices;
   const blocked = reading || preview === null ? 'Reading…' : preview.blocked;
   useLeaveWarning(!saving && entries.length > 0);
@@ -55,7 +51,7 @@ export function AddStoppingForm() {
     setFaults(withoutPrefix(sent.fields, 'meta.'));
     setRefusal(sent.message);
   };
-  const leaveOut = (problems: readonly FileProblem[]) => setChoices((before) => problems.reduce(withLineLeftOut, before));
+  const leaveOut = (problems: readonly FileProblem[]) => setChoices((before) => withLinesLeftOut(before, problems));
 
   return (
     <div className="grid gap-x-10 gap-y-8 py-6 lg:grid-cols-[minmax(0,1fr)_22rem]">
@@ -91,7 +87,7 @@ export function AddStoppingForm() {
                 />
                 <ProblemList
                   problems={preview.problems}
-                  mayLeaveOut={(problem) => mayLeaveOut(problem, tableOf(preview.files, problem.fileName))}
+                  mayLeaveOut={leaveOutTest(preview.files.map(({ table }) => table))}
                   onLeaveOut={leaveOut}
                 />
                 {preview.set && (
@@ -112,8 +108,4 @@ export function AddStoppingForm() {
       </section>
     </div>
   );
-}
-
-function tableOf(files: readonly FilePreview[], name: string) {
-  return files.find(({ entry }) => entry.file.name === name)?.table ?? null;
 }

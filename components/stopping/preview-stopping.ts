@@ -47,7 +47,8 @@ export function previewStopping(choices: StoppingChoices, cache: TableCache): St
   return { ...reading, problems, files, layout, blocked, sent };
 }
 
-function readCached({ file, delimiter, decimal }: StoppingEntry, cache: TableCache): ReadTableResult {
+/** The table of one file, read at most once per format. */
+export function readCached({ file, delimiter, decimal }: StoppingEntry, cache: TableCache): ReadTableResult {
   const format = `${delimiter} ${decimal}`;
   const known = cache.get(file);
   if (known?.format === format) return known.result;

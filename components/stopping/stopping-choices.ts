@@ -51,9 +51,16 @@ export function withFileChoices(choices: StoppingChoices, name: string, change: 
   return { ...choices, entries };
 }
 
-/** Leaves out the line that a problem names. */
-export function withLineLeftOut(choices: StoppingChoices, { fileName, line }: FileProblem): StoppingChoices {
-  const entry = choices.entries.find(({ file }) => file.name === fileName);
-  if (!entry || line === null) return choices;
-  return withFileChoices(choices, fileName, { skipLines: [...new Set([...entry.skipLines, line])] });
+/** Leaves out the lines that these problems name. */
+export function withLinesLeftOut(choices: StoppingChoices, problems: readonly FileProblem[]): StoppingChoices {
+  const linesOf = new Map<string, Set<number>>();
+  for (const { fileName, line } of problems) {
+    if (line === null) continue;
+    linesOf.set(fileName, (linesOf.get(fileName) ?? new Set()).add(line));
+  }
+  const entries = choices.entries.map((entry) => {
+    const lines = linesOf.get(entry.file.name);
+    return lines ? { ...entry, skipLines: [...new Set([...entry.skipLines, ...lines])] } : entry;
+  });
+  return { ...choices, entries };
 }

@@ -1,0 +1,7 @@
+'use client';
+
+import { PageFailure } from '@/components/review/page-failure';
+
+export default function Failure({ reset }: { reset: () => void }) {
+  return <PageFailure what="The scan" retry={reset} />;
+}

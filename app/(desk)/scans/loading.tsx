@@ -1,0 +1,5 @@
+import { PageSkeleton } from '@/components/review/page-skeleton';
+
+export default function Loading() {
+  return <PageSkeleton what="Loading…" blocks={['line', 'figure', 'line']} />;
+}

@@ -1,0 +1,57 @@
+'use client';
+
+import { useMemo } from 'react';
+import useSWR from 'swr';
+
+import { Button } from '@/components/ui/button';
+import { Notice } from '@/components/ui/notice';
+import { fetchJson } from '@/components/upload/fetch-json';
+import { stoppingSetSchema } from '@/lib/schemas/stopping-set';
+
+import { lossWarnings } from './loss-warnings';
+import { StoppingFigure } from './stopping-figure';
+import { WarningList } from './warning-list';
+
+/** The profiles of a stored set. They may be megabytes, so they come after the page and not inside it. */
+export function StoredProfiles({ setId }: { setId: string }) {
+  const { data, error, isLoading, mutate } = useSWR(`/api/stopping-sets/${setId}`, fetchSet, {
+    // A set never changes once stored.
+    revalidateIfStale: false,
+    revalidateOnFocus: false,
+  });
+  const profiles = useMemo(() => data?.profiles.map(toProfile) ?? [], [data]);
+  if (error) {
+    return (
+      <Notice kind="problem" alert title="The profiles could not be loaded" action={<Button size="small" onClick={() => void mutate()}>Try again</Button>}>
+        {error instanceof Error ? error.message : 'No reason was given.'}
+      </Notice>
+    );
+  }
+  if (isLoading || !data) {
+    return (
+      <div role="status" className="text-ink-2 min-h-96 text-sm">
+        Loading the profiles…
+      </div>
+    );
+  }
+  return (
+    <div className="grid gap-6">
+      <WarningList warnings={[...data.warnings, ...lossWarnings(profiles)]} />
+      <StoppingFigure profiles={profiles} />
+    </div>
+  );
+}
+
+async function fetchSet(path: string) {
+  return stoppingSetSchema.parse(await fetchJson(path));
+}
+
+function toProfile({ energyKeV, edgesNm, mass, lostShare }: { energyKeV: number; edgesNm: number[]; mass: number[]; lostShare: number | null }) {
+  return {
+    energyKeV,
+    edgesNm: Float64Array.from(edgesNm),
+    mass: Float64Array.from(mass),
+    lostShare,
+    interpolatedBetween: null,
+  };
+}
