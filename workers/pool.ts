@@ -130,7 +130,9 @@ async function runJob(context: JobContext): Promise<RunEnd> {
     if (!first.ok) return { status: 'refused', code: first.code, message: first.message };
     if (isOver()) return { status: 'stopped', elapsedMs: elapsed() };
     listener.onFirst(first.value, elapsed());
-    if (request.resamples === 0) return { status: 'done', bands: null, elapsedMs: elapsed() };
+    const nothingFree = first.value.answer.parameters.every((parameter) => parameter.held);
+    if (request.resamples === 0 || nothingFree)
+      return { status: 'done', bands: null, elapsedMs: elapsed() };
     const rows = await resampleOnAll(context, first.value);
     const bands = await lead.ask((api) => api.bands(job, transfer(rows, [rows.buffer])));
     if (!bands.ok) return { status: 'refused', code: bands.code, message: bands.message };

@@ -1,0 +1,26 @@
+import type { ProfileKind } from '@/lib/inversion/index';
+
+/** The trial profiles that the desk offers; a new one is one entry here. */
+export const PROFILE_KINDS: readonly {
+  kind: ProfileKind;
+  label: string;
+  short: string;
+  says: string;
+}[] = [
+  {
+    kind: 'sharp',
+    label: 'Sharp edge',
+    short: 'sharp',
+    says: 'The carriers begin at one depth, without a transition.',
+  },
+  {
+    kind: 'graded',
+    label: 'Graded edge',
+    short: 'graded',
+    says: 'The carriers set in over a Gaussian width round one depth.',
+  },
+];
+
+export function profileKind(kind: ProfileKind) {
+  return PROFILE_KINDS.find((entry) => entry.kind === kind) ?? PROFILE_KINDS[0]!;
+}
