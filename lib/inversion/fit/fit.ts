@@ -1,19 +1,18 @@
-import { covarianceAt } from '../uncertainty/covariance';
+import { DELTA_CHI_SQUARE_68 } from '../constants';
 import { chiSquareUpperTail } from '../statistics/chi-square';
 import type {
   Covariance,
   FitAnswer,
   FitParameter,
   FitStatus,
-  Interval,
   ParameterName,
   Residual,
 } from '../types';
-import { DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95 } from '../constants';
+import { covarianceAt } from '../uncertainty/covariance';
+import { reportParameters } from '../uncertainty/parameter-report';
 import { dataChiSquare, evaluate } from './evaluate';
-import type { Problem } from './model';
 import type { PreparedFit } from './prepared-fit';
-import { searchMinimum, type GlobalMinimum } from './search-minimum';
+import { followMinimum, searchMinimum, type GlobalMinimum } from './search-minimum';
 
 export type FitOutcome =
   { status: FitStatus; answer: FitAnswer } | { status: 'no-minimum'; reason: string };
@@ -23,131 +22,81 @@ export interface FitOptions {
   intervalsFor?: readonly ParameterName[];
 }
 
-/** Convergence of the final polish: what Φ could still fall by, relative to 1 + Φ. */
-const FINAL_TOLERANCE = 1e-13;
+/** Lower minima met while walking out the intervals that are followed before the fit is given out as it is. */
+const MOST_RESTARTS = 3;
 
 /**
- * Least squares with bounds and priors (physics section 4): global search, polish, covariance, intervals, evidence.
- * Returns 'no-minimum' where the scan says nothing of the edge: χ² rises by less than 1 wherever the edge lies.
+ * Regularised least squares with bounds and priors: global search over the edge, polish, covariance, profile-likelihood
+ * intervals, evidence. No starting guess enters.
+ *
+ * @returns 'no-minimum' where the scan says nothing of the edge: χ² changes by less than 1 wherever the edge lies.
  */
 export function fit(prepared: PreparedFit, options: FitOptions = {}): FitOutcome {
   const { problem, scratch } = prepared;
-  const minimum = searchMinimum(problem, scratch, FINAL_TOLERANCE);
-  if (!Number.isFinite(minimum.chiSquare))
-    return { status: 'no-minimum', reason: 'χ² is not finite anywhere.' };
-  if (
-    !problem.model.held[0] &&
-    minimum.highestChiSquare - minimum.chiSquare < DELTA_CHI_SQUARE_68
-  ) {
-    return {
-      status: 'no-minimum',
-      reason:
-        'The scan does not say where the edge is: χ² changes by less than 1 wherever the edge lies. More contrast between the levels, more energies or smaller uncertainties are needed.',
-    };
+  let minimum = searchMinimum(problem, scratch);
+  const reason = unusable(prepared, minimum);
+  if (reason) return { status: 'no-minimum', reason };
+  for (let restart = 0; ; restart++) {
+    const covariance = covarianceAt(problem, minimum.theta);
+    const wanted = options.intervalsFor ?? prepared.freeNames;
+    const report = reportParameters(problem, scratch, { ...minimum, covariance }, wanted);
+    if (!report.better || restart === MOST_RESTARTS) {
+      const answer = answerAt(prepared, minimum, covariance, report.parameters);
+      return { status: answer.status, answer };
+    }
+    minimum = followMinimum(problem, scratch, minimum, report.better);
   }
-  const status: FitStatus = minimum.converged
-    ? 'converged'
-    : minimum.iterations >= 100
-      ? 'iteration-limit'
-      : 'stalled';
-  return { status, answer: answerAt(prepared, minimum, status, options) };
+}
+
+function unusable({ problem }: PreparedFit, minimum: GlobalMinimum): string | null {
+  if (!Number.isFinite(minimum.chiSquare)) return 'χ² is not finite at any depth of the edge.';
+  if (problem.model.held[0] || minimum.highestChiSquare - minimum.chiSquare >= DELTA_CHI_SQUARE_68)
+    return null;
+  return 'The scan does not say where the edge is: χ² changes by less than 1 wherever the edge lies. It needs more contrast between the levels, more energies or smaller uncertainties.';
 }
 
 function answerAt(
   prepared: PreparedFit,
   minimum: GlobalMinimum,
-  status: FitStatus,
-  options: FitOptions,
+  covariance: Covariance,
+  parameters: readonly FitParameter[],
 ): FitAnswer {
   const { problem, freeNames, enabledCount, priorCount } = prepared;
-  const { theta } = minimum;
-  const covariance = covarianceAt(problem, theta);
-  const chiSquare = evaluate(problem, theta, problem.model.held);
-  const dataTerm = dataChiSquare(problem.model, problem.data, problem.work);
-  const residuals = residualsOf(prepared);
+  const chiSquare = evaluate(problem, minimum.theta, problem.model.held);
   const k = freeNames.length;
   const n = enabledCount + priorCount;
-  const degreesOfFreedom = n - k;
-  const wanted = options.intervalsFor ?? freeNames;
+  const { folds, starts, iterations, predictedReduction, status } = minimum;
   return {
     status,
-    parameters: problem.model.names.map((_, index) =>
-      parameterOf(problem, theta, index, covariance, wanted),
-    ),
+    parameters,
     chiSquare,
-    dataChiSquare: dataTerm,
-    degreesOfFreedom,
-    pValue: degreesOfFreedom > 0 ? chiSquareUpperTail(chiSquare, degreesOfFreedom) : null,
+    dataChiSquare: dataChiSquare(problem.model, problem.data, problem.work),
+    degreesOfFreedom: n - k,
+    pValue: n > k ? chiSquareUpperTail(chiSquare, n - k) : null,
     freeParameters: k,
     aicc: n > k + 1 ? chiSquare + 2 * k + (2 * k * (k + 1)) / (n - k - 1) : null,
     bic: chiSquare + k * Math.log(n),
     covariance,
-    residuals,
-    evidence: {
-      folds: minimum.folds,
-      starts: minimum.starts,
-      iterations: minimum.iterations,
-      predictedReduction: minimum.predictedReduction,
-    },
+    residuals: residualsOf(prepared),
+    evidence: { folds, starts, iterations, predictedReduction },
   };
 }
 
-function parameterOf(
-  { model }: Problem,
-  theta: Float64Array,
-  k: number,
-  covariance: Covariance,
-  _wanted: readonly ParameterName[],
-): FitParameter {
-  const name = model.names[k]!;
-  const value = theta[k]!;
-  const held = model.held[k] === 1;
-  const sigma = sigmaOf(covariance, name);
-  const interval = (delta: number): Interval => {
-    if (held || sigma === null) return [null, null];
-    const half = Math.sqrt(delta) * sigma;
-    return [Math.max(model.lower[k]!, value - half), Math.min(model.upper[k]!, value + half)];
-  };
-  return {
-    name,
-    value,
-    sigma,
-    interval68: interval(DELTA_CHI_SQUARE_68),
-    interval95: interval(DELTA_CHI_SQUARE_95),
-    held,
-    atBound: held
-      ? null
-      : value <= model.lower[k]!
-        ? 'lower'
-        : value >= model.upper[k]!
-          ? 'upper'
-          : null,
-    symmetric: sigma !== null,
-  };
-}
-
-export function sigmaOf(covariance: Covariance, name: ParameterName): number | null {
-  if (!covariance.ok) return null;
-  const k = covariance.names.indexOf(name);
-  return k < 0 ? null : Math.sqrt(covariance.matrix[k]![k]!);
-}
-
-/** Residuals in the order of the scan, from the prediction in the workspace. */
+/** Residuals in the order of the scan, from the prediction in the workspace; a point without a stopping profile has none. */
 function residualsOf({ input, profiles, problem }: PreparedFit): Residual[] {
-  const { pointOfRow } = problem.model;
-  const predicted = new Map(
-    Array.from(pointOfRow, (point, row) => [point, problem.work.predicted[row]!]),
-  );
-  return input.points.flatMap((point, index) => {
-    const value = predicted.get(index);
-    if (value === undefined) return [];
+  const { model, work } = problem;
+  const rowOfPoint = new Map(Array.from(model.pointOfRow, (point, row) => [point, row]));
+  return input.points.flatMap(({ energyKeV, value, sigma, enabled }, index) => {
+    const row = rowOfPoint.get(index);
+    if (row === undefined) return [];
+    const predicted = work.predicted[row]!;
     return {
-      energyKeV: point.energyKeV,
-      observed: point.value,
-      sigma: point.sigma,
-      predicted: value,
-      reduced: (point.value - value) / point.sigma,
-      enabled: point.enabled,
+      energyKeV,
+      observed: value,
+      sigma,
+      predicted,
+      reduced: (value - predicted) / sigma,
+      enabled,
       interpolated: profiles[index]!.interpolatedBetween !== null,
     };
   });

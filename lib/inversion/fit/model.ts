@@ -23,6 +23,9 @@ export interface Model {
   scaleIndex: number;
   lower: Float64Array;
   upper: Float64Array;
+  /** 1 where a bound is the natural end of the parameter and not merely the end of the search. */
+  closedLower: Uint8Array;
+  closedUpper: Uint8Array;
   held: Uint8Array;
   /** Held values; where free, a neutral value (prior mean, 1 for the scale, 0 otherwise). */
   neutral: Float64Array;

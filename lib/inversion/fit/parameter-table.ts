@@ -7,6 +7,19 @@ import type { FitInput, GaussianPrior, ParameterName, ParameterSetting } from '.
 /** Depth scales beyond a factor of two are not an error of a stopping calculation but a wrong layer or a wrong unit. */
 const DEPTH_SCALE_BOUNDS = [0.5, 2] as const;
 
+/**
+ * Whether the lower and upper bound are the natural end of a parameter, so that an interval ends there. An edge at the surface
+ * or past the last bin is no edge at all: there an interval stays open.
+ */
+export const CLOSED: Readonly<Record<ParameterName, readonly [boolean, boolean]>> = {
+  edgeDepthNm: [false, false],
+  edgeWidthNm: [true, false],
+  levelTop: [true, true],
+  levelBulk: [true, true],
+  levelCap: [true, true],
+  depthScale: [false, false],
+};
+
 export interface ParameterRow {
   name: ParameterName;
   lower: number;

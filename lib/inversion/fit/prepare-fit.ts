@@ -6,7 +6,7 @@ import type { FitInput, ScanPoint, StoppingProfile, StoppingSet } from '../types
 import { checkInput } from './check-input';
 import { meanLevel } from './evaluate';
 import type { Data, Model } from './model';
-import { depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
+import { CLOSED, depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
 import type { PreparedFit } from './prepared-fit';
 import { createRefineScratch } from './refine';
 import { buildSearchGrid } from './search-grid';
@@ -140,6 +140,8 @@ function compileModel(
     scaleIndex: table.length - 1,
     lower: Float64Array.from(table, (row) => row.lower),
     upper: Float64Array.from(table, (row) => row.upper),
+    closedLower: Uint8Array.from(table, (row) => (CLOSED[row.name][0] ? 1 : 0)),
+    closedUpper: Uint8Array.from(table, (row) => (CLOSED[row.name][1] ? 1 : 0)),
     held: Uint8Array.from(table, (row) => (row.held ? 1 : 0)),
     neutral: Float64Array.from(table, (row) => row.neutral),
     priorInverseSigma: Float64Array.from(table, (row) => (row.prior ? 1 / row.prior.sigma : 0)),

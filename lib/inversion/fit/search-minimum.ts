@@ -1,56 +1,95 @@
-import { evaluate } from './evaluate';
+import type { FitStatus } from '../types';
 import { minimise, type MinimiseScratch } from './minimise';
 import type { Model, Problem } from './model';
-import type { RefineResult } from './refine';
+import { polish } from './polish';
 import { localMinima, scanGrid, thetaOfNode } from './search';
 
 /** Valleys of the coarse search that are followed to their bottom. */
 const STARTS = 3;
+/** Convergence: what Φ may still fall by, relative to 1 + Φ, on the way and at the end. */
+const POLISH_TOLERANCE = 1e-7;
+const FINAL = { maxIterations: 100, tolerance: 1e-13 };
 
-export interface GlobalMinimum extends RefineResult {
+export interface GlobalMinimum {
   theta: Float64Array;
+  chiSquare: number;
+  status: FitStatus;
   folds: number;
   starts: number;
+  iterations: number;
+  predictedReduction: number;
   /** Largest χ² over the depths of the lattice, each at its best width: how much the edge matters at all. */
   highestChiSquare: number;
 }
 
 /**
- * Global minimum of Φ: χ² on the whole lattice of edges and widths with the levels solved exactly, then the best
- * valleys polished. No starting guess enters.
+ * Global minimum of Φ: χ² on the whole lattice of edges and widths with the levels solved exactly, then the best valleys
+ * polished, then the best of them to the last digits.
  */
-export function searchMinimum(
-  problem: Problem,
-  scratch: MinimiseScratch,
-  tolerance: number,
-): GlobalMinimum {
+export function searchMinimum(problem: Problem, scratch: MinimiseScratch): GlobalMinimum {
   const { model } = problem;
   const { grid, held, neutral, size } = model;
   const chiSquares = new Float64Array(grid.nodeCount);
   scanGrid(problem, neutral, held, chiSquares);
-  const starts = localMinima(grid.lattice, chiSquares).slice(0, STARTS);
-  let best: GlobalMinimum | null = null;
+  const nodes = localMinima(grid.lattice, chiSquares).slice(0, STARTS);
+  let best = Infinity;
   let iterations = 0;
-  for (const node of starts) {
-    const theta = new Float64Array(size);
-    thetaOfNode(model, node, neutral, theta);
-    openWidth(model, theta);
-    const result = minimise(problem, theta, held, scratch, { maxIterations: 100, tolerance });
+  const theta = new Float64Array(size);
+  const trial = new Float64Array(size);
+  for (const node of nodes) {
+    thetaOfNode(model, node, neutral, trial);
+    openWidth(model, trial);
+    const result = model.trial.kinked
+      ? minimise(problem, trial, held, scratch, FINAL)
+      : polish(problem, trial, scratch.refine, POLISH_TOLERANCE);
     iterations += result.iterations;
-    if (!best || result.chiSquare < best.chiSquare) {
-      best = {
-        ...result,
-        theta,
-        folds: 0,
-        starts: starts.length,
-        highestChiSquare: highestOverDepths(grid.lattice, chiSquares),
-      };
+    if (result.chiSquare < best) {
+      best = result.chiSquare;
+      theta.set(trial);
     }
   }
-  const answer = best!;
-  closeWidth(problem, answer, scratch);
-  evaluate(problem, answer.theta, held);
-  return { ...answer, iterations, folds: grid.nodeCount + iterations };
+  const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };
+  return finish(problem, scratch, theta, evidence, highestOverDepths(grid.lattice, chiSquares));
+}
+
+/** The minimum below a point that lies lower than the one known. */
+export function followMinimum(
+  problem: Problem,
+  scratch: MinimiseScratch,
+  before: GlobalMinimum,
+  better: Float64Array,
+): GlobalMinimum {
+  const evidence = {
+    folds: before.folds,
+    starts: before.starts + 1,
+    iterations: before.iterations,
+  };
+  return finish(problem, scratch, Float64Array.from(better), evidence, before.highestChiSquare);
+}
+
+function finish(
+  problem: Problem,
+  scratch: MinimiseScratch,
+  theta: Float64Array,
+  evidence: { folds: number; starts: number; iterations: number },
+  highestChiSquare: number,
+): GlobalMinimum {
+  const result = minimise(problem, theta, problem.model.held, scratch, FINAL);
+  const chiSquare = closeWidth(problem, theta, result.chiSquare, scratch);
+  return {
+    theta,
+    chiSquare,
+    status: result.converged
+      ? 'converged'
+      : result.iterations >= FINAL.maxIterations
+        ? 'iteration-limit'
+        : 'stalled',
+    folds: evidence.folds + result.iterations,
+    starts: evidence.starts,
+    iterations: evidence.iterations + result.iterations,
+    predictedReduction: result.predictedReduction,
+    highestChiSquare,
+  };
 }
 
 const WIDTH = 1;
@@ -61,19 +100,24 @@ export function openWidth(model: Model, theta: Float64Array): void {
   theta[WIDTH] = 0.006 * model.upper[WIDTH]!;
 }
 
-/** Where a step fits as well as the width found, the width is zero: the lower bound, said as such. */
-function closeWidth(problem: Problem, answer: GlobalMinimum, scratch: MinimiseScratch): void {
+/** Where a step fits as well as the width found, the width is zero: the lower bound, said as such. Returns Φ. */
+function closeWidth(
+  problem: Problem,
+  theta: Float64Array,
+  chiSquare: number,
+  scratch: MinimiseScratch,
+): number {
   const { model } = problem;
-  if (model.shapeCount < 2 || model.held[WIDTH] || answer.theta[WIDTH] === 0) return;
-  if (answer.theta[WIDTH]! > 0.05 * model.upper[WIDTH]!) return;
-  const theta = Float64Array.from(answer.theta);
-  theta[WIDTH] = 0;
+  if (model.shapeCount < 2 || model.held[WIDTH] || theta[WIDTH] === 0) return chiSquare;
+  if (theta[WIDTH]! > 0.05 * model.upper[WIDTH]!) return chiSquare;
+  const step = Float64Array.from(theta);
+  step[WIDTH] = 0;
   const held = Uint8Array.from(model.held);
   held[WIDTH] = 1;
-  const step = minimise(problem, theta, held, scratch, { maxIterations: 100, tolerance: 1e-12 });
-  if (step.chiSquare > answer.chiSquare) return;
-  answer.theta.set(theta);
-  answer.chiSquare = step.chiSquare;
+  const { chiSquare: stepChiSquare } = minimise(problem, step, held, scratch, FINAL);
+  if (stepChiSquare > chiSquare) return chiSquare;
+  theta.set(step);
+  return stepChiSquare;
 }
 
 function highestOverDepths(

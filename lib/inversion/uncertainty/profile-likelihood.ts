@@ -1,0 +1,219 @@
+import { DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95 } from '../constants';
+import { minimise, type MinimiseScratch } from '../fit/minimise';
+import type { Problem } from '../fit/model';
+import type { Covariance, Interval } from '../types';
+
+export interface ProfileIntervals {
+  interval68: Interval;
+  interval95: Interval;
+  /** A point with a lower Φ than the minimum handed in, found on the way: the fit has to start again from here. */
+  better: Float64Array | null;
+}
+
+/** The minimum that intervals are measured from. */
+export interface MinimumPoint {
+  theta: Float64Array;
+  chiSquare: number;
+  covariance: Covariance;
+}
+
+/** Δχ² is met to this, relative: a 20,000th of the half-width of the interval. */
+const TARGET_TOLERANCE = 1e-4;
+const INNER = { maxIterations: 40, tolerance: 1e-9 };
+/** A fall of Φ by more than this is a new minimum, less is rounding. */
+const NEW_MINIMUM = 1e-4;
+const MOST_STEPS = 40;
+
+/**
+ * Profile-likelihood intervals of parameter k: the values at which Φ, minimised over all other parameters within their
+ * bounds, has risen by 1 (68 %) and 3.84 (95 %) (Wilks 1938; S. S. Wilks, Ann. Math. Stat. 9, 60). An end is null where Φ
+ * never rises so far before the bound of the search; where that bound is the natural end of the parameter (a width of 0,
+ * a fraction of 0 or 1, a rate without carriers) the interval ends there.
+ */
+export function profileIntervals(
+  problem: Problem,
+  scratch: MinimiseScratch,
+  minimum: MinimumPoint,
+  k: number,
+): ProfileIntervals {
+  const down = walkSide(problem, scratch, minimum, k, -1);
+  const up = walkSide(problem, scratch, minimum, k, 1);
+  return {
+    interval68: [down.ends[0]!, up.ends[0]!],
+    interval95: [down.ends[1]!, up.ends[1]!],
+    better: down.better ?? up.better,
+  };
+}
+
+interface Side {
+  ends: (number | null)[];
+  better: Float64Array | null;
+}
+
+function walkSide(
+  problem: Problem,
+  scratch: MinimiseScratch,
+  minimum: MinimumPoint,
+  k: number,
+  direction: 1 | -1,
+): Side {
+  const { model } = problem;
+  const bound = direction < 0 ? model.lower[k]! : model.upper[k]!;
+  const naturalEnd = (direction < 0 ? model.closedLower[k] : model.closedUpper[k]) ? bound : null;
+  const line = createLine(problem, scratch, minimum, k);
+  const ends: (number | null)[] = [];
+  let inside = { x: minimum.theta[k]!, rise: 0 };
+  for (const target of [DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95]) {
+    const bracket = findBracket(line, minimum.theta[k]!, inside, target, direction, bound);
+    if (line.better) return { ends: [null, null], better: line.better };
+    if (!bracket) {
+      ends.push(naturalEnd);
+      inside = { x: bound, rise: 0 };
+      continue;
+    }
+    const root = findRoot(line, bracket.inside, bracket.outside, target);
+    ends.push(root);
+    inside = { x: root, rise: target };
+  }
+  return { ends, better: line.better };
+}
+
+interface Line {
+  /** Rise of the profiled Φ over the minimum at θ_k = x. */
+  rise: (x: number) => number;
+  step: number;
+  better: Float64Array | null;
+}
+
+/** Φ profiled over everything but θ_k. Each minimisation begins at the last one, moved along the covariance. */
+function createLine(
+  problem: Problem,
+  scratch: MinimiseScratch,
+  { theta, chiSquare, covariance }: MinimumPoint,
+  k: number,
+): Line {
+  const { model } = problem;
+  const held = Uint8Array.from(model.held);
+  held[k] = 1;
+  const point = Float64Array.from(theta);
+  const slopes = slopesAlong(problem, covariance, k);
+  const line: Line = {
+    step: firstStep(problem, theta, covariance, k),
+    better: null,
+    rise(x) {
+      const shift = x - point[k]!;
+      for (let l = 0; l < model.size; l++) {
+        if (held[l] || slopes[l] === 0) continue;
+        point[l] = Math.min(
+          Math.max(point[l]! + slopes[l]! * shift, model.lower[l]!),
+          model.upper[l]!,
+        );
+      }
+      point[k] = x;
+      const rise = minimise(problem, point, held, scratch, INNER).chiSquare - chiSquare;
+      if (rise < -NEW_MINIMUM * (1 + chiSquare)) line.better = Float64Array.from(point);
+      return Math.max(0, rise);
+    },
+  };
+  return line;
+}
+
+/** dθ_l/dθ_k along the valley of Φ: C_lk/C_kk. */
+function slopesAlong({ model }: Problem, covariance: Covariance, k: number): Float64Array {
+  const slopes = new Float64Array(model.size);
+  if (!covariance.ok) return slopes;
+  const at = covariance.names.indexOf(model.names[k]!);
+  if (at < 0) return slopes;
+  for (let l = 0; l < model.size; l++) {
+    const other = covariance.names.indexOf(model.names[l]!);
+    if (other >= 0 && l !== k)
+      slopes[l] = covariance.matrix[at]![other]! / covariance.matrix[at]![at]!;
+  }
+  return slopes;
+}
+
+function firstStep(
+  { model }: Problem,
+  theta: Float64Array,
+  covariance: Covariance,
+  k: number,
+): number {
+  const span = Number.isFinite(model.upper[k]!)
+    ? model.upper[k]! - model.lower[k]!
+    : Math.max(1, 2 * Math.abs(theta[k]!));
+  if (covariance.ok) {
+    const at = covariance.names.indexOf(model.names[k]!);
+    if (at >= 0) return Math.min(Math.sqrt(covariance.matrix[at]![at]!), span / 2);
+  }
+  return span / 20;
+}
+
+interface Point {
+  x: number;
+  rise: number;
+}
+
+/** Walks outward until Φ has risen by the target; null when the bound comes first. */
+function findBracket(
+  line: Line,
+  centre: number,
+  from: Point,
+  target: number,
+  direction: 1 | -1,
+  bound: number,
+): { inside: Point; outside: Point } | null {
+  let inside = from;
+  let reach = Math.max(Math.abs(from.x - centre), 0);
+  let next = Math.max(
+    line.step * Math.sqrt(target),
+    reach > 0 ? reach * Math.sqrt(target / Math.max(from.rise, target / 9)) : 0,
+  );
+  for (let step = 0; step < MOST_STEPS; step++) {
+    if (inside.x === bound) return null;
+    let x = centre + direction * Math.max(next, reach * 1.001);
+    if (direction * (x - bound) > 0) x = bound;
+    const rise = line.rise(x);
+    if (line.better) return null;
+    if (rise >= target) return { inside, outside: { x, rise } };
+    inside = { x, rise };
+    reach = Math.abs(x - centre);
+    next = reach * Math.min(3, 1.05 * Math.sqrt(target / Math.max(rise, target / 9)));
+  }
+  return null;
+}
+
+/**
+ * Crossing of the target between two points: √Φ rises nearly linearly, so the secant on it, kept inside the bracket by the
+ * Illinois rule, needs few steps.
+ */
+function findRoot(line: Line, inside: Point, outside: Point, target: number): number {
+  const goal = Math.sqrt(target);
+  let a = inside.x;
+  let fa = Math.sqrt(inside.rise) - goal;
+  let b = outside.x;
+  let fb = Math.sqrt(outside.rise) - goal;
+  if (Math.abs(outside.rise - target) <= TARGET_TOLERANCE * target) return b;
+  let side = 0;
+  for (let step = 0; step < MOST_STEPS; step++) {
+    const x = fb === fa ? (a + b) / 2 : a - (fa * (b - a)) / (fb - fa);
+    const rise = line.rise(x);
+    const f = Math.sqrt(rise) - goal;
+    if (
+      Math.abs(rise - target) <= TARGET_TOLERANCE * target ||
+      Math.abs(b - a) <= 1e-12 * Math.abs(x)
+    )
+      return x;
+    if (f < 0) {
+      a = x;
+      fa = f;
+      if (side === -1) fb /= 2;
+      side = -1;
+    } else {
+      b = x;
+      fb = f;
+      if (side === 1) fa /= 2;
+      side = 1;
+    }
+  }
+  return (a + b) / 2;
+}
