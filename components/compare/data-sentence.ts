@@ -14,7 +14,6 @@ export interface WidthTest {
 }
 
 export interface EvidenceRow {
-  label: string;
   deltaAicc: number | null;
 }
 

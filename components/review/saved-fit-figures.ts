@@ -4,8 +4,8 @@ import {
   foldCurve,
   prepareFit,
   stoppingProfileAt,
+  valuesOf,
   type FitInput,
-  type ParameterValues,
   type PreparedFit,
 } from '@/lib/inversion/index';
 import type { Fit } from '@/lib/schemas/fit';
@@ -52,12 +52,15 @@ export function savedFitFigures(fit: Fit, set: StoppingSetAnswer): SavedFitFigur
 }
 
 function curveOf(fit: Fit, input: FitInput, prepared: PreparedFit): SavedFitFigures['curve'] {
-  const values: ParameterValues = Object.fromEntries(
-    fit.answer.parameters.map((parameter) => [parameter.name, parameter.value]),
-  );
-  const energies = input.points.map((point) => point.energyKeV);
+  // A point switched off may lie outside the stopping set; nothing can be folded there.
+  const energies = input.points
+    .filter((_, index) => prepared.profiles[index] !== null)
+    .map((point) => point.energyKeV);
   const energiesKeV = evenly(Math.min(...energies), Math.max(...energies), CURVE_POINTS);
-  return { energiesKeV, values: Array.from(foldCurve(prepared, values, energiesKeV)) };
+  return {
+    energiesKeV,
+    values: Array.from(foldCurve(prepared, valuesOf(fit.answer), energiesKeV)),
+  };
 }
 
 /** `count` numbers from `low` to `high`, both included. */
