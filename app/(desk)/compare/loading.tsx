@@ -1,7 +1,5 @@
-import { PageSkeleton } from '@/components/review/page-skeleton';
+import { PageLoading } from '@/components/shell/page-loading';
 
 export default function Loading() {
-  return (
-    <PageSkeleton what="Putting the fits over each other…" blocks={['line', 'figure', 'line']} />
-  );
+  return <PageLoading />;
 }

@@ -1,5 +1,5 @@
-import { PageSkeleton } from '@/components/review/page-skeleton';
+import { PageLoading } from '@/components/shell/page-loading';
 
 export default function Loading() {
-  return <PageSkeleton what="Reading the reviews…" blocks={['line', 'line', 'line']} />;
+  return <PageLoading />;
 }
