@@ -9,7 +9,7 @@ import { PageHeader } from '@/components/ui/page-header';
 import { mayAct } from '@/db/access/policy';
 import { listSamples } from '@/db/access/sample/list-samples';
 
-import { readViewer } from '../read-viewer';
+import { readViewer } from '../../read-viewer';
 
 export const metadata: Metadata = { title: 'Samples' };
 
