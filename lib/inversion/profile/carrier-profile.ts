@@ -3,9 +3,10 @@ import type { Bands } from '../uncertainty/bands';
 import { valuesOf } from '../fit/theta-of';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { RESPONSES } from '../response/responses';
-import type { CarrierProfile, FitAnswer, Flag, ParameterValues } from '../types';
+import type { CarrierProfile, FitAnswer, Flag } from '../types';
 import { defaultDepthGrid } from './default-depth-grid';
 import { floorOf } from './floor';
+import { profileValue } from './profile-value';
 import { reachOf } from './reach';
 
 /**
@@ -50,19 +51,4 @@ export function carrierProfile(
 function flagOf(depthNm: number, value: number, reachNm: number, floor: number | null): Flag {
   if (depthNm > reachNm) return 'beyond reach';
   return floor !== null && value < floor ? 'below floor' : 'supported';
-}
-
-/** p(x), or the populated share, at the values of a fit. */
-export function profileValue(
-  { input, problem }: PreparedFit,
-  values: ParameterValues,
-): (depthNm: number) => number {
-  const { trial } = problem.model;
-  const shape = trial.shapeNames.map((name) => values[name]!);
-  const { offset, slope } = RESPONSES[input.response.kind].line(
-    values.levelTop!,
-    values.levelBulk!,
-    input,
-  );
-  return (depthNm) => offset + slope * trial.share(depthNm, shape);
 }

@@ -20,17 +20,6 @@ export const gradedEdge: TrialProfile = {
   shapeNames: ['edgeDepthNm', 'edgeWidthNm'],
   kinked: false,
   share: (depthNm, shape) => phi(depthNm - shape[0]!, shape[1]!),
-  shiftedShare(depthNm, shape, covariance, sigmas) {
-    const width = shape[1]!;
-    const distance = depthNm - shape[0]!;
-    const t = width === 0 ? 0 : distance / width;
-    const variance = covariance[0]![0]! + 2 * t * covariance[0]![1]! + t * t * covariance[1]![1]!;
-    return phi(distance + sigmas * Math.sqrt(Math.max(0, variance)), width);
-  },
-  shiftDirection(depthNm, shape, into) {
-    into[0] = -1;
-    into[1] = shape[1]! === 0 ? 0 : -(depthNm - shape[0]!) / shape[1]!;
-  },
   fold(kernel, shape, capNm, scale, out) {
     const u = (shape[0]! + capNm) / scale;
     const v = shape[1]! / scale;

@@ -7,11 +7,6 @@ export const sharpEdge: TrialProfile = {
   shapeNames: ['edgeDepthNm'],
   kinked: true,
   share: (depthNm, shape) => (depthNm < shape[0]! ? 0 : 1),
-  shiftedShare: (depthNm, shape, covariance, sigmas) =>
-    depthNm + sigmas * Math.sqrt(Math.max(0, covariance[0]![0]!)) < shape[0]! ? 0 : 1,
-  shiftDirection(_depthNm, _shape, into) {
-    into[0] = -1;
-  },
   fold(kernel, shape, capNm, scale, out) {
     const u = (shape[0]! + capNm) / scale;
     const start = capNm / scale;

@@ -22,18 +22,6 @@ export interface TrialProfile {
   kinked: boolean;
   /** s(x) at a depth below the cap. shape holds the values in the order of shapeNames. */
   share(depthNm: number, shape: ArrayLike<number>): number;
-  /**
-   * Change of s at a depth for a step of the parameters, `sigmas` standard deviations wide, given the covariance of
-   * the shape: the share moves to `share(depth)` shifted on its own scale, so that it never leaves [0, 1].
-   */
-  shiftedShare(
-    depthNm: number,
-    shape: ArrayLike<number>,
-    shapeCovariance: readonly (readonly number[])[],
-    sigmas: number,
-  ): number;
-  /** Direction of the shift above in shape parameters (∂/∂shape of the argument of s), for correlations with the levels. */
-  shiftDirection(depthNm: number, shape: ArrayLike<number>, into: number[]): void;
   /** Fold through the kernel with depths scaled by `scale` and a cap of capNm in front. */
   fold(
     kernel: Kernel,

@@ -15,7 +15,6 @@ export const captureRate: ResponseModel = {
   observable: 'rate',
   levelBounds: (response) => [capture(response).baselinePerUs, Infinity],
   capBounds: [0, Infinity],
-  followsLevels: true,
   unit: () => 'cm⁻³',
   line(levelTop, levelBulk, { response }) {
     const { gammaCm3PerS, baselinePerUs } = capture(response);

@@ -22,8 +22,6 @@ export interface ResponseModel {
     levelBulk: number,
     input: Pick<FitInput, 'response' | 'carriers' | 'polarity'>,
   ): ConcentrationLine;
-  /** Whether the profile value depends on the fitted levels, so that their uncertainty widens its band. */
-  followsLevels: boolean;
   /** Change of the profile value that moves the observable by `change`, at this contrast of the levels. */
   valueOfChange(
     change: number,

@@ -8,7 +8,6 @@ export const twoLevel: ResponseModel = {
   observable: 'fraction',
   levelBounds: () => [0, 1],
   capBounds: [0, 1],
-  followsLevels: false,
   unit: (_response, carriers, polarity) =>
     carriers.bulkPerCm3 !== null && (polarity === 'depletion' || carriers.topPerCm3 !== null)
       ? 'cm⁻³'

@@ -1,7 +1,7 @@
 import { InversionError } from '../errors';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { valuesOf } from '../fit/theta-of';
-import { profileValue } from '../profile/carrier-profile';
+import { profileValue } from '../profile/profile-value';
 import type { FitAnswer, ParameterValues } from '../types';
 import { emptyBands, type Bands } from './bands';
 

@@ -1,107 +1,96 @@
+import { profileValue } from '../profile/profile-value';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { valuesOf } from '../fit/theta-of';
 import { RESPONSES } from '../response/responses';
-import type { Covariance, FitAnswer, ParameterName } from '../types';
+import type { FitAnswer, FitParameter, Interval, ParameterName } from '../types';
 import { emptyBands, SIGMAS_68, SIGMAS_95, type Bands } from './bands';
 
 /**
- * Bands from the covariance (delta method), the instant preview of the bootstrap. The edge is propagated on the argument of
- * s, (x − W)/w, so that the share stays between 0 and 1 and a sharp edge gets a band too; the levels, where the profile
- * follows them, are propagated linearly; both are added with their correlation.
+ * Bands from the intervals and correlations at the minimum, the instant preview of the bootstrap. Each free parameter is
+ * moved to the end of its own interval and the change a_k of the value at each depth taken; the changes that raise the
+ * value add up as √(Σ_kl s_k s_l ρ_kl a_k a_l), s_k the direction of the move; so do those that lower it. For small
+ * intervals this is the delta method √(gᵀCg); moves of finite size keep the share between 0 and 1 and give a sharp edge a
+ * band too.
  *
  * @returns null without a covariance.
  */
 export function bandsByDelta(
-  { input, problem }: PreparedFit,
+  prepared: PreparedFit,
   answer: FitAnswer,
   depthsNm: ArrayLike<number>,
 ): Bands | null {
   const { covariance } = answer;
   if (!covariance.ok) return null;
-  const { trial } = problem.model;
-  const values = valuesOf(answer);
-  const shape = trial.shapeNames.map((name) => values[name]!);
-  const response = RESPONSES[input.response.kind];
-  const { offset, slope } = response.line(values.levelTop!, values.levelBulk!, input);
-  const perLevel = response.followsLevels ? slope / (values.levelBulk! - values.levelTop!) : 0;
-  const c = covarianceBlock(covariance, [...trial.shapeNames, 'levelTop', 'levelBulk']);
-  const shapeCovariance = trial.shapeNames.map((_, a) => c[a]!.slice(0, trial.shapeNames.length));
-  const direction: number[] = [];
-  const bands = emptyBands('delta', depthsNm);
+  const free = answer.parameters.filter(
+    ({ name, held }) => !held && name !== 'depthScale' && name !== 'levelCap',
+  );
+  const correlation = (a: ParameterName, b: ParameterName): number => {
+    const k = covariance.names.indexOf(a);
+    const l = covariance.names.indexOf(b);
+    return a === b ? 1 : k < 0 || l < 0 ? 0 : covariance.correlation[k]![l]!;
+  };
+  const rho = free.map(({ name }) => free.map((other) => correlation(name, other.name)));
+  const { response, carriers, polarity } = prepared.input;
   const ceiling =
-    response.unit(input.response, input.carriers, input.polarity) === 'populated share'
+    RESPONSES[response.kind].unit(response, carriers, polarity) === 'populated share'
       ? 1
       : Infinity;
+  const bands = emptyBands('delta', depthsNm);
+  const edges = (
+    interval: 'interval68' | 'interval95',
+    sigmas: number,
+    lower: Float64Array,
+    upper: Float64Array,
+  ): void => {
+    const values = valuesOf(answer);
+    const centre = profileValue(prepared, values);
+    const moved = free.map((parameter) =>
+      endsOf(parameter, parameter[interval], sigmas).map((value) =>
+        profileValue(prepared, { ...values, [parameter.name]: value }),
+      ),
+    );
+    for (let k = 0; k < depthsNm.length; k++) {
+      const depth = depthsNm[k]!;
+      const value = centre(depth);
+      const changes = moved.map((ends) => ends.map((end) => end(depth) - value));
+      lower[k] = Math.max(0, value - spread(changes, rho, -1));
+      upper[k] = Math.min(ceiling, value + spread(changes, rho, 1));
+    }
+  };
+  edges('interval68', SIGMAS_68, bands.lower68, bands.upper68);
+  edges('interval95', SIGMAS_95, bands.lower95, bands.upper95);
+  // Intervals of curved problems need not nest in the direction that counts here; bands do.
   for (let k = 0; k < depthsNm.length; k++) {
-    const depth = depthsNm[k]!;
-    const share = trial.share(depth, shape);
-    const value = offset + slope * share;
-    trial.shiftDirection(depth, shape, direction);
-    const levels = Number.isFinite(perLevel)
-      ? levelPart(c, trial.shapeNames.length, direction, share, perLevel)
-      : { sigma: 0, correlation: 0 };
-    const side = (sigmas: number): number => {
-      const edgePart = slope * (trial.shiftedShare(depth, shape, shapeCovariance, sigmas) - share);
-      const levelShift = Math.abs(sigmas) * levels.sigma;
-      const cross =
-        2 *
-        levels.correlation *
-        Math.sign(slope * sigmas) *
-        Math.sign(edgePart) *
-        edgePart *
-        levelShift;
-      const width = Math.sqrt(
-        Math.max(
-          0,
-          edgePart * edgePart +
-            levelShift * levelShift +
-            Math.abs(cross) * Math.sign(levels.correlation * slope),
-        ),
-      );
-      return Math.sign(slope || 1) * Math.sign(sigmas) * width;
-    };
-    const clamp = (x: number): number => Math.min(ceiling, Math.max(0, x));
-    const ends68 = [value + side(-SIGMAS_68), value + side(SIGMAS_68)];
-    const ends95 = [value + side(-SIGMAS_95), value + side(SIGMAS_95)];
-    bands.lower68[k] = clamp(Math.min(...ends68));
-    bands.upper68[k] = clamp(Math.max(...ends68));
-    bands.lower95[k] = clamp(Math.min(...ends95));
-    bands.upper95[k] = clamp(Math.max(...ends95));
+    bands.lower95[k] = Math.min(bands.lower95[k]!, bands.lower68[k]!);
+    bands.upper95[k] = Math.max(bands.upper95[k]!, bands.upper68[k]!);
   }
   return bands;
 }
 
-/** Standard deviation of the level part of the value, and its correlation with the argument of s. */
-function levelPart(
-  c: number[][],
-  shapeCount: number,
-  direction: number[],
-  share: number,
-  perLevel: number,
-): { sigma: number; correlation: number } {
-  const weights = [(1 - share) * perLevel, share * perLevel];
-  let variance = 0;
-  let cross = 0;
-  let shift = 0;
-  for (let a = 0; a < 2; a++) {
-    for (let b = 0; b < 2; b++)
-      variance += weights[a]! * weights[b]! * c[shapeCount + a]![shapeCount + b]!;
-    for (let k = 0; k < shapeCount; k++)
-      cross += weights[a]! * direction[k]! * c[k]![shapeCount + a]!;
-  }
-  for (let k = 0; k < shapeCount; k++)
-    for (let l = 0; l < shapeCount; l++) shift += direction[k]! * direction[l]! * c[k]![l]!;
-  return {
-    sigma: Math.sqrt(Math.max(0, variance)),
-    correlation: variance > 0 && shift > 0 ? cross / Math.sqrt(variance * shift) : 0,
-  };
+/** Ends of an interval; an open end is where the linear error bar puts it. */
+function endsOf(
+  { value, sigma }: FitParameter,
+  [lower, upper]: Interval,
+  sigmas: number,
+): [number, number] {
+  const reach = sigmas * (sigma ?? 0);
+  return [lower ?? Math.max(0, value - reach), upper ?? value + reach];
 }
 
-/** Covariance among the named parameters; 0 for what is held or at a bound. */
-function covarianceBlock(
-  covariance: Extract<Covariance, { ok: true }>,
-  wanted: readonly ParameterName[],
-): number[][] {
-  const at = wanted.map((name) => covariance.names.indexOf(name));
-  return at.map((k) => at.map((l) => (k < 0 || l < 0 ? 0 : covariance.matrix[k]![l]!)));
+/** How far the value moves in one direction: `changes` holds, per parameter, the change at the lower and the upper end. */
+function spread(
+  changes: readonly (readonly number[])[],
+  rho: readonly (readonly number[])[],
+  direction: 1 | -1,
+): number {
+  const moves = changes.map(([atLower, atUpper]) => {
+    const down = Math.max(0, direction * atLower!);
+    const up = Math.max(0, direction * atUpper!);
+    return up >= down ? up : -down;
+  });
+  let variance = 0;
+  for (let a = 0; a < moves.length; a++) {
+    for (let b = 0; b < moves.length; b++) variance += rho[a]![b]! * moves[a]! * moves[b]!;
+  }
+  return Math.sqrt(Math.max(0, variance));
 }
