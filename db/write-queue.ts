@@ -11,7 +11,9 @@ export class WriteQueue {
   /** Waits for the writes before this one; the caller must call the answer once it is done. */
   async enter(): Promise<() => void> {
     if (this.#inside.getStore()) {
-      throw new Error('A write inside a transaction must go through the handle of that transaction.');
+      throw new Error(
+        'A write inside a transaction must go through the handle of that transaction.',
+      );
     }
     const before = this.#last;
     let leave = () => {};

@@ -21,6 +21,7 @@ export function answerRoute(
     try {
       const response = await handle(request, await route.params, await requestContext());
       response.headers.set('cache-control', 'private, no-store');
+      response.headers.set('x-content-type-options', 'nosniff');
       return response;
     } catch (error) {
       const { code, message, fields } = failureOf(error, name);

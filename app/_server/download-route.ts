@@ -23,7 +23,6 @@ export function downloadRoute<Answer>(
       headers: {
         'content-type': type,
         'content-disposition': disposition(name),
-        'x-content-type-options': 'nosniff',
       },
     });
   });

@@ -1,5 +1,6 @@
 import 'server-only';
 
+import type { FormState } from '@/components/ui/form-state';
 import type { Verb } from '@/db/access/context';
 import type { StartedSession } from '@/db/access/session';
 import { revalidatePath } from 'next/cache';
@@ -8,7 +9,6 @@ import { redirect } from 'next/navigation';
 import { requestContext } from './context';
 import { failureOf } from './failure';
 import { formInput } from './form-input';
-import type { FormState } from './form-state';
 import { safePath } from './safe-path';
 import { clearSessionCookie, setSessionCookie } from './session-cookie';
 
@@ -20,7 +20,7 @@ export interface FormActionOptions<Answer> {
 }
 
 export type FormAction<Answer> = (
-  previous: FormState<Answer>,
+  previous: FormState,
   data: FormData | object,
 ) => Promise<FormState<Answer>>;
 

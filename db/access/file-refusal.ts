@@ -9,7 +9,9 @@ export function fileRefusal(problems: readonly FileProblem[]): AppError {
   for (const problem of problems.slice(0, MOST_NAMED)) fields[placeOf(problem)] ??= problem.message;
   const [first, ...others] = problems;
   const more =
-    others.length === 0 ? '' : ` There ${others.length === 1 ? 'is' : 'are'} ${others.length} more.`;
+    others.length === 0
+      ? ''
+      : ` There ${others.length === 1 ? 'is' : 'are'} ${others.length} more.`;
   return new AppError('invalid', `${first?.message ?? 'The file cannot be read.'}${more}`, fields);
 }
 

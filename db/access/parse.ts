@@ -7,5 +7,9 @@ export function parse<Schema extends z.ZodType>(schema: Schema, input: unknown):
   if (parsed.success) return parsed.data;
   const fields: Record<string, string> = {};
   for (const issue of parsed.error.issues) fields[issue.path.join('.')] ??= issue.message;
-  throw new AppError('invalid', parsed.error.issues[0]?.message ?? 'Expected something else.', fields);
+  throw new AppError(
+    'invalid',
+    parsed.error.issues[0]?.message ?? 'Expected something else.',
+    fields,
+  );
 }

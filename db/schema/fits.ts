@@ -1,4 +1,10 @@
-import type { CarrierProfile, Check, FitAnswer, FitParameter, ScanPoint } from '@/lib/inversion/types';
+import type {
+  CarrierProfile,
+  Check,
+  FitAnswer,
+  FitParameter,
+  ScanPoint,
+} from '@/lib/inversion/types';
 import type { FitSpec } from '@/lib/schemas/fit';
 import { sql } from 'drizzle-orm';
 import {

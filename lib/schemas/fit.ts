@@ -50,7 +50,7 @@ export const fitSpecSchema = z.object({
 });
 export type FitSpec = z.infer<typeof fitSpecSchema>;
 
-const intervalSchema = z.tuple([z.number().nullable(), z.number().nullable()]);
+const intervalSchema = z.tuple([z.number().nullable(), z.number().nullable()]).readonly();
 
 export const fitParameterSchema = z.object({
   name: z.enum(PARAMETER_NAMES),
@@ -212,3 +212,9 @@ export const commentFitSchema = z.object({
   target: optionalText('About', 80),
 });
 export const compareFitsSchema = z.object({ ids: z.array(idSchema).min(2, 'Choose two fits or more.').max(8) });
+
+export const listFitsSchema = z.object({
+  scanId: idSchema.optional(),
+  sampleId: idSchema.optional(),
+  state: z.enum(FIT_STATES).optional(),
+});

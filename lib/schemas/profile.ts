@@ -39,3 +39,8 @@ export const exportProfileSchema = z.object({
   concentrationUnit: z.enum(['cm-3', 'm-3']).default('cm-3'),
 });
 export type ExportProfileInput = z.input<typeof exportProfileSchema>;
+
+export const listIssuedProfilesSchema = z.object({
+  /** Words that number, sample, material, scan or fit must contain. */
+  query: z.string().trim().max(200).default(''),
+});

@@ -30,7 +30,8 @@ export async function acceptInvitation(ctx: Context, input: unknown): Promise<St
     const { person: known, teamName } = await openInvitation(tx, token, ctx.now);
     if ((known === null) !== (person === null))
       throw new AppError('conflict', 'This address got an account just now. Open the link again.');
-    const userId = known?.id ?? (await addPerson(tx, { ...invitation, name, passwordHash }, ctx.now));
+    const userId =
+      known?.id ?? (await addPerson(tx, { ...invitation, name, passwordHash }, ctx.now));
     const by = { userId, teamId: invitation.teamId };
     await tx
       .insert(memberships)

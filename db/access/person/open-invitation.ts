@@ -22,6 +22,9 @@ export async function openInvitation(db: Handle, token: string, now: Date) {
       ),
     );
   if (row === undefined)
-    throw new AppError('not_found', 'This invitation was used, cancelled or has run out. Ask for a new one.');
+    throw new AppError(
+      'not_found',
+      'This invitation was used, cancelled or has run out. Ask for a new one.',
+    );
   return row;
 }

@@ -25,7 +25,8 @@ function whyNot(
   const twin = earlier.findIndex(
     (other) => Math.abs(other.energyKeV - energyKeV) <= SAME_ENERGY * energyKeV,
   );
-  if (twin >= 0) return `expected each energy once, but ${energyKeV} keV stands in row ${twin + 1}.`;
+  if (twin >= 0)
+    return `expected each energy once, but ${energyKeV} keV stands in row ${twin + 1}.`;
   const top = observable === 'fraction' ? 1 : Infinity;
   if (value >= -NOISE_SIGMAS * sigma && value <= top + NOISE_SIGMAS * sigma) return null;
   const range = observable === 'fraction' ? 'a fraction between 0 and 1' : 'a rate of 0 or more';

@@ -19,7 +19,12 @@ export async function restoreStoppingSet(ctx: Context, input: unknown): Promise<
       .where(and(eq(stoppingSets.id, id), eq(stoppingSets.teamId, viewer.teamId)))
       .returning({ name: stoppingSets.name });
     if (restored === undefined) throw new AppError('not_found', 'There is no such stopping set.');
-    await audit(tx, { by: viewer, at: ctx.now, verb: 'restore-stopping-set', subject: restored.name });
+    await audit(tx, {
+      by: viewer,
+      at: ctx.now,
+      verb: 'restore-stopping-set',
+      subject: restored.name,
+    });
     return { id };
   });
 }

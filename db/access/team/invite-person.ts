@@ -51,7 +51,12 @@ export async function invitePerson(ctx: Context, input: unknown): Promise<{ path
       createdAt: ctx.now,
       expiresAt: new Date(ctx.now.getTime() + VALID_FOR_MS),
     });
-    await audit(tx, { by: viewer, at: ctx.now, verb: 'invite-person', subject: `${email} as ${role}` });
+    await audit(tx, {
+      by: viewer,
+      at: ctx.now,
+      verb: 'invite-person',
+      subject: `${email} as ${role}`,
+    });
   });
   return { path: `/invitation/${token}` };
 }

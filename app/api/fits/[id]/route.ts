@@ -1,0 +1,4 @@
+import { jsonRoute } from '@/app/_server/json-route';
+import { readFit } from '@/db/access/fit/read-fit';
+
+export const GET = jsonRoute(readFit);

@@ -1,0 +1,4 @@
+/** The process runs. */
+export function GET(): Response {
+  return Response.json({ status: 'fine' }, { headers: { 'cache-control': 'no-store' } });
+}
