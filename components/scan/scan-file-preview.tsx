@@ -43,9 +43,11 @@ export function ScanFilePreview({ model, observable }: ScanFilePreviewProps) {
       {table && preview && (
         <>
           <FormatChoices
-            table={table}
-            onDelimiter={(delimiter) => choose({ delimiter })}
-            onDecimal={(decimal) => choose({ decimal })}
+            delimiter={choices.delimiter ?? table.delimiter}
+            decimal={choices.decimal ?? table.decimal}
+            // Another delimiter makes other columns: what was matched before means nothing then.
+            onDelimiter={(delimiter) => choose({ delimiter, columns: {} })}
+            onDecimal={(decimal) => choose({ decimal, delimiter: table.delimiter })}
           />
           <ColumnChoices
             table={table}

@@ -56,14 +56,8 @@ export function useScanFile(observable: Scan['observable'], nothingYet: string):
       setFile(taken);
       setChoices(NO_CHOICES);
     },
-    choose: (change) => setChoices((before) => withChange(before, change)),
+    choose: (change) => setChoices((before) => ({ ...before, ...change })),
   };
-}
-
-/** Another delimiter makes other columns: what was matched before means nothing then. */
-function withChange(before: ScanChoices, change: Partial<ScanChoices>): ScanChoices {
-  const columns = change.delimiter === undefined ? before.columns : {};
-  return { ...before, columns, ...change };
 }
 
 function blockedBy(

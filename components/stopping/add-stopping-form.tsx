@@ -69,20 +69,21 @@ export function AddStoppingForm() {
               {reading ? 'Reading…' : ''}
             </p>
             <ul aria-label="Files of the set" className="border-rule max-h-[32rem] overflow-y-auto border-t">
-              {preview?.files.map((file) => (
+              {entries.map((entry) => (
                 <FileRow
-                  key={file.entry.file.name}
-                  preview={file}
-                  onChoose={(change) => setChoices((before) => withFileChoices(before, file.entry.file.name, change))}
-                  onRemove={() => setChoices((before) => withoutFile(before, file.entry.file.name))}
+                  key={entry.file.name}
+                  entry={entry}
+                  preview={preview?.files.find((file) => file.entry.file === entry.file) ?? null}
+                  onChoose={(change) => setChoices((before) => withFileChoices(before, entry.file.name, change))}
+                  onRemove={() => setChoices((before) => withoutFile(before, entry.file.name))}
                 />
               ))}
             </ul>
-            {preview && (
+            {preview && preview.files.length > 0 && (
               <>
                 <LayoutChoices
                   layout={preview.layout}
-                  implanted={choices.implanted}
+                  choices={choices}
                   onChoose={(change) => setChoices((before) => ({ ...before, ...change }))}
                 />
                 <ProblemList

@@ -1,5 +1,6 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 
 import { ButtonLink } from '@/components/ui/button-link';
@@ -18,9 +19,10 @@ interface EditStoppingFormProps {
 
 /** Name and origin of a stored set; its profiles and files never change. */
 export function EditStoppingForm({ set, action }: EditStoppingFormProps) {
+  const router = useRouter();
   const [draft, setDraft] = useState(() => draftOfStopping(set));
   return (
-    <Form action={action} label={`Edit ${set.name}`} className="max-w-xl">
+    <Form action={action} label={`Edit ${set.name}`} className="max-w-xl" onDone={() => router.push(`/stopping/${set.id}`)}>
       <input type="hidden" name="id" value={set.id} />
       <StoppingMetaFields draft={draft} faults={{}} onChange={setDraft} />
       <div className="flex flex-wrap gap-2">

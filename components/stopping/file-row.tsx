@@ -9,17 +9,21 @@ import { LeftOutLines } from '@/components/upload/left-out-lines';
 import { tableWords } from '@/components/upload/table-words';
 
 import type { FilePreview } from './preview-stopping';
-import type { FileChoices } from './stopping-choices';
+import type { FileChoices, StoppingEntry } from './stopping-choices';
 
 interface FileRowProps {
-  preview: FilePreview;
+  entry: StoppingEntry;
+  /** What was recognised; null while the file is read. */
+  preview: FilePreview | null;
   onChoose: (change: Partial<FileChoices>) => void;
   onRemove: () => void;
 }
 
 /** One file of a stopping set: what was recognised in it, and how to correct that. */
-export function FileRow({ preview: { entry, table, energiesKeV }, onChoose, onRemove }: FileRowProps) {
+export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
   const { file, skipLines } = entry;
+  const table = preview?.table ?? null;
+  const energiesKeV = preview?.energiesKeV ?? [];
   return (
     <li className="border-rule grid gap-2 border-b py-3 text-sm">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
@@ -27,7 +31,7 @@ export function FileRow({ preview: { entry, table, energiesKeV }, onChoose, onRe
           <strong className="font-semibold break-all">{file.name}</strong>{' '}
           <span className="text-ink-2">
             {byteWords(file.bytes.byteLength)}
-            {table ? ` · ${tableWords(table)} · ${energyWords(energiesKeV)}` : ' · not readable as a table'}
+            {foundWords(preview)}
           </span>
         </p>
         <Button size="small" variant="quiet" aria-label={`Remove ${file.name}`} onClick={onRemove}>
@@ -38,7 +42,10 @@ export function FileRow({ preview: { entry, table, energiesKeV }, onChoose, onRe
         <details>
           <summary className="text-ink-2 py-1">Change how it is read</summary>
           <div className="mt-1 grid gap-3 sm:grid-cols-[2fr_1fr]">
-            <FormatChoices table={table} onDelimiter={(delimiter) => onChoose({ delimiter })} onDecimal={(decimal) => onChoose({ decimal })} />
+            <FormatChoices
+              delimiter={entry.delimiter ?? table.delimiter}
+              decimal={entry.decimal ?? table.decimal}
+              onDelimiter={(delimiter) => onChoose({ delimiter })} onDecimal={(decimal) => onChoose({ decimal, delimiter: table.delimiter })} />
           </div>
         </details>
       )}
@@ -59,6 +66,12 @@ export function FileRow({ preview: { entry, table, energiesKeV }, onChoose, onRe
       />
     </li>
   );
+}
+
+function foundWords(preview: FilePreview | null): string {
+  if (preview === null) return ' · Reading…';
+  const { table, energiesKeV } = preview;
+  return table === null ? ' · not readable as a table' : ` · ${tableWords(table)} · ${energyWords(energiesKeV)}`;
 }
 
 function energyWords(energiesKeV: readonly (number | null)[]): string {

@@ -8,8 +8,9 @@ import type { Layout } from './preview-stopping';
 import type { StoppingChoices } from './stopping-choices';
 
 interface LayoutChoicesProps {
+  /** As recognised; what was chosen goes before it. */
   layout: Layout;
-  implanted: string | null;
+  choices: StoppingChoices;
   onChoose: (change: Partial<Omit<StoppingChoices, 'entries'>>) => void;
 }
 
@@ -28,31 +29,32 @@ const WEIGHTS = [
 ] as const;
 
 /** What the numbers in the files mean; the same for all files of a set. */
-export function LayoutChoices({ layout, implanted, onChoose }: LayoutChoicesProps) {
+export function LayoutChoices({ layout, choices, onChoose }: LayoutChoicesProps) {
+  const { implanted, depthUnit, positionsAre, weightsAre } = choices;
   return (
     <div className="grid gap-3 sm:grid-cols-2">
       <Field label="Depths are in">
         <Select
           options={DEPTH_UNITS}
-          value={layout.depthUnit}
+          value={depthUnit ?? layout.depthUnit}
           onChange={(event) => onChoose({ depthUnit: known(DEPTH_UNITS, event.target.value) })}
         />
       </Field>
       <Field label="Depths are">
         <Select
           options={POSITIONS}
-          value={layout.positionsAre}
+          value={positionsAre ?? layout.positionsAre}
           onChange={(event) => onChoose({ positionsAre: known(POSITIONS, event.target.value) })}
         />
       </Field>
       <Field label="Numbers are">
         <Select
           options={WEIGHTS}
-          value={layout.weightsAre}
+          value={weightsAre ?? layout.weightsAre}
           onChange={(event) => onChoose({ weightsAre: known(WEIGHTS, event.target.value) })}
         />
       </Field>
-      {layout.weightsAre === 'counts' && (
+      {(weightsAre ?? layout.weightsAre) === 'counts' && (
         <Field label="Muons implanted per energy" optional hint="Gives the share that did not stop within the depths.">
           <TextInput
             numeric

@@ -2,7 +2,7 @@
 
 import { Field } from '@/components/ui/field';
 import { Select } from '@/components/ui/select';
-import type { Decimal, Delimiter, Table } from '@/lib/files/table';
+import type { Decimal, Delimiter } from '@/lib/files/table';
 
 const DELIMITERS: Record<Delimiter, string> = {
   comma: 'comma ,',
@@ -13,17 +13,18 @@ const DELIMITERS: Record<Delimiter, string> = {
 const DECIMALS: Record<Decimal, string> = { point: 'point 0.5', comma: 'comma 0,5' };
 
 interface FormatChoicesProps {
-  table: Table;
+  delimiter: Delimiter;
+  decimal: Decimal;
   onDelimiter: (delimiter: Delimiter) => void;
   onDecimal: (decimal: Decimal) => void;
 }
 
 /** How the text was taken apart, open to correction. */
-export function FormatChoices({ table, onDelimiter, onDecimal }: FormatChoicesProps) {
+export function FormatChoices({ delimiter, decimal, onDelimiter, onDecimal }: FormatChoicesProps) {
   return (
     <div className="grid grid-cols-2 gap-3">
       <Field label="Between cells">
-        <Select value={table.delimiter} onChange={(event) => onDelimiter(event.target.value as Delimiter)}>
+        <Select value={delimiter} onChange={(event) => onDelimiter(event.target.value as Delimiter)}>
           {Object.entries(DELIMITERS).map(([value, words]) => (
             <option key={value} value={value}>
               {words}
@@ -32,7 +33,7 @@ export function FormatChoices({ table, onDelimiter, onDecimal }: FormatChoicesPr
         </Select>
       </Field>
       <Field label="Decimal mark">
-        <Select value={table.decimal} onChange={(event) => onDecimal(event.target.value as Decimal)}>
+        <Select value={decimal} onChange={(event) => onDecimal(event.target.value as Decimal)}>
           {Object.entries(DECIMALS).map(([value, words]) => (
             <option key={value} value={value}>
               {words}
