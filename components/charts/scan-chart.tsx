@@ -19,6 +19,8 @@ export interface ScanChartProps {
   highlightedKeV?: number | null;
   /** Energies that speak about the depth under the pointer. */
   speakingKeV?: readonly number[] | null;
+  /** A curve drawn by hand: over the others, and without a say in the vertical scale, which would run away under the pointer. */
+  drawn?: ScanCurve | null;
   description?: string;
 }
 
@@ -32,10 +34,12 @@ export function ScanChart({
   keep,
   highlightedKeV = null,
   speakingKeV = null,
+  drawn = null,
   description,
 }: ScanChartProps) {
   const layout = scanLayout({ marks, curves, width, height, keep });
-  const { x, y, left, right, bottom } = layout;
+  const { x, y, left, right, top, bottom } = layout;
+  const all = drawn ? [...curves, drawn] : curves;
   const range = energyRange(marks.map((mark) => mark.energyKeV));
   return (
     <svg
@@ -62,17 +66,16 @@ export function ScanChart({
       <AxisTitle x={(left + right) / 2} y={height - 8} anchor="middle">
         implantation energy (keV)
       </AxisTitle>
-      <Legend entries={curves} right={right} y={14} />
-      {[...curves].reverse().map((curve) => (
-        <path
-          key={curve.label}
-          d={curvePath(curve, layout)}
-          fill="none"
-          stroke={strokeOf(curve)}
-          strokeWidth={curve.style === 'solid' ? 2.25 : 1.6}
-          strokeDasharray={dashOf(curve.style)}
-        />
-      ))}
+      <Legend entries={all} right={right} y={14} />
+      {/* A nested svg clips a drawn curve that leaves the panel. */}
+      <svg x={left} y={top} width={right - left} height={bottom - top} overflow="hidden">
+        <g transform={`translate(${-left} ${-top})`}>
+          {[...curves].reverse().map((curve) => (
+            <CurveLine key={curve.label} curve={curve} layout={layout} />
+          ))}
+          {drawn && <CurveLine curve={drawn} layout={layout} />}
+        </g>
+      </svg>
       {marks.map((mark) => (
         <Point
           key={mark.energyKeV}
@@ -88,7 +91,19 @@ export function ScanChart({
   );
 }
 
-export function curvePath(
+function CurveLine({ curve, layout }: { curve: ScanCurve; layout: ScanLayout }) {
+  return (
+    <path
+      d={curvePath(curve, layout)}
+      fill="none"
+      stroke={strokeOf(curve)}
+      strokeWidth={curve.style === 'solid' ? 2.25 : 1.6}
+      strokeDasharray={dashOf(curve.style)}
+    />
+  );
+}
+
+function curvePath(
   { energiesKeV, values }: Pick<ScanCurve, 'energiesKeV' | 'values'>,
   { x, y }: ScanLayout,
 ): string {

@@ -65,10 +65,10 @@ export function fromAddress(
 ): { assumptions: Assumptions; unread: string[] } {
   const unread: string[] = [];
   let read = { ...defaults };
-  const take = (word: string, use: (text: string) => Assumptions | null) => {
+  const take = (word: string, reader: (text: string) => Assumptions | null) => {
     const text = address[word];
     if (text === null || text === undefined) return;
-    const next = use(text);
+    const next = reader(text);
     if (next) read = next;
     else unread.push(word);
   };
