@@ -8,13 +8,21 @@ import { parameterText } from './parameter-value';
 type FitParameter = Fit['answer']['parameters'][number];
 
 /** Every parameter with its intervals, and what was assumed of it: free, held or prior, with the origin. */
-export function ParameterTable({ fit }: { fit: Fit }) {
+export function ParameterTable({
+  fit,
+  captionHidden = false,
+}: {
+  fit: Fit;
+  /** A heading above says the same. */
+  captionHidden?: boolean;
+}) {
   const rows = PARAMETER_ORDER.flatMap(
     (name) => fit.answer.parameters.find((parameter) => parameter.name === name) ?? [],
   );
   return (
     <DataTable
       caption="Parameters"
+      captionHidden={captionHidden}
       stacks
       rows={rows}
       rowKey={(row) => row.name}
