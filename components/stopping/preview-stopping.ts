@@ -1,7 +1,8 @@
+import { byteWords } from '@/components/upload/byte-words';
 import type { ChosenFile } from '@/components/upload/chosen-file';
 import { typedNumber } from '@/components/upload/typed-number';
-import { stoppingColumns } from '@/lib/files/guess-stopping-layout';
 import type { FileProblem } from '@/lib/files/problem';
+import { profileEnergies } from '@/lib/files/profile-energies';
 import { readTable, type ReadTableResult } from '@/lib/files/read-table';
 import { guessStoppingLayout, readStoppingFiles, type StoppingReading, type StoppingLayout } from '@/lib/files/stopping-file';
 import type { Table } from '@/lib/files/table';
@@ -37,12 +38,12 @@ export function previewStopping(choices: StoppingChoices, cache: TableCache): St
   const tables = results.flatMap((result) => (result.ok ? [result.table] : []));
   const refused = results.flatMap((result) => (result.ok ? [] : result.problems));
   const layout = settleLayout(choices, tables);
-  const files = entries.map((entry, index) => filePreview(entry, results[index], tables));
-  const typingFault = whyTypedWrong(choices);
-  const mayRead = tables.length > 0 && refused.length === 0 && typingFault === null;
+  const files = entries.map((entry, index) => filePreview(entry, results[index]));
+  const inputFault = whyTooMuch(entries) ?? whyTypedWrong(choices);
+  const mayRead = tables.length > 0 && refused.length === 0 && inputFault === null;
   const reading = mayRead ? readAll(tables, files, layout) : { set: null, problems: [], warnings: [] };
   const problems = [...refused, ...reading.problems];
-  const blocked = whyBlocked(problems, typingFault, reading.set === null);
+  const blocked = whyBlocked(problems, inputFault, reading.set === null);
   const sent = blocked === null ? toSend(files, layout) : null;
   return { ...reading, problems, files, layout, blocked, sent };
 }
@@ -68,19 +69,26 @@ function settleLayout(choices: StoppingChoices, tables: readonly Table[]): Layou
   };
 }
 
-function filePreview(entry: StoppingEntry, result: ReadTableResult | undefined, tables: readonly Table[]): FilePreview {
+function filePreview(entry: StoppingEntry, result: ReadTableResult | undefined): FilePreview {
   if (!result?.ok) return { entry, table: null, energiesKeV: [] };
   const { table } = result;
-  const found = stoppingColumns(tables).filter((column) => column.table === table);
-  const typed = typedNumber(entry.energy);
-  const energiesKeV = found.length === 1 && typed !== null ? [typed] : found.map(({ energyKeV }) => energyKeV);
-  return { entry, table, energiesKeV };
+  return { entry, table, energiesKeV: profileEnergies([table], [typedNumber(entry.energy)]) };
 }
 
 function readAll(tables: readonly Table[], files: readonly FilePreview[], layout: Layout): StoppingReading {
   const skipLines = Object.fromEntries(files.map(({ entry }) => [entry.file.name, [...entry.skipLines]]));
   const energiesKeV = files.flatMap((file) => file.energiesKeV);
   return readStoppingFiles(tables, { ...layout, energiesKeV, skipLines });
+}
+
+/** What the server takes in one upload; said here before anything is sent. */
+const MOST_FILES = 200;
+const MOST_BYTES = 20 * 1024 * 1024;
+
+function whyTooMuch(entries: readonly StoppingEntry[]): string | null {
+  if (entries.length > MOST_FILES) return `Expected at most ${MOST_FILES} files, found ${entries.length}.`;
+  const total = entries.reduce((sum, { file }) => sum + file.bytes.byteLength, 0);
+  return total > MOST_BYTES ? `The files have ${byteWords(total)} together; expected at most ${byteWords(MOST_BYTES)}.` : null;
 }
 
 /** A typed number that is none would silently be read as "not given"; it is said instead. */
@@ -95,8 +103,8 @@ function isAboveZeroOrBlank(text: string): boolean {
   return value === null || value > 0;
 }
 
-function whyBlocked(problems: readonly FileProblem[], typingFault: string | null, noSet: boolean): string | null {
-  if (typingFault !== null) return typingFault;
+function whyBlocked(problems: readonly FileProblem[], inputFault: string | null, noSet: boolean): string | null {
+  if (inputFault !== null) return inputFault;
   if (problems.length === 1) return 'One problem needs mending.';
   if (problems.length > 1) return `${problems.length.toLocaleString('en')} problems need mending.`;
   return noSet ? 'Choose the files first.' : null;

@@ -1,7 +1,7 @@
 'use client';
 
-import { PageFailure } from '@/components/review/page-failure';
+import { PageError } from '@/components/shell/page-error';
 
-export default function Failure({ reset }: { reset: () => void }) {
-  return <PageFailure what="The stopping set" retry={reset} />;
+export default function Failure({ error, retry }: { error: unknown; retry: () => void }) {
+  return <PageError error={error} retry={retry} />;
 }

@@ -1,5 +1,5 @@
-import { PageSkeleton } from '@/components/review/page-skeleton';
+import { PageLoading } from '@/components/shell/page-loading';
 
 export default function Loading() {
-  return <PageSkeleton what="Loading…" blocks={['line', 'figure', 'line']} />;
+  return <PageLoading />;
 }

@@ -1,6 +1,7 @@
 import { fileRefusal } from '@/db/access/file-refusal';
 import { AppError } from '@/lib/errors';
 import { fileProblem, type FileProblem } from '@/lib/files/problem';
+import { profileEnergies } from '@/lib/files/profile-energies';
 import { readTable } from '@/lib/files/read-table';
 import { readStoppingFiles } from '@/lib/files/stopping-file';
 import type { Table } from '@/lib/files/table';
@@ -32,7 +33,10 @@ export function readUploadedSet({ reading, files }: Upload): {
     positionsAre: reading.positionsAre,
     weightsAre: reading.weightsAre,
     implantedPerEnergy: reading.implantedPerEnergy,
-    energiesKeV: reading.files.map(({ energyKeV }) => energyKeV),
+    energiesKeV: profileEnergies(
+      tables,
+      reading.files.map(({ energyKeV }) => energyKeV),
+    ),
     skipLines: Object.fromEntries(
       files.map(({ name }, index) => [name, reading.files[index]?.skipLines ?? []]),
     ),
