@@ -50,7 +50,9 @@ describe('the whole way from files to an exported profile', async () => {
     const { csv } = await exportProfile(await team.modeller.context(), query);
     expect(csv).toContain(`# issued profile: ${issued.number}\r\n`);
     expect(csv).toContain('depth_nm,concentration_cm-3,lower68_cm-3');
-    const page = await readIssuedProfile(await team.owner.context(), { id: issued.issuedProfileId });
+    const page = await readIssuedProfile(await team.owner.context(), {
+      id: issued.issuedProfileId,
+    });
     expect(page.exports).toHaveLength(1);
     expect(page.fit.events.map(({ kind }) => kind)).toEqual(['submitted', 'accepted']);
 

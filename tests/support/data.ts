@@ -7,7 +7,6 @@ import { readScan } from '@/db/access/scan/read-scan';
 import { createStoppingSet } from '@/db/access/stopping-set/create-stopping-set';
 import { loadStoppingSet } from '@/db/access/stopping-set/load-stopping-set';
 import { scanTemplate, stoppingMatrixTemplate } from '@/lib/files/templates';
-import { carrierProfile, fit, prepareFit } from '@/lib/inversion/index';
 import type { FitSpec, SaveFitInput } from '@/lib/schemas/fit';
 import type { SampleInput } from '@/lib/schemas/sample';
 
@@ -108,14 +107,17 @@ export async function honestFit(
   const stopping = await loadStoppingSet(ctx.db, stoppingSetId);
   const points = frozenPoints(scan.points, spec.switchedOffKeV);
   const input = fitInputOf({ observable: scan.observable, points, spec, stopping });
-  const prepared = prepareFit(input);
-  const outcome = fit(prepared);
-  if (outcome.status === 'no-minimum') throw new Error(outcome.reason);
-  const preview = carrierProfile(prepared, outcome.answer);
-  const depthsNm = preview.points.map(({ depthNm }) => depthNm);
-  const { answer, carrierProfile: profile } = await recompute(input, { ...spec, depthsNm });
+  const { answer, carrierProfile: profile } = await recompute(input, spec);
   const claimed = JSON.parse(JSON.stringify({ answer, profile })) as SaveFitInput['claimed'];
-  return { scanId, stoppingSetId, name: 'Graded edge', notes: '', parentFitId: null, spec, claimed };
+  return {
+    scanId,
+    stoppingSetId,
+    name: 'Graded edge',
+    notes: '',
+    parentFitId: null,
+    spec,
+    claimed,
+  };
 }
 
 export async function savedFit(

@@ -14,7 +14,10 @@ export interface TestDatabase extends OpenDatabase {
 }
 
 /** A migrated database file of its own; gone when the test file, or with `forTest` the test, is done. */
-export async function testDatabase({ forTest = false, migrated = true } = {}): Promise<TestDatabase> {
+export async function testDatabase({
+  forTest = false,
+  migrated = true,
+} = {}): Promise<TestDatabase> {
   const folder = mkdtempSync(join(tmpdir(), 'strandline-test-'));
   const url = `file:${join(folder, 'test.db')}`;
   const opened = await openDatabase(url);

@@ -1,6 +1,7 @@
 import { AppError } from '@/lib/errors';
 import {
   carrierProfile,
+  defaultDepthGrid,
   fit,
   InversionError,
   prepareFit,
@@ -23,7 +24,8 @@ interface Wanted {
   seed: number;
   /** 0 for bands from the covariance. */
   resamples: number;
-  depthsNm: readonly number[];
+  /** The grid of the library when left out. */
+  depthsNm?: readonly number[];
 }
 
 /** The whole answer from the inputs alone, with the same library as the browser's. */
@@ -33,7 +35,7 @@ export async function recompute(input: FitInput, wanted: Wanted): Promise<Recomp
     const outcome = fit(prepared);
     if (outcome.status === 'no-minimum') throw new AppError('invalid', outcome.reason);
     const { answer } = outcome;
-    const depthsNm = Float64Array.from(wanted.depthsNm);
+    const depthsNm = Float64Array.from(wanted.depthsNm ?? defaultDepthGrid(prepared, answer));
     const bands = await bandsOn(prepared, answer, depthsNm, wanted);
     const profile = carrierProfile(prepared, answer, bands, { depthsNm });
     return { answer, carrierProfile: profile, checks: runChecks(prepared, answer, profile) };

@@ -1,0 +1,2 @@
+/** Shown openly: it guards invented data only. */
+export const DEMO_PASSWORD = 'northbank-demo';
