@@ -12,7 +12,7 @@ export function CompareSection() {
         and Anderson 2002). Fits of different points are never weighed against each other.
       </p>
       <Formula words="A I C c equals chi squared plus two k plus two k times k plus one over n minus k minus one">
-        <mi>AICc</mi>
+        <mi className="upright">AICc</mi>
         <mo>=</mo>
         <Squared>
           <mi>χ</mi>
@@ -43,7 +43,7 @@ export function CompareSection() {
             </>
           }
         />
-        <mtext>, BIC = χ² + k ln n, weight ∝ exp(−½ ΔAICc)</mtext>
+        <mtext>, BIC = χ² + k ln n, weight ∝ exp(−½ ΔAICc)</mtext>
       </Formula>
       <p>
         <strong>Sharp against graded.</strong> A width of zero lies on the boundary, so the fall of
@@ -66,7 +66,7 @@ export function CompareSection() {
         </Round>
         <mo>=</mo>
         <Frac top={<mn>1</mn>} bottom={<mn>2</mn>} />
-        <mi>erfc</mi>
+        <mi className="upright">erfc</mi>
         <msqrt>
           <mi>T</mi>
           <mo>/</mo>

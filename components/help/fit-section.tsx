@@ -50,7 +50,7 @@ export function FitSection() {
 
 function Ratio({ value, index, minus }: { value: string; index: string; minus: React.ReactNode }) {
   return (
-    <Round>
+    <Round tall>
       <Frac
         top={
           <>

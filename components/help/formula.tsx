@@ -15,7 +15,7 @@ export function Formula({ words, children }: FormulaProps) {
       role="group"
       aria-label={words}
     >
-      <math display="inline">
+      <math display="block">
         <mrow>{children}</mrow>
       </math>
     </p>

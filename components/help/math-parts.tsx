@@ -37,13 +37,14 @@ export function Sum({ over }: { over: string }) {
   );
 }
 
-/** Round brackets that grow with what they hold. */
-export function Round({ children }: { children: ReactNode }) {
+/** Round brackets; `tall` ones grow with the fraction that they hold. */
+export function Round({ tall = false, children }: { tall?: boolean; children: ReactNode }) {
+  const stretchy = tall ? 'true' : 'false';
   return (
     <mrow>
-      <mo>(</mo>
+      <mo stretchy={stretchy}>(</mo>
       {children}
-      <mo>)</mo>
+      <mo stretchy={stretchy}>)</mo>
     </mrow>
   );
 }

@@ -1,6 +1,6 @@
 import type { HTMLAttributes } from 'react';
 
-type Attributes = HTMLAttributes<MathMLElement> & {
+type MathAttributes = HTMLAttributes<MathMLElement> & {
   display?: 'block' | 'inline';
   stretchy?: 'true' | 'false';
 };
@@ -9,18 +9,18 @@ type Attributes = HTMLAttributes<MathMLElement> & {
 declare module 'react' {
   namespace JSX {
     interface IntrinsicElements {
-      math: Attributes;
-      mrow: Attributes;
-      mi: Attributes;
-      mn: Attributes;
-      mo: Attributes;
-      mtext: Attributes;
-      mfrac: Attributes;
-      msqrt: Attributes;
-      msub: Attributes;
-      msup: Attributes;
-      msubsup: Attributes;
-      munder: Attributes;
+      math: MathAttributes;
+      mrow: MathAttributes;
+      mi: MathAttributes;
+      mn: MathAttributes;
+      mo: MathAttributes;
+      mtext: MathAttributes;
+      mfrac: MathAttributes;
+      msqrt: MathAttributes;
+      msub: MathAttributes;
+      msup: MathAttributes;
+      msubsup: MathAttributes;
+      munder: MathAttributes;
     }
   }
 }

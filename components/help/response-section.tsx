@@ -45,7 +45,7 @@ export function ResponseSection() {
           <mi>Λ</mi>
           <mn>0</mn>
         </msub>
-        <mtext>, so p (cm⁻³) = (Λ − Λ₀) · 10⁶ / γ with rates in µs⁻¹ and γ in cm³ s⁻¹</mtext>
+        <mtext>, so p (cm⁻³) = (Λ − Λ₀) · 10⁶ / γ with rates in µs⁻¹ and γ in cm³ s⁻¹</mtext>
       </Formula>
       <p>
         The uncertainty of γ moves the whole profile at once. It is shown apart and is never part of

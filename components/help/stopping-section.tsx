@@ -46,7 +46,7 @@ export function StoppingSection() {
           <mo>;</mo>
           <Sub base="E" index="2" />
         </Round>
-        <mtext>, t linear in ln E</mtext>
+        <mtext>, t linear in ln E</mtext>
       </Formula>
       <p>
         The <strong>depth scale</strong> <i>a</i> stretches all depths, x → a·x: the systematic

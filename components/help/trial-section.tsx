@@ -19,8 +19,8 @@ export function TrialSection() {
         </Round>
         <mo>=</mo>
         <Frac top={<mn>1</mn>} bottom={<mn>2</mn>} />
-        <mi>erfc</mi>
-        <Round>
+        <mi className="upright">erfc</mi>
+        <Round tall>
           <Frac
             top={
               <>
@@ -60,7 +60,7 @@ export function TrialSection() {
             <mi>l</mi>
           </mrow>
         </mfrac>
-        <mtext>, </mtext>
+        <mtext>, </mtext>
         <mi>G</mi>
         <Round>
           <mi>x</mi>
@@ -74,9 +74,9 @@ export function TrialSection() {
             </msqrt>
           }
         />
-        <Round>
+        <Round tall>
           <mi>z</mi>
-          <mi>erfc</mi>
+          <mi className="upright">erfc</mi>
           <Round>
             <mo>−</mo>
             <mi>z</mi>
@@ -101,7 +101,7 @@ export function TrialSection() {
             }
           />
         </Round>
-        <mtext>, </mtext>
+        <mtext>, </mtext>
         <mi>z</mi>
         <mo>=</mo>
         <Frac
