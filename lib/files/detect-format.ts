@@ -4,7 +4,7 @@ import type { Decimal, Delimiter } from './table';
 
 /** Ties go to the earlier one: a tab or a semicolon is hardly ever anything else. */
 const CANDIDATES: readonly Delimiter[] = ['tab', 'semicolon', 'comma', 'blanks'];
-const SAMPLE_LINES = 200;
+const SAMPLE_LINES = 50;
 
 export interface Format {
   delimiter: Delimiter;

@@ -5,6 +5,8 @@ import { fileProblem, type FileProblem } from './problem';
 import type { StoppingReadOptions } from './stopping-options';
 import type { Table, TableRow } from './table';
 
+/** Nobody mends more by hand; a file with so many faults is another kind of file. */
+const MOST_PROBLEMS = 1000;
 const NM_PER: Record<DepthUnit, number> = { nm: 1, A: 0.1, um: 1000 };
 
 export interface StoppingRows {
@@ -33,6 +35,11 @@ export function readStoppingRows(
     warnings: [],
   };
   for (const row of rows) {
+    if (result.problems.length >= MOST_PROBLEMS) {
+      const sentence = `more than ${MOST_PROBLEMS} faults; the rest of the file was not looked at.`;
+      result.problems.push(fileProblem({ fileName: table.fileName, line: row.line }, sentence));
+      break;
+    }
     readDepth(table, row, options.depthUnit, result);
     if (row === closing) continue;
     columns.forEach(({ column }, index) => readWeight(table, row, column, result, index));

@@ -1,3 +1,4 @@
+import { MAX_BINS, MAX_ENERGIES } from '@/lib/inversion/index';
 import { decodeText } from './decode-text';
 import { detectFormat, type Format } from './detect-format';
 import { HEADING, isKnownHeading } from './heading-words';
@@ -5,6 +6,11 @@ import { parseNumber, saysNotANumber } from './parse-number';
 import { fileProblem, type FileProblem } from './problem';
 import { splitLine, splitRows } from './split-cells';
 import type { Decimal, Delimiter, Table, TableRow } from './table';
+
+/** A header, a line per depth bin and a closing edge. */
+const MOST_LINES = MAX_BINS + 2;
+/** Room for a hundred characters in each column of the largest stopping matrix. */
+const MOST_CHARACTERS = 100 * MAX_ENERGIES;
 
 export type ReadTableOptions = Partial<Format>;
 export type ReadTableResult = { ok: true; table: Table } | { ok: false; problems: FileProblem[] };
@@ -21,10 +27,9 @@ export function readTable(
 ): ReadTableResult {
   const decoded = decodeText(fileName, bytes);
   if (!decoded.ok) return { ok: false, problems: [decoded.problem] };
-  const format = detectFormat(
-    decoded.lines.filter((line) => !/^\s*[#%;]/.test(line)),
-    options,
-  );
+  const tooMuch = tooMuchProblem(fileName, decoded.lines);
+  if (tooMuch) return { ok: false, problems: [tooMuch] };
+  const format = detectFormat(decoded.lines.filter(isData), options);
   const { lines, comments } = takeComments(decoded.lines, format);
   const { rows, badQuotes } = splitRows(lines, format.delimiter);
   if (badQuotes.length > 0) {
@@ -39,6 +44,24 @@ export function readTable(
     };
   }
   return { ok: true, table: toTable(fileName, format, rows, comments) };
+}
+
+/** Neither blank nor, as far as can be told without the delimiter, a comment. */
+function isData(line: string): boolean {
+  return /^\s*[^\s#%;]/.test(line);
+}
+
+/** Before anything is split: no table that the product takes is longer or wider than this. */
+function tooMuchProblem(fileName: string, lines: readonly string[]): FileProblem | null {
+  const wide = lines.findIndex((line) => line.length > MOST_CHARACTERS);
+  if (wide >= 0) {
+    const sentence = `expected at most ${MOST_CHARACTERS} characters on a line, found ${lines[wide]?.length}.`;
+    return fileProblem({ fileName, line: wide + 1 }, sentence);
+  }
+  const filled = lines.filter(isData).length;
+  if (filled <= MOST_LINES) return null;
+  const sentence = `expected at most ${MAX_BINS} lines of numbers, found ${filled}.`;
+  return fileProblem({ fileName }, sentence);
 }
 
 function quoteProblem(fileName: string, line: number): FileProblem {
@@ -86,7 +109,8 @@ function toTable(
   rows: TableRow[],
   comments: Table['comments'],
 ): Table {
-  const columnCount = Math.max(...rows.map((row) => filledLength(row.cells)));
+  // Not Math.max(...): a file of the largest size has more rows than a call may have arguments.
+  const columnCount = rows.reduce((most, row) => Math.max(most, filledLength(row.cells)), 0);
   const trimmed = rows.map(({ line, cells }) => ({ line, cells: cells.slice(0, columnCount) }));
   const [first, ...rest] = trimmed;
   const base = { fileName, delimiter, decimal, comments, columnCount };

@@ -54,8 +54,7 @@ export function guessEnergyUnit(table: Table, energyColumn: number): 'keV' | 'eV
   const heading = table.header?.[energyColumn]?.toLowerCase() ?? '';
   if (/kev/.test(heading)) return 'keV';
   if (/(?:^|[^a-z])ev(?:[^a-z]|$)/.test(heading)) return 'eV';
-  const values = numbersIn(table, energyColumn);
-  return values.length > 0 && Math.max(...values) > LARGEST_KEV ? 'eV' : 'keV';
+  return numbersIn(table, energyColumn).some((value) => value > LARGEST_KEV) ? 'eV' : 'keV';
 }
 
 function findHeading(table: Table, pattern: RegExp, taken: ReadonlySet<number>): number | null {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { readTable } from '@/lib/files/read-table';
-import { MAX_FILE_BYTES } from '@/lib/inversion/index';
+import { MAX_BINS, MAX_FILE_BYTES } from '@/lib/inversion/index';
 import { fixtureBytes, fixtureTable, tableOf } from '../support/fixture';
 
 describe('how a file is delimited', () => {
@@ -128,14 +128,30 @@ describe('what is refused', () => {
     expect(read.ok ? [] : read.problems.map((problem) => problem.message)).toEqual([message]);
   });
 
-  it('a file over the limit, and none at it', () => {
-    const bytes = new Uint8Array(6 * 1024 * 1024).fill(0x31);
+  const reasons = (bytes: Uint8Array) => {
     const read = readTable('large.csv', bytes);
-    expect(read.ok ? [] : read.problems.map(({ message }) => message)).toEqual([
-      'large.csv: the file has 6 MB; the limit is 5 MB.',
+    return read.ok ? [] : read.problems.map(({ message }) => message);
+  };
+
+  it('a file over the limit, and none at it', () => {
+    // Comments, so that nothing but the size can be in the way.
+    const comment = new TextEncoder().encode('#'.padEnd(1023) + '\n');
+    const bytes = new Uint8Array(6 * 1024 * 1024).map((_, index) => comment[index % 1024] ?? 0);
+    bytes.set(new TextEncoder().encode('1 2 3\n'));
+    expect(reasons(bytes)).toEqual(['large.csv: the file has 6 MB; the limit is 5 MB.']);
+    expect(reasons(bytes.subarray(0, MAX_FILE_BYTES))).toEqual([]);
+    expect(reasons(bytes.subarray(0, MAX_FILE_BYTES + 1))[0]).toContain('the file has 5.01 MB');
+  });
+
+  it('a table longer or wider than any that is used, before it is split', () => {
+    const encode = (text: string) => new TextEncoder().encode(text);
+    const longest = '1 2 3\n'.repeat(MAX_BINS + 2);
+    expect(reasons(encode(longest))).toEqual([]);
+    expect(reasons(encode(`${longest}1 2 3\n`))).toEqual([
+      'large.csv: expected at most 20000 lines of numbers, found 20003.',
     ]);
-    expect(readTable('fits.csv', bytes.subarray(0, MAX_FILE_BYTES)).ok).toBe(true);
-    const oneOver = readTable('over.csv', bytes.subarray(0, MAX_FILE_BYTES + 1));
-    expect(oneOver.ok ? '' : oneOver.problems[0]?.message).toContain('5.01 MB');
+    expect(reasons(encode(`1,2\n${'1,'.repeat(10_001)}\n`))).toEqual([
+      'large.csv, line 2: expected at most 20000 characters on a line, found 20002.',
+    ]);
   });
 });

@@ -214,6 +214,14 @@ describe('what is refused, by file, line and column', () => {
     expect(reasons(deep.slice(0, deep.lastIndexOf('\n')))).toEqual([]);
   });
 
+  it('names a thousand faults and no more', () => {
+    const { problems } = read([tableOf('bad -1\n'.repeat(700), '4keV.txt')]);
+    expect(problems).toHaveLength(1001);
+    expect(problems[1000]?.message).toBe(
+      '4keV.txt, line 501: more than 1000 faults; the rest of the file was not looked at.',
+    );
+  });
+
   it('lines that were switched off are left out', () => {
     const table = fixtureTable('bad/stopping-nan.csv');
     const { profiles } = setOf([table], { skipLines: { 'stopping-nan.csv': [4] } });
