@@ -1,3 +1,4 @@
+import { coarsenKernel } from '../fold/coarsen-kernel';
 import { foldStart } from '../fold/fold-edge';
 import type { Kernel } from '../fold/kernel';
 import type { TrialProfile } from '../profile/trial-profile';
@@ -8,8 +9,10 @@ import { createShareFold } from './workspace';
 const GRADED_DEPTHS = 32;
 /** Widths tried, as shares of the depth range: a step, then log-spaced. */
 const WIDTH_SHARES = [0, 0.012, 0.035, 0.09, 0.22, 0.5];
-/** A sharp edge is tried at every bin border and middle up to this many, else at this many depths. */
-const SHARP_DEPTHS = 640;
+/** A sharp edge has one shape parameter only and cheap folds: the lattice may be fine. */
+const SHARP_DEPTHS = 192;
+/** Bins of the stopping profiles that a graded edge is searched with. A sharp edge takes no more time on the bins of the file. */
+const GRADED_BINS = 80;
 
 export interface GridInput {
   kernel: Kernel;
@@ -27,15 +30,20 @@ export interface GridInput {
 
 /** Folds on the search lattice. Nodes lie denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
 export function buildSearchGrid(input: GridInput): SearchGrid {
-  const { kernel, trial, capNm, scale } = input;
-  const depths = input.heldDepthNm === null ? searchDepths(input) : [input.heldDepthNm];
+  const { trial, capNm, scale } = input;
+  const kernel = trial.kinked ? input.kernel : coarsenKernel(input.kernel, GRADED_BINS);
+  const depths =
+    input.heldDepthNm === null
+      ? blendedDepths(input, trial.kinked ? SHARP_DEPTHS : GRADED_DEPTHS)
+      : [input.heldDepthNm];
   const widths = trial.shapeNames.length < 2 ? [0] : searchWidths(input);
   const shapeCount = trial.shapeNames.length;
   const nodeCount = widths.length * depths.length;
   const shapes = new Float64Array(nodeCount * shapeCount);
   const shares = new Float64Array(nodeCount * kernel.rowCount);
   const capShares = new Float64Array(kernel.rowCount);
-  if (capNm > 0) foldStart(kernel, capNm / scale, capShares, new Float64Array(kernel.rowCount));
+  if (capNm > 0)
+    foldStart(input.kernel, capNm / scale, capShares, new Float64Array(kernel.rowCount));
   const fold = createShareFold({ rowCount: kernel.rowCount, kernel, shapeCount });
   let node = 0;
   for (const width of widths) {
@@ -53,25 +61,6 @@ export function buildSearchGrid(input: GridInput): SearchGrid {
 
 function searchWidths({ heldWidthNm, deepestNm }: GridInput): number[] {
   return heldWidthNm === null ? WIDTH_SHARES.map((share) => share * deepestNm) : [heldWidthNm];
-}
-
-function searchDepths(input: GridInput): number[] {
-  if (!input.trial.kinked) return blendedDepths(input, GRADED_DEPTHS);
-  const borders = binBorders(input);
-  return borders.length <= SHARP_DEPTHS ? borders : blendedDepths(input, SHARP_DEPTHS);
-}
-
-/** Every bin border and bin middle below the cap, in depths of the profile. */
-function binBorders({ kernel, capNm, scale, deepestNm }: GridInput): number[] {
-  const depths = new Set<number>([0, deepestNm]);
-  for (const { edgesNm } of kernel.groups) {
-    for (let j = 0; j < edgesNm.length; j++) {
-      depths.add(edgesNm[j]! * scale - capNm);
-      if (j > 0) depths.add(((edgesNm[j - 1]! + edgesNm[j]!) / 2) * scale - capNm);
-    }
-    if (depths.size > 4 * SHARP_DEPTHS) break;
-  }
-  return [...depths].filter((depth) => depth >= 0 && depth <= deepestNm).sort((a, b) => a - b);
 }
 
 function blendedDepths(

@@ -86,6 +86,27 @@ function isLocalMinimum(
   return true;
 }
 
+/** Whether θ lies between the lattice neighbours of a node, so that the node belongs to the valley that θ is the bottom of. */
+export function inValleyOf(
+  { grid, shapeCount }: Problem['model'],
+  node: number,
+  theta: Float64Array,
+): boolean {
+  const [lines, perLine] = grid.lattice;
+  const line = Math.floor(node / perLine);
+  const k = node % perLine;
+  const at = (l: number, j: number, parameter: number): number =>
+    grid.shapes[(l * perLine + j) * shapeCount + parameter]!;
+  const depthFits =
+    (k === 0 || theta[0]! >= at(line, k - 1, 0)) &&
+    (k === perLine - 1 || theta[0]! <= at(line, k + 1, 0));
+  if (shapeCount < 2 || !depthFits) return depthFits;
+  return (
+    (line === 0 || theta[1]! >= at(line - 1, k, 1)) &&
+    (line === lines - 1 || theta[1]! <= at(line + 1, k, 1))
+  );
+}
+
 /** Shape of a node into θ, everything else neutral. */
 export function thetaOfNode(
   { grid, shapeCount }: Problem['model'],

@@ -9,9 +9,11 @@ export interface EdgeFold {
   byStart: Float64Array;
 }
 
+/** G, Φ and φ at the edges of one group; the last place belongs to the start. */
 export interface FoldScratch {
   g: Float64Array;
-  normal: Float64Array;
+  cdf: Float64Array;
+  pdf: Float64Array;
 }
 
 export function createEdgeFold(rowCount: number): EdgeFold {
@@ -23,11 +25,9 @@ export function createEdgeFold(rowCount: number): EdgeFold {
   };
 }
 
-export function createFoldScratch(kernel: Kernel): FoldScratch {
-  return {
-    g: new Float64Array(kernel.largestEdgeCount),
-    normal: new Float64Array(2 * kernel.largestEdgeCount + 4),
-  };
+export function createFoldScratch({ largestEdgeCount }: Kernel): FoldScratch {
+  const array = (): Float64Array => new Float64Array(largestEdgeCount + 1);
+  return { g: array(), cdf: array(), pdf: array() };
 }
 
 /**
@@ -56,62 +56,118 @@ function foldGroup(
   scratch: FoldScratch,
   out: EdgeFold,
 ): void {
-  const { edgesNm, rows, density, jump, tail } = group;
-  const { g, normal } = scratch;
+  const { edgesNm, rows } = group;
   const edgeCount = edgesNm.length;
   const reach = NORMAL_REACH * v;
   const cut = startNm > edgesNm[0]!;
   const afterStart = cut ? firstEdgeAtOrBeyond(edgesNm, startNm) : 0;
   const from = Math.max(firstEdgeAtOrBeyond(edgesNm, u - reach), afterStart);
   const to = Math.max(firstEdgeAtOrBeyond(edgesNm, u + reach), from);
+  fillEdgeTerms(edgesNm, from, to, u, v, scratch);
+  sumPairs(group, from, to, scratch, out);
+  addTails(group, to, to < edgeCount ? edgesNm[to]! - u : 0, out);
+  const startBin = cut && afterStart < edgeCount ? afterStart - 1 : -1;
+  if (startBin >= 0) subtractStart(group, startBin, startNm - u, v, scratch, out);
+  else for (let r = 0; r < rows.length; r++) out.byStart[rows[r]!] = 0;
+}
+
+function fillEdgeTerms(
+  edgesNm: Float64Array,
+  from: number,
+  to: number,
+  u: number,
+  v: number,
+  { g, cdf, pdf }: FoldScratch,
+): void {
+  const perWidth = 1 / v;
   for (let j = from; j < to; j++) {
     const x = edgesNm[j]! - u;
-    normalInto(x / v, normal, 2 * j);
-    g[j] = x * normal[2 * j]! + v * normal[2 * j + 1]!;
+    normalInto(x * perWidth, cdf, pdf, j);
+    g[j] = x * cdf[j]! + v * pdf[j]!;
   }
-  // The partial bin that begins at startNm: its left end enters with the density of the bin.
-  let gStart = 0;
-  let sStart = 0;
-  let pStart = 0;
-  const startBin = cut && afterStart < edgeCount ? afterStart - 1 : -1;
-  if (startBin >= 0) {
-    // A step (v = 0) at the start itself belongs to the edge, so it adds nothing here.
-    const x = startNm - u;
-    normalInto(v > 0 ? x / v : -Infinity, normal, 2 * edgeCount);
-    sStart = normal[2 * edgeCount]!;
-    pStart = normal[2 * edgeCount + 1]!;
-    gStart = x * sStart + v * pStart;
-  }
-  const past = to < edgeCount ? edgesNm[to]! - u : 0;
-  for (let r = 0; r < rows.length; r++) {
-    const at = r * edgeCount;
-    let share = 0;
-    let phi = 0;
-    let pdf = 0;
+}
+
+/** Σ_j jump_j (G_j, Φ_j, φ_j) over the edges near the edge, two rows at a time: each term is then loaded once for both. */
+function sumPairs(
+  { edgesNm, rows, jump }: KernelGroup,
+  from: number,
+  to: number,
+  { g, cdf, pdf }: FoldScratch,
+  out: EdgeFold,
+): void {
+  const edgeCount = edgesNm.length;
+  for (let r = 0; r < rows.length; r += 2) {
+    const paired = r + 1 < rows.length;
+    const first = r * edgeCount;
+    const second = paired ? first + edgeCount : first;
+    let share0 = 0;
+    let cdf0 = 0;
+    let pdf0 = 0;
+    let share1 = 0;
+    let cdf1 = 0;
+    let pdf1 = 0;
     for (let j = from; j < to; j++) {
-      const d = jump[at + j]!;
-      share += d * g[j]!;
-      phi += d * normal[2 * j]!;
-      pdf += d * normal[2 * j + 1]!;
+      const d0 = jump[first + j]!;
+      const d1 = jump[second + j]!;
+      const gj = g[j]!;
+      const cj = cdf[j]!;
+      const pj = pdf[j]!;
+      share0 += d0 * gj;
+      cdf0 += d0 * cj;
+      pdf0 += d0 * pj;
+      share1 += d1 * gj;
+      cdf1 += d1 * cj;
+      pdf1 += d1 * pj;
     }
-    if (to < edgeCount && to > 0) {
-      const before = density[at + to - 1]!;
-      share += tail[at + to]! + before * past;
-      phi += before;
-    } else if (to === 0) share += tail[at]!;
+    store(out, rows[r]!, share0, cdf0, pdf0);
+    if (paired) store(out, rows[r + 1]!, share1, cdf1, pdf1);
+  }
+}
+
+function store(out: EdgeFold, row: number, share: number, cdf: number, pdf: number): void {
+  out.share[row] = share;
+  out.byEdge[row] = -cdf;
+  out.byWidth[row] = pdf;
+}
+
+/** Edges from `to` on lie where s = 1: their sum is the tail and the rest of the bin before, `past` nm beyond the edge. */
+function addTails(
+  { edgesNm, rows, density, tail }: KernelGroup,
+  to: number,
+  past: number,
+  out: EdgeFold,
+): void {
+  const edgeCount = edgesNm.length;
+  if (to === edgeCount) return;
+  for (let r = 0; r < rows.length; r++) {
     const row = rows[r]!;
-    let byStart = 0;
-    if (startBin >= 0) {
-      const rho = density[at + startBin]!;
-      share -= rho * gStart;
-      phi -= rho * sStart;
-      pdf -= rho * pStart;
-      byStart = -rho * sStart;
-    }
-    out.share[row] = share;
-    out.byEdge[row] = -phi;
-    out.byWidth[row] = pdf;
-    out.byStart[row] = byStart;
+    const before = to === 0 ? 0 : density[r * edgeCount + to - 1]!;
+    out.share[row] = out.share[row]! + tail[r * edgeCount + to]! + before * past;
+    out.byEdge[row] = out.byEdge[row]! - before;
+  }
+}
+
+/** The bin that the start cuts: its left end enters with the density of the bin. A step at the start itself is the edge's. */
+function subtractStart(
+  { edgesNm, rows, density }: KernelGroup,
+  startBin: number,
+  x: number,
+  v: number,
+  { g, cdf, pdf }: FoldScratch,
+  out: EdgeFold,
+): void {
+  const last = g.length - 1;
+  normalInto(v > 0 ? x / v : -Infinity, cdf, pdf, last);
+  const sStart = cdf[last]!;
+  const pStart = pdf[last]!;
+  const gStart = x * sStart + v * pStart;
+  for (let r = 0; r < rows.length; r++) {
+    const row = rows[r]!;
+    const rho = density[r * edgesNm.length + startBin]!;
+    out.share[row] = out.share[row]! - rho * gStart;
+    out.byEdge[row] = out.byEdge[row]! + rho * sStart;
+    out.byWidth[row] = out.byWidth[row]! - rho * pStart;
+    out.byStart[row] = -rho * sStart;
   }
 }
 

@@ -2,12 +2,13 @@ import { foldEdge } from '../fold/fold-edge';
 import { normalInto } from '../statistics/normal-table';
 import type { TrialProfile } from './trial-profile';
 
-const scratch = new Float64Array(2);
+const cdf = new Float64Array(1);
+const pdf = new Float64Array(1);
 
 function phi(distanceNm: number, widthNm: number): number {
   if (widthNm === 0) return distanceNm < 0 ? 0 : 1;
-  normalInto(distanceNm / widthNm, scratch, 0);
-  return scratch[0]!;
+  normalInto(distanceNm / widthNm, cdf, pdf, 0);
+  return cdf[0]!;
 }
 
 /**

@@ -1,7 +1,7 @@
 import erfc from '@stdlib/math-base-special-erfc';
 
 /** Beyond this |t| the standard normal distribution is 0 or 1 to the last bit of a share. */
-export const NORMAL_REACH = 8.5;
+export const NORMAL_REACH = 8;
 
 const PER_UNIT = 32;
 const TERMS = 8;
@@ -35,22 +35,18 @@ function buildTable(): Float64Array {
 }
 
 /**
- * Φ(t) and φ(t) of the standard normal distribution, written to out[at] and out[at + 1]. Absolute error below 4e-16.
- * Φ(t) = ½ erfc(−t/√2).
+ * Φ(t) = ½ erfc(−t/√2) and φ(t) of the standard normal distribution, written to cdf[at] and pdf[at]. Absolute error below
+ * 4e-16.
  */
-export function normalInto(t: number, out: Float64Array, at: number): void {
-  if (!(t > -NORMAL_REACH)) {
-    out[at] = 0;
-    out[at + 1] = 0;
+export function normalInto(t: number, cdf: Float64Array, pdf: Float64Array, at: number): void {
+  if (!(t > -NORMAL_REACH && t < NORMAL_REACH)) {
+    cdf[at] = t > 0 ? 1 : 0;
+    pdf[at] = 0;
     return;
   }
-  if (t >= NORMAL_REACH) {
-    out[at] = 1;
-    out[at + 1] = 0;
-    return;
-  }
-  const k = Math.round((t + NORMAL_REACH) * PER_UNIT);
-  const d = t + NORMAL_REACH - k / PER_UNIT;
+  const position = (t + NORMAL_REACH) * PER_UNIT;
+  const k = (position + 0.5) | 0;
+  const d = (position - k) / PER_UNIT;
   const r = k * STRIDE;
   const c0 = table[r + 1]!;
   const c1 = table[r + 2]!;
@@ -60,13 +56,12 @@ export function normalInto(t: number, out: Float64Array, at: number): void {
   const c5 = table[r + 6]!;
   const c6 = table[r + 7]!;
   const c7 = table[r + 8]!;
-  out[at + 1] = c0 + d * (c1 + d * (c2 + d * (c3 + d * (c4 + d * (c5 + d * (c6 + d * c7))))));
-  out[at] =
-    table[r]! +
-    d *
-      (c0 +
-        d *
-          (c1 / 2 +
-            d *
-              (c2 / 3 + d * (c3 / 4 + d * (c4 / 5 + d * (c5 / 6 + d * (c6 / 7 + (d * c7) / 8)))))));
+  pdf[at] = c0 + d * (c1 + d * (c2 + d * (c3 + d * (c4 + d * (c5 + d * (c6 + d * c7))))));
+  const high = c3 / 4 + d * (c4 * FIFTH + d * (c5 * SIXTH + d * (c6 * SEVENTH + (d * c7) / 8)));
+  cdf[at] = table[r]! + d * (c0 + d * (c1 / 2 + d * (c2 * THIRD + d * high)));
 }
+
+const THIRD = 1 / 3;
+const FIFTH = 1 / 5;
+const SIXTH = 1 / 6;
+const SEVENTH = 1 / 7;

@@ -3,11 +3,14 @@ import { evaluate, foldAt, meanLevel, predictFromFold } from '../fit/evaluate';
 import { minimise } from '../fit/minimise';
 import type { Problem } from '../fit/model';
 import type { PreparedFit } from '../fit/prepared-fit';
-import { localMinima, scanGrid, thetaOfNode } from '../fit/search';
+import { inValleyOf, localMinima, scanGrid, thetaOfNode } from '../fit/search';
 import { openWidth } from '../fit/search-minimum';
 import { thetaOf, valuesOf } from '../fit/theta-of';
 import { normalStream } from '../statistics/random';
 import type { FitAnswer } from '../types';
+
+/** Another valley of the search is followed when its node lies less than this above the bottom found. */
+const LOOK_AGAIN = 4;
 
 export interface ResampleBlock {
   seed: number;
@@ -66,7 +69,8 @@ export function resample(
     let chiSquare = minimise(drawn, theta, model.held, scratch, options).chiSquare;
     scanGrid(drawn, model.neutral, model.held, chiSquares);
     for (const node of localMinima(model.grid.lattice, chiSquares).slice(0, 2)) {
-      if (chiSquares[node]! > chiSquare + 4) break;
+      if (chiSquares[node]! > chiSquare + LOOK_AGAIN) break;
+      if (chiSquares[node]! >= chiSquare && inValleyOf(model, node, theta)) continue;
       thetaOfNode(model, node, model.neutral, other);
       openWidth(model, other);
       const next = minimise(drawn, other, model.held, scratch, options).chiSquare;
