@@ -2,7 +2,7 @@ export function SkipLink() {
   return (
     <a
       href="#content"
-      className="no-print fixed top-2 left-2 z-50 -translate-y-20 rounded-[4px] bg-ink px-4 py-2 text-sm font-semibold text-paper focus:translate-y-0"
+      className="no-print sr-only rounded-[4px] bg-ink px-4 py-2 text-sm font-semibold text-paper focus:not-sr-only focus:fixed focus:top-2 focus:left-2 focus:z-50 focus:px-4 focus:py-2"
     >
       Skip to the content
     </a>

@@ -47,7 +47,12 @@ export function Field({
     <div className={cn('grid content-start gap-1', className)}>
       <label htmlFor={id} className="text-sm font-medium">
         {label}
-        {unit && <span className="font-normal text-ink-3"> ({unit})</span>}
+        {unit && (
+          <>
+            {' '}
+            <span className="font-normal text-ink-3">({unit})</span>
+          </>
+        )}
         {optional && <span className="font-normal text-ink-3">, optional</span>}
       </label>
       <FieldContext value={{ id, name, describedBy, invalid: problem !== undefined, required }}>

@@ -45,6 +45,8 @@ export function Form<Answer>({
   });
   useEffect(() => handleAnswer(state), [state]);
 
+  const more = state?.ok === false ? Object.keys(state.fields).length - 1 : 0;
+
   return (
     <form
       ref={form}
@@ -65,6 +67,7 @@ export function Form<Answer>({
         {state?.ok === false && (
           <Notice kind="problem" alert>
             {state.message}
+            {more > 0 && ` ${more} more below.`}
           </Notice>
         )}
         {children}
