@@ -1,13 +1,12 @@
 import type { Metadata } from 'next';
 
 import { read } from '@/app/_server/read';
-import { SampleFacts } from '@/components/sample/sample-facts';
 import { FitTable } from '@/components/sample/fit-table';
 import { IssuedTable } from '@/components/sample/issued-table';
-import { ScanTable } from '@/components/sample/scan-table';
+import { SampleFacts } from '@/components/sample/sample-facts';
+import { ScanSection } from '@/components/sample/scan-section';
 import { ActionButton } from '@/components/ui/action-button';
 import { ButtonLink } from '@/components/ui/button-link';
-import { EmptyState } from '@/components/ui/empty-state';
 import { InventedMark } from '@/components/ui/invented-mark';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
@@ -19,18 +18,19 @@ import { mayAct } from '@/db/access/policy';
 import { listIssuedProfiles } from '@/db/access/profile/list-issued-profiles';
 import { readSample } from '@/db/access/sample/read-sample';
 import { listScans } from '@/db/access/scan/list-scans';
+import type { SampleRow } from '@/lib/schemas/sample';
 
 import { readViewer } from '../../read-viewer';
 import { archiveSampleAction, restoreSampleAction } from '../actions';
 
-export async function generateMetadata({
-  params,
-}: PageProps<'/samples/[sampleId]'>): Promise<Metadata> {
+type Props = PageProps<'/samples/[sampleId]'>;
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const sample = await read(readSample, { id: (await params).sampleId });
   return { title: sample.name };
 }
 
-export default async function SamplePage({ params }: PageProps<'/samples/[sampleId]'>) {
+export default async function SamplePage({ params }: Props) {
   const { sampleId } = await params;
   const [viewer, sample, scans, archivedScans, fits, issued] = await Promise.all([
     readViewer(),
@@ -41,104 +41,34 @@ export default async function SamplePage({ params }: PageProps<'/samples/[sample
     read(listIssuedProfiles),
   ]);
   const mayEdit = mayAct(viewer, 'edit data');
-  const mayFit = mayAct(viewer, 'fit');
-  const own = issued.filter((profile) => profile.sampleId === sample.id);
-  const addScan = `/scans/new?sample=${sample.id}`;
+  const ofSample = issued.filter((profile) => profile.sampleId === sample.id);
 
   return (
     <>
-      <PageHeader
-        breadcrumb={[{ label: 'Samples', href: '/samples' }]}
-        title={sample.name}
-        badge={
-          <>
-            {sample.archivedAt && <StateBadge state="archived" />}
-            {sample.invented && <InventedMark />}
-          </>
-        }
-        meta={[
-          sample.material,
-          <>
-            added by {sample.createdBy}, <Moment at={sample.createdAt} dateOnly />
-          </>,
-        ]}
-        actions={
-          mayEdit && !sample.archivedAt ? (
-            <>
-              <ActionButton
-                action={archiveSampleAction}
-                input={{ id: sample.id }}
-                pendingLabel="Archiving …"
-              >
-                Archive
-              </ActionButton>
-              <ButtonLink href={`/samples/${sample.id}/edit`}>Edit</ButtonLink>
-              <ButtonLink variant="primary" href={addScan}>
-                Add an energy scan
-              </ButtonLink>
-            </>
-          ) : null
-        }
-      />
-      {sample.archivedAt && (
-        <Notice
-          kind="information"
-          title="Archived"
-          className="mt-4"
-          action={
-            mayEdit && (
-              <ActionButton
-                size="small"
-                action={restoreSampleAction}
-                input={{ id: sample.id }}
-                pendingLabel="Restoring …"
-              >
-                Undo: restore the sample
-              </ActionButton>
-            )
-          }
-        >
-          It is out of the lists since <Moment at={sample.archivedAt} />. Nothing was deleted.
-        </Notice>
-      )}
+      <SampleHeader sample={sample} mayEdit={mayEdit} />
+      {sample.archivedAt && <Archived sample={sample} mayEdit={mayEdit} />}
       <SampleFacts sample={sample} />
-      <Section title="Energy scans">
-        {scans.length > 0 ? (
-          <ScanTable caption={`Energy scans of ${sample.name}`} scans={scans} mayFit={mayFit} />
-        ) : (
-          <EmptyState
-            title="No energy scan yet."
-            text={<p>A scan is a file, or typed points, with energy, value and uncertainty.</p>}
-            action={
-              mayEdit && !sample.archivedAt ? (
-                <ButtonLink href={addScan}>Add an energy scan</ButtonLink>
-              ) : null
-            }
-          />
-        )}
-        {archivedScans.length > 0 && (
-          <details>
-            <summary className="text-sm text-ink-2">{archivedScans.length} archived</summary>
-            <ScanTable caption="Archived energy scans" scans={archivedScans} mayFit={false} />
-          </details>
-        )}
-      </Section>
+      <ScanSection
+        sample={sample}
+        scans={scans}
+        archivedScans={archivedScans}
+        mayAdd={mayEdit && sample.archivedAt === null}
+        mayFit={mayAct(viewer, 'fit')}
+      />
       <Section title="Fits">
         {fits.length > 0 ? (
           <FitTable caption={`Fits of ${sample.name}`} fits={fits} withSample={false} />
         ) : (
           <p className="text-sm text-ink-2">
-            {scans.length > 0
-              ? 'No fit yet. Press Fit beside a scan.'
-              : 'A fit needs a scan first.'}
+            {scans.length > 0 ? 'No fit yet.' : 'A fit needs an energy scan first.'}
           </p>
         )}
       </Section>
       <Section title="Issued profiles">
-        {own.length > 0 ? (
+        {ofSample.length > 0 ? (
           <IssuedTable
             caption={`Issued profiles of ${sample.name}`}
-            profiles={own}
+            profiles={ofSample}
             withSample={false}
           />
         ) : (
@@ -148,5 +78,73 @@ export default async function SamplePage({ params }: PageProps<'/samples/[sample
         )}
       </Section>
     </>
+  );
+}
+
+type PartProps = { sample: SampleRow; mayEdit: boolean };
+
+function SampleHeader({ sample, mayEdit }: PartProps) {
+  const input = { id: sample.id };
+  return (
+    <PageHeader
+      breadcrumb={[{ label: 'Samples', href: '/samples' }]}
+      title={sample.name}
+      badge={
+        <>
+          {sample.archivedAt && <StateBadge state="archived" />}
+          {sample.invented && <InventedMark />}
+        </>
+      }
+      meta={[
+        sample.material,
+        <>
+          added by {sample.createdBy}, <Moment at={sample.createdAt} dateOnly />
+        </>,
+      ]}
+      actions={
+        mayEdit && sample.archivedAt === null ? (
+          <>
+            <ActionButton action={archiveSampleAction} input={input} pendingLabel="Archiving …">
+              Archive
+            </ActionButton>
+            <ButtonLink href={`/samples/${sample.id}/edit`}>Edit</ButtonLink>
+            <ButtonLink variant="primary" href={`/scans/new?sample=${sample.id}`}>
+              Add an energy scan
+            </ButtonLink>
+          </>
+        ) : null
+      }
+    />
+  );
+}
+
+function Archived({ sample, mayEdit }: PartProps) {
+  return (
+    <Notice
+      kind="information"
+      title="Archived"
+      className="mt-4"
+      action={
+        mayEdit && (
+          <ActionButton
+            size="small"
+            action={restoreSampleAction}
+            input={{ id: sample.id }}
+            pendingLabel="Restoring …"
+          >
+            Undo: restore the sample
+          </ActionButton>
+        )
+      }
+    >
+      It is out of the lists
+      {sample.archivedAt && (
+        <>
+          {' '}
+          since <Moment at={sample.archivedAt} />
+        </>
+      )}
+      . Nothing was deleted.
+    </Notice>
   );
 }
