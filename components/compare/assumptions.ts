@@ -17,7 +17,12 @@ export interface AssumptionRow {
 
 /** Everything that the fits assume, in the order of the fit desk, with a mark where they part. */
 export function assumptionRows(fits: readonly Fit[]): AssumptionRow[] {
-  const rows: AssumptionRow[] = [
+  return [...modelRows(fits), ...parameterRows(fits), bandsRow(fits)];
+}
+
+/** The model and the data: everything but the parameters and the resamples. */
+export function modelRows(fits: readonly Fit[]): AssumptionRow[] {
+  return [
     row('Trial profile', fits, (fit) => `${fit.spec.profile} edge`),
     row('Carriers near the surface', fits, (fit) =>
       fit.spec.polarity === 'depletion' ? 'few (depletion)' : 'many (accumulation)',
@@ -41,21 +46,26 @@ export function assumptionRows(fits: readonly Fit[]): AssumptionRow[] {
       (fit) => fit.hashes.points,
     ),
     row('Points switched off', fits, switchedOffWords),
-    ...PARAMETER_ORDER.filter((name) => isTold(name, fits)).map((name) =>
-      row(
-        settingLabel(name),
-        fits,
-        (fit) => settingWords(fit, name),
-        (fit) => settingIdentity(fit.spec, name),
-      ),
-    ),
-    row('Bands', fits, (fit) =>
-      fit.spec.resamples > 0
-        ? `${fit.spec.resamples.toLocaleString('en')} resamples, seed ${fit.spec.seed}`
-        : 'linear, no resamples',
-    ),
   ];
-  return rows;
+}
+
+function parameterRows(fits: readonly Fit[]): AssumptionRow[] {
+  return PARAMETER_ORDER.filter((name) => isTold(name, fits)).map((name) =>
+    row(
+      settingLabel(name),
+      fits,
+      (fit) => settingWords(fit, name),
+      (fit) => settingIdentity(fit.spec, name),
+    ),
+  );
+}
+
+export function bandsRow(fits: readonly Fit[]): AssumptionRow {
+  return row('Bands', fits, ({ spec: { resamples, seed } }) =>
+    resamples > 0
+      ? `${resamples.toLocaleString('en')} resamples, seed ${seed}`
+      : 'linear, no resamples',
+  );
 }
 
 /** Two values count as different by `identity` where the words alone could hide it, such as two sets of one name. */

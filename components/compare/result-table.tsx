@@ -1,5 +1,5 @@
+import { ParameterFigure } from '@/components/review/parameter-figure';
 import { PARAMETER_ORDER, parameterUnit } from '@/components/review/parameter-words';
-import { parameterText } from '@/components/review/parameter-value';
 import { DataTable } from '@/components/ui/data-table';
 import { Mark } from '@/components/ui/mark';
 import type { Fit } from '@/lib/schemas/fit';
@@ -10,7 +10,8 @@ import type { FitMark } from './fit-mark';
 
 interface ResultRow {
   name: (typeof PARAMETER_ORDER)[number];
-  values: string[];
+  /** One place per fit; a fit without this parameter leaves its place empty. */
+  parameters: ReturnType<typeof parameterOf>[];
   apart: ResultDisagreement[];
 }
 
@@ -19,12 +20,10 @@ export function ResultTable({ fits, marks }: { fits: readonly Fit[]; marks: read
   const disagreements = resultDisagreements(fits);
   const rows = PARAMETER_ORDER.map((name): ResultRow => ({
     name,
-    values: fits.map((fit) => {
-      const parameter = parameterOf(fit, name);
-      return parameter ? parameterText(parameter, parameterUnit(name, fit.observable)) : '–';
-    }),
+    parameters: fits.map((fit) => parameterOf(fit, name)),
     apart: disagreements.filter((one) => one.name === name),
-  })).filter((row) => row.values.some((value) => value !== '–'));
+  })).filter((row) => row.parameters.some((parameter) => parameter !== undefined));
+  const observable = fits[0]?.observable ?? 'fraction';
   return (
     <DataTable
       caption="Results and where they disagree"
@@ -37,8 +36,12 @@ export function ResultTable({ fits, marks }: { fits: readonly Fit[]; marks: read
         ...marks.map((mark, index) => ({
           key: mark.letter,
           label: mark.letter,
-          className: 'figures',
-          cell: (row: ResultRow) => row.values[index],
+          cell: (row: ResultRow) => (
+            <ParameterFigure
+              parameter={row.parameters[index]}
+              unit={parameterUnit(row.name, observable)}
+            />
+          ),
         })),
         {
           key: 'verdict',
@@ -51,14 +54,14 @@ export function ResultTable({ fits, marks }: { fits: readonly Fit[]; marks: read
 }
 
 function VerdictWords({ row, marks }: { row: ResultRow; marks: readonly FitMark[] }) {
-  const comparedCount = row.values.filter((value) => value !== '–').length;
-  if (comparedCount < 2) return <span className="text-ink-3">only in one fit</span>;
-  if (row.values.every((value) => value.endsWith('(held)'))) {
-    return <span className="text-ink-3">held in all</span>;
+  const there = row.parameters.filter((parameter) => parameter !== undefined);
+  if (there.length < 2) return <span className="text-ink-3">only in one fit</span>;
+  if (there.every((parameter) => parameter.held)) {
+    return <span className="text-ink-3">held, by choice</span>;
   }
   if (row.apart.length === 0) {
     return (
-      <span className="inline-flex gap-1.5">
+      <span className="flex gap-1.5">
         <Mark kind="fine" className="mt-0.5" /> yes, 68 % intervals meet
       </span>
     );
@@ -68,8 +71,10 @@ function VerdictWords({ row, marks }: { row: ResultRow; marks: readonly FitMark[
       {row.apart.map(({ first, second, verdict }) => (
         <li key={`${first}-${second}`} className="flex gap-1.5">
           <Mark kind={verdict === 'beyond 95 %' ? 'problem' : 'caution'} className="mt-0.5" />
-          {marks[first]?.letter} and {marks[second]?.letter}: the{' '}
-          {verdict === 'beyond 95 %' ? '95 %' : '68 %'} intervals do not meet
+          <span>
+            no: the {verdict === 'beyond 95 %' ? '95 %' : '68 %'} intervals of{' '}
+            {marks[first]?.letter} and {marks[second]?.letter} do not meet
+          </span>
         </li>
       ))}
     </ul>

@@ -2,7 +2,7 @@ import { DataTable } from '@/components/ui/data-table';
 import { InventedMark } from '@/components/ui/invented-mark';
 import { Moment } from '@/components/ui/moment';
 import { TextLink } from '@/components/ui/text-link';
-import { parameterText } from '@/components/review/parameter-value';
+import { ParameterFigure } from '@/components/review/parameter-figure';
 import type { IssuedProfileRow } from '@/lib/schemas/profile';
 
 /** Issued profiles with the one number that each of them answers. */
@@ -43,14 +43,12 @@ export function ProfileList({ profiles }: { profiles: readonly IssuedProfileRow[
         {
           key: 'edge',
           label: 'edge',
-          className: 'figures',
-          cell: (row) => (row.edge ? parameterText(row.edge, 'nm') : '–'),
+          cell: (row) => <ParameterFigure parameter={row.edge} unit="nm" />,
         },
         {
           key: 'width',
           label: 'width σ',
-          className: 'figures',
-          cell: (row) => (row.width ? parameterText(row.width, 'nm') : '–'),
+          cell: (row) => <ParameterFigure parameter={row.width} unit="nm" />,
         },
         {
           key: 'by',

@@ -93,7 +93,7 @@ export function ProfileView(props: ProfileViewProps) {
       <div className="grid gap-x-10 gap-y-2 lg:grid-cols-2">
         <div className="min-w-0">
           <Section title="Parameters">
-            <ParameterTable fit={fit} captionHidden />
+            <ParameterTable fit={fit} />
           </Section>
           <Section title="What is assumed">
             <SettingList fit={fit} />

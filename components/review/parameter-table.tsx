@@ -3,26 +3,19 @@ import { asEntered, significant } from '@/lib/format';
 import type { Fit } from '@/lib/schemas/fit';
 
 import { PARAMETER_ORDER, parameterLabel, parameterUnit } from './parameter-words';
-import { parameterText } from './parameter-value';
+import { ParameterFigure } from './parameter-figure';
 
 type FitParameter = Fit['answer']['parameters'][number];
 
 /** Every parameter with its intervals, and what was assumed of it: free, held or prior, with the origin. */
-export function ParameterTable({
-  fit,
-  captionHidden = false,
-}: {
-  fit: Fit;
-  /** A heading above says the same. */
-  captionHidden?: boolean;
-}) {
+export function ParameterTable({ fit }: { fit: Fit }) {
   const rows = PARAMETER_ORDER.flatMap(
     (name) => fit.answer.parameters.find((parameter) => parameter.name === name) ?? [],
   );
   return (
     <DataTable
       caption="Parameters"
-      captionHidden={captionHidden}
+      captionHidden
       stacks
       rows={rows}
       rowKey={(row) => row.name}
@@ -35,15 +28,16 @@ export function ParameterTable({
         },
         {
           key: 'value',
-          label: 'value, 68 % interval',
-          className: 'figures',
+          label: 'value, 68 %',
           cell: (row) => (
-            <span title={String(row.value)}>
-              {parameterText(row, parameterUnit(row.name, fit.observable))}
-            </span>
+            <ParameterFigure parameter={row} unit={parameterUnit(row.name, fit.observable)} />
           ),
         },
-        { key: 'i95', label: '95 % interval', className: 'figures', cell: intervalWords },
+        {
+          key: 'i95',
+          label: '95 %',
+          cell: (row) => <span className="figures sm:whitespace-nowrap">{intervalWords(row)}</span>,
+        },
         { key: 'assumed', label: 'assumed', cell: (row) => assumedWords(row, fit) },
       ]}
     />

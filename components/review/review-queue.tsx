@@ -4,7 +4,7 @@ import { TextLink } from '@/components/ui/text-link';
 import type { Fit } from '@/lib/schemas/fit';
 
 import { checkSummary } from './check-list';
-import { parameterText } from './parameter-value';
+import { ParameterFigure } from './parameter-figure';
 import { waitingWords } from './waiting-words';
 
 /** Fits that wait for a decision, the longest first. One's own are listed, and said to be someone else's to review. */
@@ -45,8 +45,7 @@ export function ReviewQueue({
         {
           key: 'edge',
           label: 'edge',
-          className: 'figures',
-          cell: (fit) => (fit.edge ? parameterText(fit.edge, 'nm') : '–'),
+          cell: (fit) => <ParameterFigure parameter={fit.edge} unit="nm" />,
         },
         { key: 'checks', label: 'checks', cell: (fit) => checkSummary(fit.checks) },
         {

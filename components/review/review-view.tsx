@@ -103,7 +103,12 @@ export function ReviewView(props: ReviewViewProps) {
       </div>
       <div className="mt-10 grid gap-x-10 gap-y-10 lg:grid-cols-2">
         <div className="grid min-w-0 content-start gap-10">
-          <ParameterTable fit={fit} />
+          <section aria-labelledby="parameters">
+            <h2 id="parameters" className="mb-2">
+              Parameters
+            </h2>
+            <ParameterTable fit={fit} />
+          </section>
           <section aria-labelledby="settings">
             <h2 id="settings" className="mb-2">
               What is assumed
