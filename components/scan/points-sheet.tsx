@@ -7,7 +7,7 @@ import { MAX_ENERGIES } from '@/lib/inversion/index';
 import type { Scan } from '@/lib/schemas/scan';
 
 import { ScanFigure } from './scan-figure';
-import type { TypedReading } from './typed-points';
+import { columnName, ENERGY, NOTE, SIGMA, VALUE, type TypedReading } from './typed-points';
 
 interface PointsSheetProps {
   sheet: SheetModel;
@@ -18,10 +18,10 @@ interface PointsSheetProps {
 /** The points of a scan in a grid, drawn as they are typed. */
 export function PointsSheet({ sheet, typed, observable }: PointsSheetProps) {
   const columns: readonly SheetColumn[] = [
-    { name: 'energy', unit: 'keV', numeric: true },
-    { name: observable === 'rate' ? 'rate' : 'fraction', unit: observable === 'rate' ? 'µs⁻¹' : '', numeric: true },
-    { name: 'σ', unit: '', numeric: true },
-    { name: 'note', unit: '', numeric: false },
+    { name: columnName(ENERGY, observable), unit: 'keV', numeric: true },
+    { name: columnName(VALUE, observable), unit: observable === 'rate' ? 'µs⁻¹' : '', numeric: true },
+    { name: columnName(SIGMA, observable), unit: '', numeric: true },
+    { name: columnName(NOTE, observable), unit: '', numeric: false },
   ];
   return (
     <div className="grid gap-6">

@@ -1,5 +1,5 @@
 import { DataTable } from '@/components/ui/data-table';
-import { asEntered, decimalsFor, withDecimals } from '@/lib/format';
+import { asEntered, withDecimals } from '@/lib/format';
 import type { Scan, TypedPoint } from '@/lib/schemas/scan';
 
 interface PointsTableProps {
@@ -7,11 +7,16 @@ interface PointsTableProps {
   observable: Scan['observable'];
 }
 
-/** The stored points; every digit is on hover. */
+/** Measured numbers keep two digits of their σ, more than a result would; every digit is on hover. */
+function dataDecimals(sigma: number): number {
+  return Math.max(0, 1 - Math.floor(Math.log10(sigma)));
+}
+
+/** The stored points of a scan. */
 export function PointsTable({ points, observable }: PointsTableProps) {
   const withNotes = points.some(({ note }) => note !== '');
   const digits = (value: number, sigma: number) => (
-    <span title={String(value)}>{withDecimals(value, decimalsFor(sigma))}</span>
+    <span title={String(value)}>{withDecimals(value, dataDecimals(sigma))}</span>
   );
   return (
     <DataTable

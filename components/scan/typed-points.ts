@@ -32,13 +32,16 @@ export function readTypedPoints(rows: readonly SheetRow[], observable: Scan['obs
     }
     if (point && faults.length === 0) reading.points.push(point);
     for (const [column, sentence] of faults) {
-      reading.errors.push({ rowId: row.id, column, message: `Row ${index + 1}, ${NAMES[column]}: ${sentence}` });
+      reading.errors.push({ rowId: row.id, column, message: `Row ${index + 1}, ${columnName(column, observable)}: ${sentence}` });
     }
   });
   return reading;
 }
 
-const NAMES: Record<number, string> = { [ENERGY]: 'energy', [VALUE]: 'value', [SIGMA]: 'σ', [NOTE]: 'note' };
+/** The name of a column as the head of the grid says it. */
+export function columnName(column: number, observable: Scan['observable']): string {
+  return ['energy', observable, 'σ', 'note'][column] ?? '';
+}
 
 type Fault = [column: number, sentence: string];
 

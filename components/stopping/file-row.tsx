@@ -1,7 +1,6 @@
 'use client';
 
 import { Button } from '@/components/ui/button';
-import { Field } from '@/components/ui/field';
 import { TextInput } from '@/components/ui/text-input';
 import { byteWords } from '@/components/upload/byte-words';
 import { FormatChoices } from '@/components/upload/format-choices';
@@ -25,39 +24,34 @@ export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
   const table = preview?.table ?? null;
   const energiesKeV = preview?.energiesKeV ?? [];
   return (
-    <li className="border-rule grid gap-2 border-b py-3 text-sm">
-      <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
-        <p className="min-w-0">
+    <li className="border-rule grid gap-1 border-b py-2.5 text-sm">
+      <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-2">
+        <p className="min-w-0 flex-1 basis-64">
           <strong className="font-semibold break-all">{file.name}</strong>{' '}
           <span className="text-ink-2">
             {byteWords(file.bytes.byteLength)}
             {foundWords(preview)}
           </span>
         </p>
+        {energiesKeV.length === 1 && (
+          <EnergyField name={file.name} typed={entry.energy} foundKeV={energiesKeV[0] ?? null} onType={(energy) => onChoose({ energy })} />
+        )}
         <Button size="small" variant="quiet" aria-label={`Remove ${file.name}`} onClick={onRemove}>
           Remove
         </Button>
       </div>
       {table && (
         <details>
-          <summary className="text-ink-2 py-1">Change how it is read</summary>
-          <div className="mt-1 grid gap-3 sm:grid-cols-[2fr_1fr]">
+          <summary className="text-ink-2 w-fit py-0.5 text-[0.8125rem]">Change how it is read</summary>
+          <div className="mt-1 max-w-md pb-1">
             <FormatChoices
               delimiter={entry.delimiter ?? table.delimiter}
               decimal={entry.decimal ?? table.decimal}
-              onDelimiter={(delimiter) => onChoose({ delimiter })} onDecimal={(decimal) => onChoose({ decimal, delimiter: table.delimiter })} />
+              onDelimiter={(delimiter) => onChoose({ delimiter })}
+              onDecimal={(decimal) => onChoose({ decimal, delimiter: table.delimiter })}
+            />
           </div>
         </details>
-      )}
-      {energiesKeV.length === 1 && (
-        <Field label="Energy" unit="keV" className="max-w-56" hint={energyHint(entry.energy, energiesKeV[0] ?? null)}>
-          <TextInput
-            numeric
-            value={entry.energy}
-            placeholder={energiesKeV[0] === null ? '' : String(energiesKeV[0])}
-            onChange={(event) => onChoose({ energy: event.target.value })}
-          />
-        </Field>
       )}
       <LeftOutLines
         fileName={file.name}
@@ -81,7 +75,29 @@ function energyWords(energiesKeV: readonly (number | null)[]): string {
   return `${known.length} energies, ${Math.min(...known)} to ${Math.max(...known)} keV`;
 }
 
-function energyHint(typed: string, energyKeV: number | null): string {
-  if (typed !== '') return 'Typed here; empty it to read it from the file.';
-  return energyKeV === null ? 'Neither name nor heading names one; type it.' : 'Read from the name or the heading.';
+interface EnergyFieldProps {
+  name: string;
+  typed: string;
+  foundKeV: number | null;
+  onType: (energy: string) => void;
+}
+
+/** The energy of a one-energy file: what was read from its name or heading, unless another is typed. */
+function EnergyField({ name, typed, foundKeV, onType }: EnergyFieldProps) {
+  return (
+    <label className="flex items-center gap-2">
+      <span className="text-ink-2">
+        Energy<span className="sr-only"> of {name}</span> (keV)
+      </span>
+      <span className="w-24">
+        <TextInput
+          numeric
+          className="px-2 py-1"
+          value={typed}
+          placeholder={foundKeV === null ? 'type it' : String(foundKeV)}
+          onChange={(event) => onType(event.target.value)}
+        />
+      </span>
+    </label>
+  );
 }

@@ -33,7 +33,7 @@ export function MomentsTable({ rows, onLight }: MomentsTableProps) {
           cell: ({ energyKeV }) => (
             <button
               type="button"
-              className="figures hover:text-coral-ink min-h-6"
+              className="figures hover:text-coral-ink -my-1 px-1 py-1"
               aria-label={`${energyKeV} keV: light its profile`}
               onPointerEnter={() => onLight(energyKeV)}
               onPointerLeave={() => onLight(null)}

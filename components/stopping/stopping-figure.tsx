@@ -16,6 +16,10 @@ const SMALLEST_HEIGHT = 220;
 const PER_ENERGY = 22;
 const LARGEST_HEIGHT = 560;
 
+export function ridgelineHeight(energies: number): number {
+  return Math.min(LARGEST_HEIGHT, SMALLEST_HEIGHT + PER_ENERGY * energies);
+}
+
 /** The stopping profiles as a ridgeline, with their moments below; pointing at an energy lights its ridge. */
 export function StoppingFigure({ profiles }: StoppingFigureProps) {
   const [litKeV, setLitKeV] = useState<number | null>(null);
@@ -23,7 +27,7 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
     () => profiles.map((profile) => ({ energyKeV: profile.energyKeV, bins: profile.mass.length, lostShare: profile.lostShare, ...stoppingMoments(profile) })),
     [profiles],
   );
-  const height = Math.min(LARGEST_HEIGHT, SMALLEST_HEIGHT + PER_ENERGY * profiles.length);
+  const height = ridgelineHeight(profiles.length);
   return (
     <div className="grid gap-6">
       <Figure

@@ -9,11 +9,14 @@ import { fetchJson } from '@/components/upload/fetch-json';
 import { stoppingSetSchema } from '@/lib/schemas/stopping-set';
 
 import { lossWarnings } from './loss-warnings';
-import { StoppingFigure } from './stopping-figure';
+import { ridgelineHeight, StoppingFigure } from './stopping-figure';
 import { WarningList } from './warning-list';
 
+const TABLE_HEAD = 90;
+const TABLE_ROW = 29;
+
 /** The profiles of a stored set. They may be megabytes, so they come after the page and not inside it. */
-export function StoredProfiles({ setId }: { setId: string }) {
+export function StoredProfiles({ setId, energies }: { setId: string; energies: number }) {
   const { data, error, isLoading, mutate } = useSWR(`/api/stopping-sets/${setId}`, fetchSet, {
     // A set never changes once stored.
     revalidateIfStale: false,
@@ -29,8 +32,10 @@ export function StoredProfiles({ setId }: { setId: string }) {
   }
   if (isLoading || !data) {
     return (
-      <div role="status" className="text-ink-2 min-h-96 text-sm">
+      <div role="status" className="text-ink-2 text-sm">
         Loading the profiles…
+        {/* Keeps the room of figure and table, so that nothing moves when they come. */}
+        <svg aria-hidden="true" width="100%" height={ridgelineHeight(energies) + TABLE_HEAD + TABLE_ROW * energies} className="block" />
       </div>
     );
   }

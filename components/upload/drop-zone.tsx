@@ -1,7 +1,7 @@
 'use client';
 
 import { clsx } from 'clsx';
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import { useDropzone } from 'react-dropzone';
 
 import { MAX_FILE_BYTES } from '@/lib/inversion/index';
@@ -18,6 +18,7 @@ interface DropZoneProps {
 
 /** Drop or choose text files. What is too large or cannot be read is said and not taken. */
 export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
+  const id = useId();
   const [refused, setRefused] = useState<readonly string[]>([]);
   const take = async (files: readonly File[]) => {
     const { taken, refused: reasons } = await takeAll(multiple ? files : files.slice(0, 1));
@@ -40,17 +41,19 @@ export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
           isDragActive ? 'border-kelp bg-sheet' : 'border-edge',
         )}
       >
-        <label className="block">
-          <span className="font-medium">{label}</span>
-          <span className="text-ink-2 mt-0.5 block text-sm">{hint}</span>
-          <input
-            {...getInputProps({ multiple, 'aria-label': undefined })}
-            // Shown, so that the browser's own button works with keyboard, touch and speech.
-            style={undefined}
-            tabIndex={0}
-            className="file:border-edge file:bg-sheet file:text-ink mt-3 block w-full max-w-full text-sm file:mr-3 file:cursor-pointer file:rounded file:border file:border-solid file:px-3 file:py-1.5 file:font-medium"
-          />
+        <label htmlFor={id} className="font-medium">
+          {label}
         </label>
+        <p id={`${id}-hint`} className="text-ink-2 mt-0.5">
+          {hint}
+        </p>
+        <input
+          {...getInputProps({ multiple, id, 'aria-describedby': `${id}-hint` })}
+          // Shown, so that the browser's own button works with keyboard, touch and speech.
+          style={undefined}
+          tabIndex={0}
+          className="file:border-edge file:bg-sheet file:text-ink mt-3 block w-full max-w-full file:mr-3 file:cursor-pointer file:rounded file:border file:border-solid file:px-3 file:py-1.5 file:font-medium"
+        />
       </div>
       <ul role="alert" className="text-coral-ink mt-2 space-y-1 text-sm empty:hidden">
         {refused.map((reason) => (

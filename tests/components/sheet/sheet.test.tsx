@@ -104,7 +104,7 @@ describe('cells that need mending', () => {
     paste(cell('energy', 1), '2\t0.7\t0.01\n3\tabc\t-0.01');
     const list = screen.getByRole('list', { name: 'cells to mend' });
     expect(within(list).getAllByRole('listitem').map((item) => item.textContent)).toEqual([
-      'Row 2, value: expected a number, found “abc”.',
+      'Row 2, fraction: expected a number, found “abc”.',
       'Row 2, σ: expected a number above 0, found -0.01.',
     ]);
     expect(cell('σ', 2).getAttribute('aria-invalid')).toBe('true');
@@ -119,8 +119,8 @@ describe('cells that need mending', () => {
     const sentences = screen.getAllByRole('listitem').map((item) => item.textContent);
     expect(sentences).toEqual([
       'Row 2, energy: 2 keV stands in row 1 already; expected each energy once.',
-      'Row 3, value: expected a number, found an empty cell.',
-      'Row 4, value: expected a fraction from 0 to 1 (within 5 σ), found 1.5.',
+      'Row 3, fraction: expected a number, found an empty cell.',
+      'Row 4, fraction: expected a fraction from 0 to 1 (within 5 σ), found 1.5.',
     ]);
     expect(points()).toHaveLength(1);
   });

@@ -40,7 +40,7 @@ describe('adding a stopping set', () => {
     await choose({ '2keV.txt': ONE, 'second.txt': ONE });
     expect(await screen.findByText(/type it in\./)).toBeDefined();
     expect(save().disabled).toBe(true);
-    fireEvent.change(screen.getAllByLabelText(/^Energy/)[1]!, { target: { value: '8' } });
+    fireEvent.change(screen.getByLabelText(/Energy of second\.txt/), { target: { value: '8' } });
     await waitFor(() => expect(save().disabled).toBe(false));
     expect(screen.getByRole('region', { name: 'Moments' })).toBeDefined();
     fireEvent.change(screen.getByLabelText('Name'), { target: { value: 'SiC, 1 nm bins' } });

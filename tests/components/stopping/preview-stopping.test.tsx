@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 
 import { leaveOutTest } from '@/components/stopping/may-leave-out';
-import { previewStopping } from '@/components/stopping/preview-stopping';
+import { previewStopping, type TableCache } from '@/components/stopping/preview-stopping';
 import {
   NO_STOPPING_CHOICES,
   withFileChoices,
@@ -62,7 +62,7 @@ describe('preview of stopping profiles', () => {
   });
 
   it('does not read a file again for a change of unit, and does for another delimiter', () => {
-    const cache = new WeakMap();
+    const cache: TableCache = new WeakMap();
     const choices = of({ 'matrix.csv': MATRIX });
     const before = previewStopping(choices, cache).files[0]?.table;
     expect(previewStopping({ ...choices, depthUnit: 'um' }, cache).files[0]?.table).toBe(before);
