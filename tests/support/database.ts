@@ -33,7 +33,10 @@ export async function testDatabase({
 
 let client = 0;
 
-async function contextOn({ db, queue }: OpenDatabase, sessionToken?: string): Promise<Context> {
+export async function contextOn(
+  { db, queue }: OpenDatabase,
+  sessionToken?: string,
+): Promise<Context> {
   const session = sessionToken === undefined ? null : await readSession(db, sessionToken);
   return {
     db,
@@ -44,4 +47,8 @@ async function contextOn({ db, queue }: OpenDatabase, sessionToken?: string): Pr
     clientKey: `test client ${(client += 1)}`,
     device: 'A test',
   };
+}
+
+export function filePath({ url }: TestDatabase): string {
+  return url.replace(/^file:/, '');
 }
