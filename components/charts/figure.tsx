@@ -23,6 +23,8 @@ interface FigureProps {
   children: ReactNode | ((width: number) => ReactNode);
   /** Between the title and the picture, such as the one number of the page. */
   lead?: ReactNode;
+  /** Under the picture, such as what it says at the pointer. */
+  foot?: ReactNode;
   className?: string;
 }
 
@@ -37,6 +39,7 @@ export function Figure({
   height,
   children,
   lead,
+  foot,
   className,
 }: FigureProps) {
   const [titleId, tableId] = [useId(), useId()];
@@ -67,6 +70,7 @@ export function Figure({
         {width !== null &&
           (typeof children === 'function' ? children(Math.max(width, NARROWEST)) : children)}
       </div>
+      {foot}
       <div id={tableId} hidden={!tableOpen}>
         {tableOpen && (tableView ?? <FigureDataTable caption={title} table={table} />)}
       </div>

@@ -10,18 +10,24 @@ const BOTTOM = 8;
 /** Residuals over σ under the scan: bars for the fit, hollow circles for the models compared with. */
 export function ResidualChart({
   series,
+  energiesKeV = [],
   width,
   height,
   highlightedKeV = null,
   description,
 }: {
   series: readonly ResidualSeries[];
+  /** Energies of the scan above, where the residuals do not name them all. */
+  energiesKeV?: readonly number[];
   width: number;
   height: number;
   highlightedKeV?: number | null;
   description?: string;
 }) {
-  const energies = series.flatMap((one) => one.residuals.map((residual) => residual.energyKeV));
+  const energies = [
+    ...energiesKeV,
+    ...series.flatMap((one) => one.residuals.map((residual) => residual.energyKeV)),
+  ];
   const x = energyScale(energies, width);
   const largest =
     Math.max(

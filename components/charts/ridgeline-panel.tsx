@@ -21,6 +21,18 @@ export interface RidgelinePanelProps {
   speakingKeV?: readonly number[] | null;
 }
 
+/** Base line of each ridge in a panel, shallow at the top. */
+export function ridgeBases(
+  ridges: readonly Pick<Ridge, 'energyKeV'>[],
+  { top, height }: { top: number; height: number },
+): { energyKeV: number; y: number }[] {
+  const spacing = height / (ridges.length + OVERLAP - 1);
+  return ridges
+    .map((ridge) => ridge.energyKeV)
+    .sort((a, b) => a - b)
+    .map((energyKeV, index) => ({ energyKeV, y: top + spacing * (index + OVERLAP) }));
+}
+
 /** Stopping profiles of all energies over one depth axis, on one common scale, shallow at the top. */
 export function RidgelinePanel({
   ridges,
@@ -35,6 +47,7 @@ export function RidgelinePanel({
   const sorted = [...ridges].sort((a, b) => a.energyKeV - b.energyKeV);
   const range = energyRange(sorted.map((ridge) => ridge.energyKeV));
   const spacing = height / (sorted.length + OVERLAP - 1);
+  const bases = ridgeBases(sorted, { top, height });
   const domain = x.domain() as [number, number];
   const [left, right] = x.range() as [number, number];
   const cells = Math.max(40, Math.min(400, Math.round((right - left) / 2)));
@@ -60,7 +73,7 @@ export function RidgelinePanel({
         keV
       </text>
       {sorted.map((ridge, index) => {
-        const base = top + spacing * (index + OVERLAP);
+        const base = bases[index]!.y;
         const colour = energyColour(ridge.energyKeV, range);
         const lit = highlightedKeV === ridge.energyKeV;
         const faded =

@@ -17,7 +17,7 @@ export type Setting = NonNullable<FitSpec['parameters'][ParameterName]>;
 
 const DEFAULT_SEED = 1;
 /** About 1 µs⁻¹ per 10¹² cm⁻³, the rule of thumb for holes in germanium near 200 K (common practice, no source). */
-const DEFAULT_GAMMA = 1e-6;
+export const DEFAULT_GAMMA = 1e-6;
 
 const FREE: Setting = { held: false, value: null, prior: null, origin: '' };
 const SCALE_HELD: Setting = { held: true, value: 1, prior: null, origin: '' };

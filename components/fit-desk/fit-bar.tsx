@@ -29,11 +29,15 @@ export function FitBar({ fit, outOfDate, obstacle, loading, comparing, onCompare
           Compare all
         </Button>
       </div>
-      <Progress
-        label={fit.run === null ? 'No fit under way' : 'Resampling'}
-        value={fit.progress?.done ?? (fit.run === null ? (fit.good?.complete ? 1 : 0) : null)}
-        max={fit.progress?.total ?? 1}
-      />
+      <div className="h-[3px]">
+        {fit.run !== null && (
+          <Progress
+            label="Resampling"
+            value={fit.progress?.done ?? null}
+            max={fit.progress?.total ?? 1}
+          />
+        )}
+      </div>
       <div className="flex min-h-6 items-baseline justify-between gap-3 text-[0.8125rem] text-ink-2">
         <span role="status">{statusText(fit, outOfDate, loading)}</span>
         {fit.run !== null && (

@@ -41,8 +41,8 @@ export function pointsOf(
 
 /** Everything the inversion needs, from the scan, the assumptions and the stopping set. */
 export function fitInputOf(
-  scan: Pick<Scan, 'observable' | 'points'>,
-  assumptions: Assumptions,
+  scan: Pick<Scan, 'observable'> & { points: readonly ScanPoint[] },
+  assumptions: Omit<Assumptions, 'stoppingSetId'>,
   stopping: StoppingSet,
 ): FitInput {
   return {
