@@ -15,7 +15,10 @@ export type CaptureRateScanOutcome =
  * Λ_c(E) of a joint fit as an energy scan in ascending energy, with its full covariance: the points share ν, E_A and λ₀ and
  * are correlated. The covariance has those integrated out (it is the block of the whole covariance, not its inverse's).
  */
-export function captureRateScan({ parameters, covariance }: JointFitAnswer): CaptureRateScanOutcome {
+export function captureRateScan({
+  parameters,
+  covariance,
+}: JointFitAnswer): CaptureRateScanOutcome {
   if (!covariance.ok) return { ok: false, reason: covariance.reason };
   const rates = parameters
     .map((parameter, k) => ({ ...parameter, place: covariance.indices.indexOf(k) }))
@@ -23,7 +26,10 @@ export function captureRateScan({ parameters, covariance }: JointFitAnswer): Cap
     .sort((one, other) => one.energyKeV! - other.energyKeV!);
   const blind = rates.find(({ place }) => place < 0);
   if (blind) {
-    return { ok: false, reason: `No point says anything of the capture rate at ${blind.energyKeV} keV.` };
+    return {
+      ok: false,
+      reason: `No point says anything of the capture rate at ${blind.energyKeV} keV.`,
+    };
   }
   const block = rates.map(({ place: a }) => rates.map(({ place: b }) => covariance.matrix[a]![b]!));
   return {

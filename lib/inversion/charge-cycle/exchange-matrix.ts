@@ -53,13 +53,7 @@ export function exchangeModes(
   });
   const modes: ExchangeMode[] = [];
   realEigenvalues.forEach((real, k) => {
-    const mode = polishMode(
-      cycle,
-      capturePerUs,
-      ionisationPerUs,
-      real,
-      imaginaryEigenvalues[k]!,
-    );
+    const mode = polishMode(cycle, capturePerUs, ionisationPerUs, real, imaginaryEigenvalues[k]!);
     if (mode && !modes.some((known) => sameMode(known, mode))) modes.push(mode);
   });
   return modes.sort((one, other) => one.ratePerUs - other.ratePerUs);

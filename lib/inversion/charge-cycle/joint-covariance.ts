@@ -12,9 +12,10 @@ export type JointCovariance =
 const SMALLEST_EIGENVALUE = 1e-11;
 
 /**
- * (JᵀV⁻¹J + priors)⁻¹ at θ from the analytic Jacobian, over what is neither held nor at a bound, except that every Λ_c
- * is kept: a rate at zero has the σ that it would have if it could go below, so that the covariance of the Λ_c can serve as
- * the V of a later fit. An E_A that no point depends on (its Λ_c is zero) is left out.
+ * (JᵀV⁻¹J + priors)⁻¹ at θ from the analytic Jacobian, over what is neither held nor at a bound, except that Λ_c and λ₀
+ * are kept at zero too, as if they could go below: leaving them out would make the others look better known than they are
+ * (λ₀ above zero takes its share from every Λ_c), and the covariance of the Λ_c could not serve as the V of a later fit. An
+ * E_A that no point depends on (its Λ_c is zero) is left out.
  */
 export function jointCovariance(problem: JointProblem, theta: Float64Array): JointCovariance {
   const { size, captureFrom, held, lower, upper } = problem;
@@ -22,8 +23,8 @@ export function jointCovariance(problem: JointProblem, theta: Float64Array): Joi
   fillNormal(problem, whiten(problem, theta), normal);
   const indices = Array.from({ length: size }, (_, k) => k).filter((k) => {
     if (held[k] || !(normal.matrix[k * size + k]! > 0)) return false;
-    const isCapture = k >= captureFrom && k < size - 1;
-    return isCapture || (theta[k]! > lower[k]! && theta[k]! < upper[k]!);
+    const isRate = k >= captureFrom;
+    return isRate || (theta[k]! > lower[k]! && theta[k]! < upper[k]!);
   });
   const scale = indices.map((k) => Math.sqrt(normal.matrix[k * size + k]!));
   const scaled = new Matrix(

@@ -24,7 +24,7 @@ export interface JointParameter {
   /** Energy that it belongs to; null for what the scans share. */
   energyKeV: number | null;
   value: number;
-  /** From the covariance; for a capture rate at zero, of the rate as if it could go below. null where there is none. */
+  /** From the covariance; for a rate at zero, as if it could go below. null where there is none. */
   sigma: number | null;
   held: boolean;
   atBound: 'lower' | 'upper' | null;
@@ -77,8 +77,8 @@ const MOST_RESTARTS = 3;
  * of a scan. Weighted least squares; Λ_c and λ₀ are linear in the closed form, so the minimum is searched for over ν and E_A
  * and then polished. No starting guess enters.
  *
- * @returns 'no-minimum' where no rate falls with temperature: χ² is not better by 1 than constants, and neither ν nor E_A
- * can be told.
+ * @returns 'no-minimum' where no rate falls with temperature: χ² is not better by 3.84 than with one constant rate per
+ * energy, and neither ν nor E_A can be told.
  * @throws InversionError for what checkJointFitInput refuses.
  */
 export function fitTemperatureScans(
@@ -87,12 +87,14 @@ export function fitTemperatureScans(
 ): JointFitOutcome {
   const closed = jointProblem(input, 'closed form');
   const { starts, constantChiSquare } = searchJointMinimum(closed);
-  const fromLattice = lowest(starts.slice(0, MOST_STARTS).map(({ theta }) => polishJoint(closed, theta)));
+  const fromLattice = lowest(
+    starts.slice(0, MOST_STARTS).map(({ theta }) => polishJoint(closed, theta)),
+  );
   const needed = method === 'automatic' ? neededMethod(closed, fromLattice.theta) : method;
   const problem = needed === 'closed form' ? closed : { ...closed, method: needed };
   let minimum = problem === closed ? fromLattice : polishJoint(problem, fromLattice.theta);
   const undetermined = !closed.held[0] || !closed.held[1];
-  if (undetermined && !(constantChiSquare - minimum.chiSquare >= DELTA_CHI_SQUARE_68)) {
+  if (undetermined && !(constantChiSquare - minimum.chiSquare >= DELTA_CHI_SQUARE_95)) {
     return {
       status: 'no-minimum',
       reason:
@@ -103,7 +105,14 @@ export function fitTemperatureScans(
     const covariance = jointCovariance(problem, minimum.theta);
     const report = reportParameters(input, problem, minimum, covariance, intervalsFor);
     if (!report.better || restart === MOST_RESTARTS) {
-      const answer = answerAt(input, problem, minimum, covariance, report.parameters, starts.length);
+      const answer = answerAt(
+        input,
+        problem,
+        minimum,
+        covariance,
+        report.parameters,
+        starts.length,
+      );
       return { status: answer.status, answer };
     }
     minimum = polishJoint(problem, report.better);

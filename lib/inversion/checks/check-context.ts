@@ -1,0 +1,38 @@
+import type { PreparedFit } from '../fit/prepared-fit';
+import type { CarrierProfile, Check, FitAnswer, FitParameter, ParameterName } from '../types';
+
+/** What a check looks at. */
+export interface CheckContext {
+  prepared: PreparedFit;
+  answer: FitAnswer;
+  profile: CarrierProfile;
+}
+
+/** A check of one concern; null where it does not apply to this fit. */
+export type FitCheck = (context: CheckContext) => Check | null;
+
+export function parameterOf(
+  { answer }: CheckContext,
+  name: ParameterName,
+): FitParameter | undefined {
+  return answer.parameters.find((parameter) => parameter.name === name);
+}
+
+/** Parameter names as words in a sentence. */
+export const IN_WORDS: Readonly<Record<ParameterName, string>> = {
+  edgeDepthNm: 'the edge depth',
+  edgeWidthNm: 'the edge width',
+  levelTop: 'the level above the edge',
+  levelBulk: 'the level below the edge',
+  levelCap: 'the level of the cap',
+  depthScale: 'the depth scale',
+};
+
+export const percent = (share: number): string => `${Number((100 * share).toPrecision(2))} %`;
+export const figure = (value: number): string => String(Number(value.toPrecision(3)));
+
+export function listOf(words: readonly string[]): string {
+  return words.length < 2
+    ? words.join('')
+    : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]!}`;
+}

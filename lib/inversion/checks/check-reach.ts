@@ -1,0 +1,53 @@
+import { edgeInformationByEnergy } from '../uncertainty/edge-information-by-energy';
+import { figure, parameterOf, percent, type CheckContext, type FitCheck } from './check-context';
+
+/** Whether the muons reach the edge, and which energies speak about it. */
+export const checkReach: FitCheck = (context) => {
+  const edge = parameterOf(context, 'edgeDepthNm')!;
+  const { reachNm } = context.profile;
+  const id = 'edge-reach';
+  const at = `${figure(edge.value)} nm`;
+  const [lower, upper] = edge.interval95;
+  if (edge.value > reachNm) {
+    return {
+      id,
+      state: 'problem',
+      message: `The edge at ${at} lies beyond the reach of the scan: only one muon in twenty of the deepest energy stops below ${figure(reachNm)} nm.`,
+    };
+  }
+  if (!edge.held && lower === null && upper === null) {
+    return {
+      id,
+      state: 'problem',
+      message: 'The scan does not say how deep the edge lies: any depth fits within 95 %.',
+    };
+  }
+  if (!edge.held && (lower === null || upper === null)) {
+    const side =
+      lower === null ? `shallower than ${figure(upper!)} nm` : `deeper than ${figure(lower)} nm`;
+    return {
+      id,
+      state: 'caution',
+      message: `The scan bounds the edge on one side only: ${side} (95 %).`,
+    };
+  }
+  return { id, state: 'fine', message: `Edge is inside reach. ${sourceOf(context)}` };
+};
+
+/** The three neighbouring energies that know most of the edge. */
+function sourceOf({ prepared, answer }: CheckContext): string {
+  const shares = edgeInformationByEnergy(prepared, answer);
+  const points = prepared.input.points
+    .map(({ energyKeV, enabled }, index) => ({ energyKeV, enabled, share: shares[index]! }))
+    .filter(({ enabled }) => enabled)
+    .sort((a, b) => a.energyKeV - b.energyKeV);
+  let best = { share: 0, from: 0, to: 0 };
+  for (let k = 0; k < points.length; k++) {
+    const window = points.slice(k, k + 3);
+    const share = window.reduce((sum, point) => sum + point.share, 0);
+    if (share > best.share)
+      best = { share, from: window[0]!.energyKeV, to: window[window.length - 1]!.energyKeV };
+  }
+  if (best.share === 0) return 'The points cannot tell it from the other parameters.';
+  return `${percent(best.share)} of the information on it comes from ${figure(best.from)} to ${figure(best.to)} keV.`;
+}
