@@ -50,7 +50,8 @@ export function reportParameters(
       interval95: profiled?.interval95 ?? linear(SIGMAS_95),
       held,
       atBound,
-      symmetric: atBound === null && agrees(value, sigma, interval68),
+      symmetric:
+        atBound === null && agrees(value, sigma, interval68, model.lower[k]!, model.upper[k]!),
     });
   }
   return { parameters, better: null };
@@ -61,8 +62,15 @@ function boundOf(value: number, lower: number, upper: number): 'lower' | 'upper'
   return value >= upper ? 'upper' : null;
 }
 
-function agrees(value: number, sigma: number | null, [lower, upper]: Interval): boolean {
-  if (sigma === null || lower === null || upper === null) return false;
+function agrees(
+  value: number,
+  sigma: number | null,
+  [lower, upper]: Interval,
+  lowest: number,
+  highest: number,
+): boolean {
+  if (sigma === null || lower === null || upper === null || lower <= lowest || upper >= highest)
+    return false;
   return [value - lower, upper - value].every(
     (side) => Math.abs(side - sigma) <= AGREEMENT * sigma,
   );
