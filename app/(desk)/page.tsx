@@ -3,6 +3,7 @@ import type { Metadata } from 'next';
 import { read } from '@/app/_server/read';
 import { FirstSteps } from '@/components/home/first-steps';
 import { WaitingList } from '@/components/home/waiting-list';
+import { allInvented } from '@/components/sample/all-invented';
 import { FitTable } from '@/components/sample/fit-table';
 import { IssuedTable } from '@/components/sample/issued-table';
 import { SampleTable } from '@/components/sample/sample-table';
@@ -58,7 +59,7 @@ export default async function HomePage() {
           <FirstSteps counts={home.counts} />
         </Section>
       ) : (
-        <Section title="Waits for you">
+        <Section title="Waits for you" badge={markFor(home.waiting)}>
           {home.waiting.length > 0 ? (
             <WaitingList fits={home.waiting} />
           ) : (
@@ -67,22 +68,38 @@ export default async function HomePage() {
         </Section>
       )}
       {home.recentProfiles.length > 0 && (
-        <Section title="Newest issued profiles" actions={<TextLink href="/profiles">All</TextLink>}>
+        <Section
+          title="Newest issued profiles"
+          badge={markFor(home.recentProfiles)}
+          actions={<TextLink href="/profiles">All</TextLink>}
+        >
           <IssuedTable caption="Newest issued profiles" profiles={home.recentProfiles} />
         </Section>
       )}
       {home.recentFits.length > 0 && (
-        <Section title="Recent fits" actions={<TextLink href="/fits">All</TextLink>}>
+        <Section
+          title="Recent fits"
+          badge={markFor(home.recentFits)}
+          actions={<TextLink href="/fits">All</TextLink>}
+        >
           <FitTable caption="Recent fits" fits={home.recentFits} />
         </Section>
       )}
       {home.samples.length > 0 && (
-        <Section title="Samples" actions={<TextLink href="/samples">All</TextLink>}>
+        <Section
+          title="Samples"
+          badge={markFor(home.samples)}
+          actions={<TextLink href="/samples">All</TextLink>}
+        >
           <SampleTable caption="Samples" samples={home.samples} />
         </Section>
       )}
     </>
   );
+}
+
+function markFor(rows: readonly { invented: boolean }[]) {
+  return allInvented(rows) && <InventedMark />;
 }
 
 function counted(count: number, what: string): string {

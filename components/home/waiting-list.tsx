@@ -1,3 +1,4 @@
+import { allInvented } from '@/components/sample/all-invented';
 import { ResultText } from '@/components/sample/result-text';
 import { ButtonLink } from '@/components/ui/button-link';
 import { InventedMark } from '@/components/ui/invented-mark';
@@ -9,6 +10,7 @@ import type { FitRow } from '@/lib/schemas/fit';
 import { nextStep } from './next-step';
 
 export function WaitingList({ fits }: { fits: readonly FitRow[] }) {
+  const marked = allInvented(fits);
   return (
     <ul className="border-t border-rule">
       {fits.map((fit) => {
@@ -24,7 +26,7 @@ export function WaitingList({ fits }: { fits: readonly FitRow[] }) {
                   {fit.name}
                 </TextLink>
                 <StateBadge state={fit.state} />
-                {fit.invented && <InventedMark />}
+                {!marked && fit.invented && <InventedMark />}
               </p>
               <p className="text-sm text-ink-2">
                 {fit.sampleName}, {fit.scanName} · {fit.profile} edge at{' '}

@@ -1,11 +1,12 @@
 import { DataTable, type Column } from '@/components/ui/data-table';
-import { InventedMark } from '@/components/ui/invented-mark';
 import { Moment } from '@/components/ui/moment';
 import { StateBadge } from '@/components/ui/state-badge';
 import { TextLink } from '@/components/ui/text-link';
 import { significant } from '@/lib/format';
 import type { FitRow } from '@/lib/schemas/fit';
 
+import { allInvented } from './all-invented';
+import { Named } from './named';
 import { ResultText } from './result-text';
 
 type FitTableProps = {
@@ -16,29 +17,29 @@ type FitTableProps = {
 };
 
 export function FitTable({ caption, fits, withSample = true }: FitTableProps) {
+  const name = nameColumn(!allInvented(fits));
   return (
     <DataTable
       caption={caption}
       captionHidden
       stacks
-      columns={withSample ? [NAME, SAMPLE, ...REST] : [NAME, ...REST]}
+      columns={withSample ? [name, SAMPLE, ...REST] : [name, ...REST]}
       rows={fits}
       rowKey={(fit) => fit.id}
     />
   );
 }
 
-const NAME: Column<FitRow> = {
+const nameColumn = (markRows: boolean): Column<FitRow> => ({
   key: 'name',
   label: 'Fit',
   rowHeader: true,
   cell: (fit) => (
-    <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
+    <Named marked={markRows && fit.invented}>
       <TextLink href={`/fits/${fit.id}`}>{fit.name}</TextLink>
-      {fit.invented && <InventedMark />}
-    </span>
+    </Named>
   ),
-};
+});
 
 const SAMPLE: Column<FitRow> = {
   key: 'sample',

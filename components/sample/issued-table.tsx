@@ -1,9 +1,10 @@
 import { DataTable, type Column } from '@/components/ui/data-table';
-import { InventedMark } from '@/components/ui/invented-mark';
 import { Moment } from '@/components/ui/moment';
 import { TextLink } from '@/components/ui/text-link';
 import type { IssuedProfileRow } from '@/lib/schemas/profile';
 
+import { allInvented } from './all-invented';
+import { Named } from './named';
 import { ResultText } from './result-text';
 
 type IssuedTableProps = {
@@ -13,31 +14,31 @@ type IssuedTableProps = {
 };
 
 export function IssuedTable({ caption, profiles, withSample = true }: IssuedTableProps) {
+  const number = numberColumn(!allInvented(profiles));
   return (
     <DataTable
       caption={caption}
       captionHidden
       stacks
-      columns={withSample ? [NUMBER, SAMPLE, ...REST] : [NUMBER, ...REST]}
+      columns={withSample ? [number, SAMPLE, ...REST] : [number, ...REST]}
       rows={profiles}
       rowKey={(profile) => profile.id}
     />
   );
 }
 
-const NUMBER: Column<IssuedProfileRow> = {
+const numberColumn = (markRows: boolean): Column<IssuedProfileRow> => ({
   key: 'number',
   label: 'Number',
   rowHeader: true,
   cell: (profile) => (
-    <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
+    <Named marked={markRows && profile.invented}>
       <TextLink href={`/profiles/${profile.id}`} className="figures">
         {profile.number}
       </TextLink>
-      {profile.invented && <InventedMark />}
-    </span>
+    </Named>
   ),
-};
+});
 
 const SAMPLE: Column<IssuedProfileRow> = {
   key: 'sample',

@@ -41,7 +41,7 @@ function WhatItIs({ sample }: PartProps) {
       <Field label="Name" name="name" required hint="The name on the wafer or in the logbook.">
         <TextInput defaultValue={sample?.name} maxLength={80} />
       </Field>
-      <Field label="Material" name="material" required hint="Such as 4H silicon carbide.">
+      <Field label="Material" name="material" required hint="Such as n-type 4H-SiC.">
         <TextInput defaultValue={sample?.material} maxLength={80} />
       </Field>
       <Field label="Majority carriers" name="carrier" required>

@@ -8,7 +8,11 @@ type SampleSearchProps = { words: string; archived: boolean };
 export function SampleSearch({ words, archived }: SampleSearchProps) {
   return (
     <div className="no-print flex flex-wrap items-center gap-x-4 gap-y-2 py-4">
-      <form role="search" action="/samples" className="flex min-w-0 flex-1 gap-2 sm:max-w-sm">
+      <form
+        role="search"
+        action="/samples"
+        className="flex min-w-0 flex-1 basis-full gap-2 sm:max-w-sm sm:basis-auto"
+      >
         {archived && <input type="hidden" name="archived" value="yes" />}
         <TextInput
           type="search"

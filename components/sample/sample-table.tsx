@@ -1,9 +1,10 @@
 import { DataTable, type Column } from '@/components/ui/data-table';
-import { InventedMark } from '@/components/ui/invented-mark';
 import { TextLink } from '@/components/ui/text-link';
 import type { SampleRow } from '@/lib/schemas/sample';
 
-import { capText, dopingText, dopingType } from './carrier-words';
+import { allInvented } from './all-invented';
+import { capText, dopingText } from './carrier-words';
+import { Named } from './named';
 
 export function SampleTable({
   caption,
@@ -17,30 +18,27 @@ export function SampleTable({
       caption={caption}
       captionHidden
       stacks
-      columns={COLUMNS}
+      columns={[nameColumn(!allInvented(samples)), ...COLUMNS]}
       rows={samples}
       rowKey={(sample) => sample.id}
     />
   );
 }
 
+const nameColumn = (markRows: boolean): Column<SampleRow> => ({
+  key: 'name',
+  label: 'Sample',
+  rowHeader: true,
+  cell: (sample) => (
+    <Named marked={markRows && sample.invented}>
+      <TextLink href={`/samples/${sample.id}`}>{sample.name}</TextLink>
+    </Named>
+  ),
+});
+
 const COLUMNS: readonly Column<SampleRow>[] = [
-  {
-    key: 'name',
-    label: 'Sample',
-    rowHeader: true,
-    cell: (sample) => (
-      <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
-        <TextLink href={`/samples/${sample.id}`}>{sample.name}</TextLink>
-        {sample.invented && <InventedMark />}
-      </span>
-    ),
-  },
-  {
-    key: 'material',
-    label: 'Material',
-    cell: (sample) => `${dopingType(sample.carrier)} ${sample.material}`,
-  },
+  { key: 'material', label: 'Material', cell: (sample) => sample.material },
+  { key: 'carrier', label: 'Carriers', cell: (sample) => sample.carrier },
   {
     key: 'doping',
     label: 'Doping',

@@ -1,9 +1,11 @@
 import { ButtonLink } from '@/components/ui/button-link';
 import { EmptyState } from '@/components/ui/empty-state';
+import { InventedMark } from '@/components/ui/invented-mark';
 import { Section } from '@/components/ui/section';
 import type { Sample } from '@/lib/schemas/sample';
 import type { Scan } from '@/lib/schemas/scan';
 
+import { allInvented } from './all-invented';
 import { ScanTable } from './scan-table';
 
 type ScanSectionProps = {
@@ -17,7 +19,7 @@ type ScanSectionProps = {
 /** The energy scans of a sample; archived ones stay within reach, folded away. */
 export function ScanSection({ sample, scans, archivedScans, mayAdd, mayFit }: ScanSectionProps) {
   return (
-    <Section title="Energy scans">
+    <Section title="Energy scans" badge={allInvented(scans) && <InventedMark />}>
       {scans.length > 0 ? (
         <ScanTable caption={`Energy scans of ${sample.name}`} scans={scans} mayFit={mayFit} />
       ) : (

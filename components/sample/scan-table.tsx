@@ -1,19 +1,22 @@
 import { ButtonLink } from '@/components/ui/button-link';
 import { DataTable, type Column } from '@/components/ui/data-table';
-import { InventedMark } from '@/components/ui/invented-mark';
 import { TextLink } from '@/components/ui/text-link';
 import { asEntered } from '@/lib/format';
 import type { Scan } from '@/lib/schemas/scan';
 
+import { allInvented } from './all-invented';
+import { Named } from './named';
+
 type ScanTableProps = { caption: string; scans: readonly Scan[]; mayFit: boolean };
 
 export function ScanTable({ caption, scans, mayFit }: ScanTableProps) {
+  const columns = [nameColumn(!allInvented(scans)), ...COLUMNS];
   return (
     <DataTable
       caption={caption}
       captionHidden
       stacks
-      columns={mayFit ? [...COLUMNS, FIT] : COLUMNS}
+      columns={mayFit ? [...columns, FIT] : columns}
       rows={scans}
       rowKey={(scan) => scan.id}
     />
@@ -22,18 +25,18 @@ export function ScanTable({ caption, scans, mayFit }: ScanTableProps) {
 
 const OBSERVABLE_WORDS = { fraction: 'diamagnetic fraction', rate: 'capture rate (µs⁻¹)' } as const;
 
+const nameColumn = (markRows: boolean): Column<Scan> => ({
+  key: 'name',
+  label: 'Energy scan',
+  rowHeader: true,
+  cell: (scan) => (
+    <Named marked={markRows && scan.invented}>
+      <TextLink href={`/scans/${scan.id}`}>{scan.name}</TextLink>
+    </Named>
+  ),
+});
+
 const COLUMNS: readonly Column<Scan>[] = [
-  {
-    key: 'name',
-    label: 'Energy scan',
-    rowHeader: true,
-    cell: (scan) => (
-      <span className="inline-flex flex-wrap items-center gap-x-2 gap-y-1">
-        <TextLink href={`/scans/${scan.id}`}>{scan.name}</TextLink>
-        {scan.invented && <InventedMark />}
-      </span>
-    ),
-  },
   { key: 'observable', label: 'Observable', cell: (scan) => OBSERVABLE_WORDS[scan.observable] },
   { key: 'energies', label: 'Energies', numeric: true, cell: energiesText },
   {

@@ -30,7 +30,7 @@ export function MainNav({ waiting }: MainNavProps) {
                   aria-current={current ? 'page' : undefined}
                   className="-mb-px flex items-center gap-1 border-b-2 border-transparent pt-0.5 text-sm whitespace-nowrap text-ink-2 hover:text-ink aria-[current]:border-coral aria-[current]:font-semibold aria-[current]:text-ink"
                 >
-                  {item.label}
+                  <BoldWidth label={item.label} />
                   {item.href === '/reviews' && <Waiting count={waiting} />}
                 </Link>
               </li>
@@ -59,6 +59,18 @@ export function MainNav({ waiting }: MainNavProps) {
         </Menu>
       </nav>
     </>
+  );
+}
+
+/** Takes the room of the bold label at all times, so that its neighbours stay where they are. */
+function BoldWidth({ label }: { label: string }) {
+  return (
+    <span
+      data-label={label}
+      className="after:invisible after:block after:h-0 after:overflow-hidden after:font-semibold after:content-[attr(data-label)/'']"
+    >
+      {label}
+    </span>
   );
 }
 

@@ -13,10 +13,7 @@ import { ROLES } from '@/lib/schemas/common';
 import { InvitationLink } from './invitation-link';
 import { ROLE_WORDS } from './role-words';
 
-const CHOICES = ROLES.map((role) => ({
-  value: role,
-  label: `${ROLE_WORDS[role].label}: ${ROLE_WORDS[role].can}`,
-}));
+const CHOICES = ROLES.map((role) => ({ value: role, label: ROLE_WORDS[role].label }));
 
 /** The link shows once, here; the server keeps only its hash. */
 export function InviteForm({ action }: { action: FormActionFunction<{ path: string }> }) {

@@ -22,13 +22,13 @@ export function ActionButton<Answer>({
 }: ActionButtonProps<Answer>) {
   const [state, dispatch, pending] = useActionState(action, null);
   return (
-    <span className="inline-flex flex-wrap items-center gap-2">
+    <span className="inline-flex flex-wrap items-center">
       <Button {...rest} pending={pending} onClick={() => startTransition(() => dispatch(input))}>
         {pending && pendingLabel ? pendingLabel : children}
       </Button>
       <span role="status">
         {state?.ok === false && (
-          <span className="inline-flex items-center gap-1.5 text-[0.8125rem] text-coral-ink">
+          <span className="ml-2 inline-flex items-center gap-1.5 text-[0.8125rem] text-coral-ink">
             <Mark kind="problem" /> {state.message}
           </span>
         )}

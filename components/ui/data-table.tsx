@@ -65,7 +65,7 @@ export function DataTable<Row>({
                 role="columnheader"
                 scope="col"
                 className={cn(
-                  'pr-4 pb-1.5 align-bottom text-[0.8125rem] font-normal text-ink-3 last:pr-0',
+                  'pr-6 pb-1.5 align-bottom text-[0.8125rem] font-normal text-ink-3 last:pr-0',
                   column.numeric && 'text-right',
                   column.className,
                 )}
@@ -84,7 +84,7 @@ export function DataTable<Row>({
             >
               {columns.map((column) => {
                 const look = cn(
-                  'pr-4 align-top last:pr-0',
+                  'pr-6 align-baseline last:pr-0',
                   pad,
                   column.numeric && 'figures text-right',
                   column.className,
@@ -106,7 +106,11 @@ export function DataTable<Row>({
                     data-label={column.labelHidden ? undefined : label}
                     className={look}
                   >
-                    {column.cell(row, index)}
+                    {stacks ? (
+                      <div className="min-w-0">{column.cell(row, index)}</div>
+                    ) : (
+                      column.cell(row, index)
+                    )}
                   </td>
                 );
               })}

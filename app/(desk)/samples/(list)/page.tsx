@@ -1,10 +1,12 @@
 import type { Metadata } from 'next';
 
 import { read } from '@/app/_server/read';
+import { allInvented } from '@/components/sample/all-invented';
 import { SampleSearch } from '@/components/sample/sample-search';
 import { SampleTable } from '@/components/sample/sample-table';
 import { ButtonLink } from '@/components/ui/button-link';
 import { EmptyState } from '@/components/ui/empty-state';
+import { InventedMark } from '@/components/ui/invented-mark';
 import { PageHeader } from '@/components/ui/page-header';
 import { mayAct } from '@/db/access/policy';
 import { listSamples } from '@/db/access/sample/list-samples';
@@ -25,6 +27,7 @@ export default async function SamplesPage({ searchParams }: PageProps<'/samples'
     <>
       <PageHeader
         title={archived ? 'Archived samples' : 'Samples'}
+        badge={allInvented(found) && <InventedMark />}
         breadcrumb={archived ? [{ label: 'Samples', href: '/samples' }] : []}
         actions={
           mayEdit && (

@@ -1,6 +1,8 @@
 import type { Metadata } from 'next';
 
 import { read } from '@/app/_server/read';
+import { allInvented } from '@/components/sample/all-invented';
+import { CompareLinks } from '@/components/sample/compare-links';
 import { FitTable } from '@/components/sample/fit-table';
 import { IssuedTable } from '@/components/sample/issued-table';
 import { SampleFacts } from '@/components/sample/sample-facts';
@@ -55,7 +57,11 @@ export default async function SamplePage({ params }: Props) {
         mayAdd={mayEdit && sample.archivedAt === null}
         mayFit={mayAct(viewer, 'fit')}
       />
-      <Section title="Fits">
+      <Section
+        title="Fits"
+        badge={allInvented(fits) && <InventedMark />}
+        actions={<CompareLinks fits={fits} />}
+      >
         {fits.length > 0 ? (
           <FitTable caption={`Fits of ${sample.name}`} fits={fits} withSample={false} />
         ) : (
@@ -64,7 +70,7 @@ export default async function SamplePage({ params }: Props) {
           </p>
         )}
       </Section>
-      <Section title="Issued profiles">
+      <Section title="Issued profiles" badge={allInvented(ofSample) && <InventedMark />}>
         {ofSample.length > 0 ? (
           <IssuedTable
             caption={`Issued profiles of ${sample.name}`}
