@@ -160,9 +160,9 @@ class Case:
         if not free:
             p = {**self.held, **fixed}
             return float((self.residuals(list(fixed), list(fixed.values())) ** 2).sum()), p
-        best = None
         # The width is replaced by zero exactly where the search ends there: its derivative vanishes at the bound.
         zero_options = [False, True] if "edgeWidthNm" in free else [False]
+        found = {}
         for zero in zero_options:
             names = [n for n in free if not (zero and n == "edgeWidthNm")]
             constant = dict(fixed, **({"edgeWidthNm": 0.0} if zero else {}))
@@ -173,8 +173,11 @@ class Case:
                 x0 = np.clip([start[n] for n in names], lo + 1e-9, np.where(np.isfinite(hi), hi - 1e-9, np.inf))
                 r = least_squares(f, x0, bounds=(lo, hi), xtol=1e-15, ftol=1e-15, gtol=1e-15, x_scale=[self.scale(n) for n in names], max_nfev=400)
                 chi = float((r.fun**2).sum())
-                if best is None or chi < best[0]:
-                    best = (chi, {**self.held, **constant, **dict(zip(names, map(float, r.x)))})
+                if zero not in found or chi < found[zero][0]:
+                    found[zero] = (chi, {**self.held, **constant, **dict(zip(names, map(float, r.x)))})
+        best = found[False]
+        if True in found and found[True][0] <= best[0] + 1e-7:
+            best = found[True]
         if self.profile == "sharp" and "edgeDepthNm" in free:
             best = self.sharpen(best, fixed)
         return best
@@ -237,7 +240,9 @@ class Case:
         last = [dict(best)]
 
         def rise(x):
-            c, p = self.minimise({n: float(x)}, [last[0], {**best, n: x}])
+            # A width that rests at zero has no derivative: begin beside it too.
+            starts = [last[0], {**best, n: x}] + [{**last[0], "edgeWidthNm": w} for w in (4.0, 15.0) if self.profile == "graded" and n != "edgeWidthNm"]
+            c, p = self.minimise({n: float(x)}, starts)
             last[0] = p
             return c - chi - target
 

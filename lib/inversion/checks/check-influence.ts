@@ -1,7 +1,7 @@
 import { meanLevel } from '../fit/evaluate';
 import { minimise } from '../fit/minimise';
 import type { Problem } from '../fit/model';
-import { openWidth } from '../fit/search-minimum';
+import { openWidths } from '../fit/widths';
 import { thetaOf, valuesOf } from '../fit/theta-of';
 import { figure, parameterOf, type CheckContext, type FitCheck } from './check-context';
 
@@ -49,7 +49,7 @@ function mostInfluential(
     inverseSigma[row] = 0;
     without.fallback = meanLevel(without.data);
     theta.set(best);
-    openWidth(model, theta);
+    openWidths(model, theta, model.held);
     minimise(without, theta, model.held, scratch, OPTIONS);
     inverseSigma[row] = kept;
     if (Math.abs(theta[0]! - edgeNm) > Math.abs(worst.edgeNm - edgeNm)) {

@@ -1,6 +1,7 @@
 import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
+import { openWidths } from './widths';
 import { refine, type RefineResult, type RefineScratch } from './refine';
 
 /** Index of the edge whose borders χ² has kinks at. */
@@ -19,7 +20,9 @@ export function minimise(
   options: { maxIterations: number; tolerance: number },
 ): RefineResult {
   const result = refine(problem, theta, held, scratch.refine, options);
-  if (!problem.model.trial.kinked || held[EDGE]) return result;
+  if (!problem.model.trial.kinked)
+    return leaveZeroWidth(problem, theta, held, scratch, options, result);
+  if (held[EDGE]) return result;
   const { model } = problem;
   const { inner, innerHeld } = scratch;
   innerHeld.set(held);
@@ -46,6 +49,27 @@ export function minimise(
   }
   evaluate(problem, theta, held);
   return { ...result, converged: true, predictedReduction: Math.min(result.predictedReduction, 0) };
+}
+
+/** A width that came to rest at zero is tried once more from beside it. */
+function leaveZeroWidth(
+  problem: Problem,
+  theta: Float64Array,
+  held: Uint8Array,
+  { refine: scratch, inner }: MinimiseScratch,
+  options: { maxIterations: number; tolerance: number },
+  result: RefineResult,
+): RefineResult {
+  if (!problem.model.trial.widths.some((k) => !held[k] && theta[k] === 0)) return result;
+  inner.set(theta);
+  openWidths(problem.model, inner, held);
+  const opened = refine(problem, inner, held, scratch, options);
+  if (opened.chiSquare < result.chiSquare) {
+    theta.set(inner);
+    return { ...opened, iterations: opened.iterations + result.iterations };
+  }
+  evaluate(problem, theta, held);
+  return result;
 }
 
 export interface MinimiseScratch {

@@ -1,8 +1,9 @@
 import type { FitStatus } from '../types';
 import { minimise, type MinimiseScratch } from './minimise';
-import type { Model, Problem } from './model';
+import type { Problem } from './model';
 import { polish } from './polish';
 import { localMinima, scanGrid, thetaOfNode } from './search';
+import { openWidths } from './widths';
 
 /** Valleys of the coarse search that are followed to their bottom. */
 const STARTS = 3;
@@ -38,7 +39,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   const trial = new Float64Array(size);
   for (const node of nodes) {
     thetaOfNode(model, node, neutral, trial);
-    openWidth(model, trial);
+    openWidths(model, trial, model.held);
     const result = model.trial.kinked
       ? minimise(problem, trial, held, scratch, FINAL)
       : polish(problem, trial, scratch.refine, POLISH_TOLERANCE);
@@ -75,7 +76,7 @@ function finish(
   highestChiSquare: number,
 ): GlobalMinimum {
   const result = minimise(problem, theta, problem.model.held, scratch, FINAL);
-  const chiSquare = closeWidth(problem, theta, result.chiSquare, scratch);
+  const chiSquare = closeWidths(problem, theta, result.chiSquare, scratch);
   return {
     theta,
     chiSquare,
@@ -92,32 +93,30 @@ function finish(
   };
 }
 
-const WIDTH = 1;
-
-/** At width zero the derivative by the width vanishes: a polish that begins there never leaves it. Begin beside it. */
-export function openWidth(model: Model, theta: Float64Array): void {
-  if (model.shapeCount < 2 || model.held[WIDTH] || theta[WIDTH]! > 0) return;
-  theta[WIDTH] = 0.006 * model.upper[WIDTH]!;
-}
+/** Widths above this share of their range are not taken for zero. */
+const NEARLY_SHARP = 0.05;
 
 /** Where a step fits as well as the width found, the width is zero: the lower bound, said as such. Returns Φ. */
-function closeWidth(
+function closeWidths(
   problem: Problem,
   theta: Float64Array,
   chiSquare: number,
   scratch: MinimiseScratch,
 ): number {
   const { model } = problem;
-  if (model.shapeCount < 2 || model.held[WIDTH] || theta[WIDTH] === 0) return chiSquare;
-  if (theta[WIDTH]! > 0.05 * model.upper[WIDTH]!) return chiSquare;
-  const step = Float64Array.from(theta);
-  step[WIDTH] = 0;
-  const held = Uint8Array.from(model.held);
-  held[WIDTH] = 1;
-  const { chiSquare: stepChiSquare } = minimise(problem, step, held, scratch, FINAL);
-  if (stepChiSquare > chiSquare) return chiSquare;
-  theta.set(step);
-  return stepChiSquare;
+  let lowest = chiSquare;
+  for (const k of model.trial.widths) {
+    if (model.held[k] || theta[k] === 0 || theta[k]! > NEARLY_SHARP * model.upper[k]!) continue;
+    const step = Float64Array.from(theta);
+    step[k] = 0;
+    const held = Uint8Array.from(model.held);
+    held[k] = 1;
+    const { chiSquare: stepChiSquare } = minimise(problem, step, held, scratch, FINAL);
+    if (stepChiSquare > lowest) continue;
+    theta.set(step);
+    lowest = stepChiSquare;
+  }
+  return lowest;
 }
 
 function highestOverDepths(

@@ -19,6 +19,7 @@ function phi(distanceNm: number, widthNm: number): number {
 export const gradedEdge: TrialProfile = {
   kind: 'graded',
   shapeNames: ['edgeDepthNm', 'edgeWidthNm'],
+  widths: [1],
   kinked: false,
   share: (depthNm, shape) => phi(depthNm - shape[0]!, shape[1]!),
   fold(kernel, shape, capNm, scale, out) {

@@ -5,6 +5,7 @@ import type { TrialProfile } from './trial-profile';
 export const sharpEdge: TrialProfile = {
   kind: 'sharp',
   shapeNames: ['edgeDepthNm'],
+  widths: [],
   kinked: true,
   share: (depthNm, shape) => (depthNm < shape[0]! ? 0 : 1),
   fold(kernel, shape, capNm, scale, out) {

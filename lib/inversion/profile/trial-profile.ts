@@ -18,6 +18,8 @@ export interface ShareFold {
 export interface TrialProfile {
   kind: ProfileKind;
   shapeNames: readonly ParameterName[];
+  /** Which shape parameters are widths: zero makes a step. */
+  widths: readonly number[];
   /** χ² has kinks in the edge at the bin borders, so the last digits are found by bracketing instead of derivatives. */
   kinked: boolean;
   /** s(x) at a depth below the cap. shape holds the values in the order of shapeNames. */

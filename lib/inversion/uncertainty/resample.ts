@@ -4,7 +4,7 @@ import { minimise } from '../fit/minimise';
 import type { Problem } from '../fit/model';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { inValleyOf, localMinima, scanGrid, thetaOfNode } from '../fit/search';
-import { openWidth } from '../fit/search-minimum';
+import { openWidths } from '../fit/widths';
 import { thetaOf, valuesOf } from '../fit/theta-of';
 import { normalStream } from '../statistics/random';
 import type { FitAnswer } from '../types';
@@ -65,14 +65,14 @@ export function resample(
   for (let r = 0; r < count; r++) {
     draw(drawn, problem, predicted, best, normalStream(seed, first + r));
     theta.set(best);
-    openWidth(model, theta);
+    openWidths(model, theta, model.held);
     let chiSquare = minimise(drawn, theta, model.held, scratch, options).chiSquare;
     scanGrid(drawn, model.neutral, model.held, chiSquares);
     for (const node of localMinima(model.grid.lattice, chiSquares).slice(0, 2)) {
       if (chiSquares[node]! > chiSquare + LOOK_AGAIN) break;
       if (chiSquares[node]! >= chiSquare && inValleyOf(model, node, theta)) continue;
       thetaOfNode(model, node, model.neutral, other);
-      openWidth(model, other);
+      openWidths(model, other, model.held);
       const next = minimise(drawn, other, model.held, scratch, options).chiSquare;
       if (next < chiSquare) {
         chiSquare = next;
