@@ -81,7 +81,7 @@ export function DepthFigure(props: DepthFigureProps) {
           top={layout.ridges.top}
           bottom={layout.axisY}
           stripTop={layout.strip.top}
-          carriersTop={layout.carriers.top}
+          labelY={layout.carriers.top + layout.carriers.height - 12}
           interval={props.edgeInterval?.map((end) => (end === null ? null : x(end))) ?? []}
         />
       )}
@@ -95,7 +95,7 @@ function Edge({
   top,
   bottom,
   stripTop,
-  carriersTop,
+  labelY,
   interval,
   edgeLabel,
 }: {
@@ -104,12 +104,12 @@ function Edge({
   top: number;
   bottom: number;
   stripTop: number;
-  carriersTop: number;
+  labelY: number;
   interval: readonly (number | null)[];
   edgeLabel?: string;
 }) {
   const [low, high] = interval;
-  const flip = at > (left + right) / 2;
+  const flip = at > left + (right - left) * 0.7;
   return (
     <g>
       <line x1={at} x2={at} y1={top} y2={bottom} stroke="var(--ink)" strokeWidth={1.25} />
@@ -125,8 +125,8 @@ function Edge({
       )}
       {edgeLabel !== undefined && (
         <text
-          x={at + (flip ? -8 : 8)}
-          y={carriersTop + 16}
+          x={at + (flip ? -12 : 12)}
+          y={labelY}
           textAnchor={flip ? 'end' : 'start'}
           fill="var(--ink)"
           stroke="var(--paper)"

@@ -3,11 +3,11 @@ const MOST_DECADES = 6;
 /**
  * [low, high] for a logarithmic axis: whole decades round the positive values, at most six of them.
  * Zeros and negative values are left out, so the axis never gets one; they are drawn below `low`.
- * `keep` (such as the floor) is kept inside with a decade to spare.
+ * With a `floor`, under which the scan cannot tell values apart, the axis ends a decade below it.
  */
 export function logDomain(
   values: Iterable<number | null>,
-  keep: number | null = null,
+  floor: number | null = null,
 ): [number, number] {
   let least = Infinity;
   let most = 0;
@@ -18,8 +18,9 @@ export function logDomain(
   }
   if (most === 0) return [1, 10];
   const high = Math.ceil(Math.log10(most * 1.2));
-  const wanted = keep !== null && keep > 0 ? Math.floor(Math.log10(keep)) - 1 : Infinity;
-  const low = Math.max(high - MOST_DECADES, Math.min(Math.floor(Math.log10(least)), wanted));
+  const least10 = Math.floor(Math.log10(least));
+  const wanted = floor !== null && floor > 0 ? Math.floor(Math.log10(floor)) - 1 : least10;
+  const low = Math.max(high - MOST_DECADES, wanted);
   return [10 ** Math.min(low, high - 2), 10 ** high];
 }
 

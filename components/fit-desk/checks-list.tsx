@@ -2,6 +2,8 @@ import { Mark } from '@/components/ui/mark';
 import type { Check } from '@/lib/inversion/index';
 
 const WORDS = { problem: 'Problem', caution: 'Caution', fine: 'Fine' } as const;
+/** How many sentences stand open; all that need attention always do. */
+const MOST_AT_ONCE = 3;
 const RANK = { problem: 0, caution: 1, fine: 2 } as const;
 
 /** Checks in words; what needs attention first, what is fine folded away behind its number. */
@@ -16,20 +18,22 @@ export function ChecksList({
     .filter((check) => check.state !== 'fine')
     .sort((a, b) => RANK[a.state] - RANK[b.state]);
   const fine = checks.filter((check) => check.state === 'fine');
+  const shown = Math.max(0, MOST_AT_ONCE - attention.length);
   return (
     <section aria-labelledby="checks-heading">
       <h2 id="checks-heading" className="mb-2 text-sm text-ink-2">
         Checks{outOfDate && <span className="font-normal text-ink-3"> (of the last fit)</span>}
       </h2>
       {checks.length === 0 && <p className="text-sm text-ink-3">They come with the fit.</p>}
-      <Sentences checks={attention} />
-      {fine.length > 0 && (
-        <details className="mt-2" open={attention.length < 3}>
+      <Sentences checks={[...attention, ...fine.slice(0, shown)]} />
+      {fine.length > shown && (
+        <details className="mt-2.5">
           <summary className="text-sm text-ink-2">
-            {fine.length === 1 ? '1 check is fine' : `${fine.length} checks are fine`}
+            {fine.length - shown}{' '}
+            {shown > 0 || attention.length > 0 ? 'more are fine' : 'checks are fine'}
           </summary>
-          <div className="mt-2">
-            <Sentences checks={fine} />
+          <div className="mt-2.5">
+            <Sentences checks={fine.slice(shown)} />
           </div>
         </details>
       )}

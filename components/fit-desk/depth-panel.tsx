@@ -18,7 +18,7 @@ import { profileAt, voicesAt } from './linked-depth';
 /** Drawn anew only when something in it changed: not while the edge is dragged. */
 const StillDepthFigure = memo(DepthFigure);
 
-const HEIGHT = 540;
+const HEIGHT = 580;
 const NOTHING: readonly ProfileSeries[] = [];
 
 interface DepthPanelProps {

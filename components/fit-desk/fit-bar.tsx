@@ -9,6 +9,8 @@ interface FitBarProps {
   outOfDate: boolean;
   /** Why a fit cannot start. */
   obstacle: string | null;
+  /** Everything that a fit needs is there. */
+  ready: boolean;
   /** The inputs are still on their way. */
   loading: boolean;
   comparing: boolean;
@@ -17,7 +19,7 @@ interface FitBarProps {
 
 /** Fit and Compare all, with what is under way below them. The button that fits is the form's own, so Enter fits, too. */
 export function FitBar({ fit, outOfDate, obstacle, loading, comparing, onCompare }: FitBarProps) {
-  const blocked = obstacle !== null || loading;
+  const blocked = !ready;
   const problem = obstacle ?? fit.refusal?.message ?? null;
   return (
     <section aria-label="Fit" className="grid gap-2">

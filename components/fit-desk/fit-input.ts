@@ -72,3 +72,12 @@ export function uncoveredEnergies(
     )
     .map(({ energyKeV }) => energyKeV);
 }
+
+/** Energies that even the best of several sets leaves uncovered; none without sets, which is said elsewhere. */
+export function leastUncovered(
+  points: readonly Pick<ScanPoint, 'energyKeV' | 'enabled'>[],
+  sets: readonly { energiesKeV: readonly number[] }[],
+): number[] {
+  const missing = sets.map(({ energiesKeV }) => uncoveredEnergies(points, energiesKeV));
+  return missing.sort((a, b) => a.length - b.length)[0] ?? [];
+}

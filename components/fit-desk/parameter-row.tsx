@@ -43,6 +43,8 @@ export function ParameterRow({
   const [open, setOpen] = useState(false);
   const panelId = useId();
   const label = parameterLabel(name, { observable, spec: { polarity } });
+  // The column is narrow: the side in brackets is said on hover and to a screen reader.
+  const short = label.replace(/ \(.* side\)$/, '');
   const unit = parameterUnit(name, observable);
   const from =
     setting.prior && !setting.held
@@ -56,15 +58,17 @@ export function ParameterRow({
           {edit ? (
             <button
               type="button"
+              title={label}
               aria-expanded={open}
               aria-controls={panelId}
               onClick={() => setOpen(!open)}
               className="text-left underline decoration-edge decoration-dotted underline-offset-4 hover:decoration-coral"
             >
-              {label}
+              {short}
+              <span className="sr-only">{label.slice(short.length)}</span>
             </button>
           ) : (
-            label
+            short
           )}
         </span>
         <ValueText {...{ setting, fitted, drawn, unit, outOfDate }} />

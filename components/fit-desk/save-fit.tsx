@@ -16,7 +16,7 @@ import type { SaveFitInput } from '@/lib/schemas/fit';
 import { fetchJson, ServerRefusal } from './fetch-json';
 
 /** Everything to save but its name. */
-type FitToSave = Pick<SaveFitInput, 'scanId' | 'stoppingSetId' | 'parentFitId' | 'spec'> & {
+export type FitToSave = Pick<SaveFitInput, 'scanId' | 'stoppingSetId' | 'parentFitId' | 'spec'> & {
   claimed: { answer: FitAnswer; profile: CarrierProfile };
 };
 

@@ -15,7 +15,7 @@ export function SettingGroup({
   return (
     <details open={open} className="group border-t border-rule first:border-t-0">
       <summary className="flex list-none items-baseline justify-between gap-3 py-1.5 text-sm [&::-webkit-details-marker]:hidden">
-        <span className="underline decoration-edge decoration-dotted underline-offset-4 group-open:font-semibold">
+        <span className="shrink-0 underline decoration-edge decoration-dotted underline-offset-4 group-open:font-semibold">
           {title}
         </span>
         <span className="min-w-0 text-right text-[0.8125rem] text-ink-2 group-open:hidden">

@@ -33,3 +33,5 @@ export function useHover(
     onReadDepth,
   };
 }
+
+export type Hover = ReturnType<typeof useHover>;
