@@ -11,7 +11,7 @@ const envSchema = z.object({
   STRANDLINE_ORIGIN: z.preprocess(blankIsMissing, z.url().optional()),
   STRANDLINE_LOG_LEVEL: z.preprocess(
     blankIsMissing,
-    z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
+    z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).optional(),
   ),
 });
 
