@@ -35,6 +35,7 @@ export function CompareEvidence({
   return (
     <DataTable
       caption="Evidence"
+      captionHidden
       rows={rows}
       rowKey={(row) => row.mark.letter}
       columns={[

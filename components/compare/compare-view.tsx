@@ -83,7 +83,8 @@ export function CompareView({ fits, curves, others, carrier }: CompareViewProps)
           }))}
         />
       </div>
-      <section className="mt-10 grid gap-4" aria-label="Evidence">
+      <section className="mt-10 grid gap-2" aria-labelledby="evidence">
+        <h2 id="evidence">Evidence</h2>
         <CompareEvidence rows={rows} weighed={judged.comparable} />
         <WidthTests tests={tests} />
       </section>

@@ -38,7 +38,10 @@ export function dataSentences(
       'Their profiles may still be looked at together; χ², AICc and weights of different points mean nothing side by side.',
     ];
   }
-  const main = tests.length > 0 ? tests.map(widthSentence) : [choiceSentence(fits, evidence)];
+  const main =
+    tests.length > 0
+      ? tests.map((test) => widthSentence(test, tests.length > 1))
+      : [choiceSentence(fits, evidence)];
   const alsoChoice = tests.length > 0 && fits.length > 2 ? [choiceSentence(fits, evidence)] : [];
   const priors = priorsDiffer(fits)
     ? [
@@ -48,16 +51,19 @@ export function dataSentences(
   return [...poor, ...main, ...alsoChoice, ...priors];
 }
 
-export function widthSentence({ statistic, pValue, sigmas, graded, sharp }: WidthTest): string {
-  const figures = `χ² falls by ${withDecimals(statistic, 1)}, p ${isProbability(pValue)}`;
+/** One nested pair in a sentence; `named` where several pairs have to be told apart. */
+function widthSentence({ statistic, pValue, sigmas, graded, sharp }: WidthTest, named: boolean) {
+  const who = named ? `“${graded.name}” against “${sharp.name}”: ` : '';
+  const fall = withDecimals(statistic, 1);
+  const chance = `p ${isProbability(pValue)}`;
   if (pValue > 0.05) {
-    return `The data do not tell a graded edge from a sharp one: “${graded.name}” fits no better than “${sharp.name}” by more than chance allows (${figures}).`;
+    return `${who}The data do not tell a graded edge from a sharp one: a width lowers χ² by only ${fall}, no more than chance would (${chance}).`;
   }
   const strength =
     sigmas >= 3
       ? 'The data reject a sharp edge'
       : 'The data favour a graded edge, without settling it';
-  return `${strength}: zero width is rejected at ${withDecimals(sigmas, 1)}σ (${figures}).`;
+  return `${who}${strength}: a width lowers χ² by ${fall}, so zero width is rejected at ${withDecimals(sigmas, 1)}σ (${chance}).`;
 }
 
 function choiceSentence(fits: readonly Fit[], evidence: readonly EvidenceRow[]): string {

@@ -8,6 +8,7 @@ import { ParameterTable } from '@/components/review/parameter-table';
 import type { SavedFitFigures } from '@/components/review/saved-fit-figures';
 import { SettingList } from '@/components/review/setting-list';
 import { Thread } from '@/components/review/thread';
+import { ButtonLink } from '@/components/ui/button-link';
 import { InventedMark } from '@/components/ui/invented-mark';
 import { Moment } from '@/components/ui/moment';
 import { PageHeader } from '@/components/ui/page-header';
@@ -62,24 +63,40 @@ export function ProfileView(props: ProfileViewProps) {
             issued <Moment at={profile.issuedAt} dateOnly />
           </span>,
         ]}
+        actions={
+          <>
+            <ButtonLink href="#cite">Cite</ButtonLink>
+            <ButtonLink variant="primary" href="#export">
+              Export
+            </ButtonLink>
+          </>
+        }
       />
       <div className="grid gap-x-10 gap-y-6 pt-6 lg:grid-cols-2 print:grid-cols-2">
         <EdgeAnswer edge={profile.edge} width={profile.width} polarity={fit.spec.polarity} />
         <ProfileCautions profile={fit.carrierProfile} />
       </div>
       <div className="grid gap-x-10 gap-y-2 pt-2 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
-        <div className="min-w-0 pt-6">
-          <ProfileFigure fit={drawn} carrier={carrier} fileName={fileName} />
-          <details className="no-print mt-3 text-sm">
-            <summary className="w-fit text-ink-2">Data, {points.length} depths</summary>
-            <FigureDataTable caption="Carrier profile" table={carrierTable(fit.carrierProfile)} />
-          </details>
+        <div className="min-w-0">
+          <div className="pt-6">
+            <ProfileFigure fit={drawn} carrier={carrier} fileName={fileName} />
+            <details className="no-print mt-3 text-sm">
+              <summary className="w-fit text-ink-2">Data, {points.length} depths</summary>
+              <FigureDataTable caption="Carrier profile" table={carrierTable(fit.carrierProfile)} />
+            </details>
+          </div>
+          <Section title="Parameters">
+            <ParameterTable fit={fit} />
+          </Section>
+          <div className="pt-7">
+            <SavedScanFigure fit={drawn} figures={figures} fileName={fileName} />
+          </div>
         </div>
         <div className="min-w-0">
-          <Section title="Cite it as">
+          <Section title="Cite it as" id="cite">
             <Citation text={profile.citation} />
           </Section>
-          <Section title="Export" className="no-print">
+          <Section title="Export" id="export" className="no-print">
             <ExportPanel
               profileId={profile.id}
               number={profile.number}
@@ -88,23 +105,11 @@ export function ProfileView(props: ProfileViewProps) {
               maxRows={maxRows}
             />
           </Section>
-        </div>
-      </div>
-      <div className="grid gap-x-10 gap-y-2 lg:grid-cols-2">
-        <div className="min-w-0">
-          <Section title="Parameters">
-            <ParameterTable fit={fit} />
+          <Section title="Checks">
+            <CheckList checks={fit.checks} />
           </Section>
           <Section title="What is assumed">
             <SettingList fit={fit} />
-          </Section>
-          <div className="pt-7">
-            <SavedScanFigure fit={drawn} figures={figures} fileName={fileName} />
-          </div>
-        </div>
-        <div className="min-w-0">
-          <Section title="Checks">
-            <CheckList checks={fit.checks} />
           </Section>
           <Section title="Provenance">
             <Provenance profile={profile} scanFile={scanFile} stoppingFiles={stoppingFiles} />

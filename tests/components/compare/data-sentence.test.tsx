@@ -14,8 +14,14 @@ describe('what the data say', () => {
   it('says plainly that a graded edge is not told from a sharp one', () => {
     const test = { sharp, graded, statistic: 0.8, pValue: 0.19, sigmas: 0.9 };
     expect(dataSentences([sharp, graded], yes, evidence(0, 1.9), [test])).toEqual([
-      'The data do not tell a graded edge from a sharp one: “Graded” fits no better than “Sharp” by more than chance allows (χ² falls by 0.8, p = 0.19).',
+      'The data do not tell a graded edge from a sharp one: a width lowers χ² by only 0.8, no more than chance would (p = 0.19).',
     ]);
+  });
+
+  it('names the pairs where there are several', () => {
+    const test = { sharp, graded, statistic: 0.8, pValue: 0.19, sigmas: 0.9 };
+    const said = dataSentences([sharp, graded, makeFit()], yes, evidence(0, 1.9, 3), [test, test]);
+    expect(said[0]).toMatch(/^“Graded” against “Sharp”: The data do not tell/);
   });
 
   it('tells favour from rejection at three sigma', () => {
@@ -24,10 +30,10 @@ describe('what the data say', () => {
         { sharp, graded, statistic, pValue, sigmas },
       ])[0];
     expect(test(6.7, 0.0048, 2.6)).toBe(
-      'The data favour a graded edge, without settling it: zero width is rejected at 2.6σ (χ² falls by 6.7, p = 0.0048).',
+      'The data favour a graded edge, without settling it: a width lowers χ² by 6.7, so zero width is rejected at 2.6σ (p = 0.0048).',
     );
     expect(test(14, 9.1e-5, 3.7)).toBe(
-      'The data reject a sharp edge: zero width is rejected at 3.7σ (χ² falls by 14.0, p below 0.0001).',
+      'The data reject a sharp edge: a width lowers χ² by 14.0, so zero width is rejected at 3.7σ (p below 0.0001).',
     );
   });
 
