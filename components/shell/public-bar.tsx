@@ -5,7 +5,7 @@ import { Wordmark } from './wordmark';
 /** The bar for people who are not signed in. */
 export function PublicBar() {
   return (
-    <div className="no-print border-b border-rule">
+    <header className="no-print border-b border-rule">
       <div className="page flex min-h-13 items-center gap-5">
         <Wordmark />
         <nav aria-label="Sections" className="ml-auto flex gap-5 text-sm text-ink-2">
@@ -17,6 +17,6 @@ export function PublicBar() {
           </Link>
         </nav>
       </div>
-    </div>
+    </header>
   );
 }

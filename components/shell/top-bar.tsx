@@ -17,7 +17,7 @@ type TopBarProps = {
 
 export function TopBar({ viewer, theme, waiting, signOut, switchTeam }: TopBarProps) {
   return (
-    <div className="no-print border-b border-rule">
+    <header className="no-print border-b border-rule">
       <div className="page flex min-h-13 flex-wrap items-center gap-x-5 gap-y-1 py-1 lg:gap-x-7 lg:py-0">
         <Wordmark />
         <MainNav waiting={waiting} />
@@ -27,6 +27,6 @@ export function TopBar({ viewer, theme, waiting, signOut, switchTeam }: TopBarPr
           <PersonMenu viewer={viewer} theme={theme} signOut={signOut} switchTeam={switchTeam} />
         </div>
       </div>
-    </div>
+    </header>
   );
 }
