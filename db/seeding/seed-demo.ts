@@ -1,4 +1,3 @@
-import type { Context } from '@/db/access/context';
 import { createSample } from '@/db/access/sample/create-sample';
 import { createScan } from '@/db/access/scan/create-scan';
 import { createStoppingSet } from '@/db/access/stopping-set/create-stopping-set';
@@ -9,19 +8,11 @@ import { scans } from '@/db/schema/scans';
 import { sessions } from '@/db/schema/sessions';
 import { stoppingSets } from '@/db/schema/stopping-sets';
 import { teams } from '@/db/schema/teams';
-import type { WriteQueue } from '@/db/write-queue';
 import { eq, inArray } from 'drizzle-orm';
 
 import { seedFit } from './seed-fit';
 import { seedPeople } from './seed-people';
-
-export interface Store {
-  db: Database;
-  queue: WriteQueue;
-}
-/** A request by a person of the demo, some time after the one before it. */
-export type As = (personKey: string) => Context;
-export type Ids = Record<string, string>;
+import type { Ids, Store } from './store';
 
 const encoder = new TextEncoder();
 

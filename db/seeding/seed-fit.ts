@@ -9,7 +9,7 @@ import { readScan } from '@/db/access/scan/read-scan';
 import { loadStoppingSet } from '@/db/access/stopping-set/load-stopping-set';
 import type { DemoFit, DemoReviewEvent } from '@/db/demo/types';
 
-import type { As, Ids } from './seed-demo';
+import type { As, Ids } from './store';
 
 /** Computes a fit as a browser would, saves it, and takes it through its history. */
 export async function seedFit(as: As, fit: DemoFit, ids: Ids): Promise<string> {

@@ -7,7 +7,7 @@ import type { DemoData, DemoPerson } from '@/db/demo/types';
 import type { Viewer } from '@/lib/schemas/person';
 
 import { DEMO_PASSWORD } from './demo-password';
-import type { As, Store } from './seed-demo';
+import type { As, Store } from './store';
 
 /** Work in the demo goes on over some three weeks that end now. */
 const SPAN_MS = 21 * 24 * 60 * 60 * 1000;
