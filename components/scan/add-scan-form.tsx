@@ -9,10 +9,11 @@ import { Field } from '@/components/ui/field';
 import { Select } from '@/components/ui/select';
 import { Tabs } from '@/components/ui/tabs';
 import { DropZone } from '@/components/upload/drop-zone';
-import { fieldFaults, withoutPrefix } from '@/components/upload/field-faults';
 import { SaveBar } from '@/components/upload/save-bar';
 import { sendJson, sendUpload, type Sent } from '@/components/upload/send-details';
+import { useFocusFirstFault } from '@/components/upload/use-focus-first-fault';
 import { useLeaveWarning } from '@/components/upload/use-leave-warning';
+import { useSaving } from '@/components/upload/use-saving';
 import { scanMetaSchema } from '@/lib/schemas/scan';
 
 import { PastePanel } from './paste-panel';
@@ -37,13 +38,15 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
   const [way, setWay] = useState('file');
   const [draft, setDraft] = useState(NEW_SCAN);
   const [pasted, setPasted] = useState('');
-  const [faults, setFaults] = useState<Record<string, string>>({});
-  const [refusal, setRefusal] = useState<string | null>(null);
-  const [saving, setSaving] = useState(false);
+  const { faults, refusal, saving, save } = useSaving(scanMetaSchema);
+  const about = useFocusFirstFault<HTMLElement>(faults);
   const file = useScanFile(draft.observable, 'Choose a file first.');
   const paste = useScanFile(draft.observable, 'Paste a table first.');
   const sheet = useSheet(() => sheetContent([], 4, BLANK_ROWS), 4);
-  const typed = useMemo(() => readTypedPoints(sheet.content.rows, draft.observable), [sheet.content, draft.observable]);
+  const typed = useMemo(
+    () => readTypedPoints(sheet.content.rows, draft.observable),
+    [sheet.content, draft.observable],
+  );
 
   const source = way === 'paste' ? paste : file;
   const pasteChanged = paste.file !== null && new TextDecoder().decode(paste.file.bytes) !== pasted;
@@ -55,32 +58,24 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
   }
   useLeaveWarning(!saving && (file.file !== null || pasted !== '' || sheet.canUndo));
 
-  const send = (): Promise<Sent> | null => {
-    if (way === 'typed') {
-      return sendJson('/api/scans', 'POST', { sampleId, meta: draft, source: { kind: 'typed', points: typed.points } });
-    }
-    if (source.file === null || source.sent === null) return null;
-    return sendUpload('/api/scans', { sampleId, meta: draft, reading: source.sent }, [source.file]);
+  const send = (): Promise<Sent> => {
+    const about = { sampleId, meta: draft };
+    if (way === 'typed')
+      return sendJson('/api/scans', 'POST', {
+        ...about,
+        source: { kind: 'typed', points: typed.points },
+      });
+    const files = source.file === null ? [] : [source.file];
+    return sendUpload('/api/scans', { ...about, reading: source.sent }, files);
   };
-  const save = async () => {
-    const own = fieldFaults(scanMetaSchema, draft);
-    setFaults(own);
-    const [firstFault] = Object.values(own);
-    if (firstFault !== undefined) return setRefusal(firstFault);
-    setRefusal(null);
-    setSaving(true);
-    const sent = await send();
-    if (sent?.ok) return router.push(`/scans/${sent.id}`);
-    setSaving(false);
-    if (sent === null) return;
-    setFaults(withoutPrefix(sent.fields, 'meta.'));
-    setRefusal(sent.message);
-  };
+  const onSave = () => void save(draft, send, (id) => router.push(`/scans/${id}`));
 
   return (
     <div className="grid gap-x-10 gap-y-8 py-6 lg:grid-cols-[minmax(0,1fr)_22rem]">
       <section aria-labelledby="points-heading" className="min-w-0">
-        <h2 id="points-heading" className="mb-2">Points</h2>
+        <h2 id="points-heading" className="mb-2">
+          Points
+        </h2>
         <Tabs
           label="Where the points come from"
           value={way}
@@ -93,7 +88,11 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
                 <div className="grid gap-6">
                   <DropZone
                     multiple={false}
-                    label={file.file === null ? 'Drop a scan file here, or choose one' : 'Another file instead'}
+                    label={
+                      file.file === null
+                        ? 'Drop a scan file here, or choose one'
+                        : 'Another file instead'
+                    }
                     hint="Text with columns of energy, value and σ; comma, semicolon, tab or blanks between them. At most 5 MB."
                     onFiles={([taken]) => taken && file.take(taken)}
                   />
@@ -104,7 +103,15 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
             {
               value: 'paste',
               label: 'Paste text',
-              panel: <PastePanel text={pasted} onText={setPasted} changed={pasteChanged} model={paste} observable={draft.observable} />,
+              panel: (
+                <PastePanel
+                  text={pasted}
+                  onText={setPasted}
+                  changed={pasteChanged}
+                  model={paste}
+                  observable={draft.observable}
+                />
+              ),
             },
             {
               value: 'typed',
@@ -114,7 +121,7 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
           ]}
         />
       </section>
-      <section aria-labelledby="about-heading" className="grid content-start gap-5">
+      <section ref={about} aria-labelledby="about-heading" className="grid content-start gap-5">
         <h2 id="about-heading">About the scan</h2>
         <Field label="Sample" error={faults.sampleId} required>
           <Select value={sampleId} onChange={(event) => setSampleId(event.target.value)}>
@@ -127,7 +134,13 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
           </Select>
         </Field>
         <ScanMetaFields draft={draft} faults={faults} onChange={setDraft} />
-        <SaveBar label="Save scan" blocked={blocked} saving={saving} refusal={refusal} onSave={() => void save()} />
+        <SaveBar
+          label="Save scan"
+          blocked={blocked}
+          saving={saving}
+          refusal={refusal}
+          onSave={onSave}
+        />
       </section>
     </div>
   );

@@ -37,8 +37,9 @@ export function AmplitudeChoices({ amplitudes, onChange }: AmplitudeChoicesProps
               onChange={(event) => onChange({ ...amplitudes, sigma: event.target.value })}
             />
           </Field>
-          <p className="text-ink-2 col-span-2 text-[0.8125rem]">
-            σ of the maximum asymmetry scales all points together; it is kept apart from the σ of each point.
+          <p className="col-span-2 text-[0.8125rem] text-ink-2">
+            σ of the maximum asymmetry scales all points together; it is kept apart from the σ of
+            each point.
           </p>
         </div>
       )}

@@ -33,7 +33,9 @@ export function ColumnChoices(props: ColumnChoicesProps) {
         <Field key={role} label={label} optional={!needed}>
           <Select
             value={match[role] ?? ''}
-            onChange={(event) => onColumn(role, event.target.value === '' ? null : Number(event.target.value))}
+            onChange={(event) =>
+              onColumn(role, event.target.value === '' ? null : Number(event.target.value))
+            }
           >
             <option value="">{needed ? 'choose…' : 'none'}</option>
             {Array.from({ length: table.columnCount }, (_, column) => (

@@ -39,7 +39,13 @@ export function PastePanel({ text, onText, changed, model, observable }: PastePa
             onChange={(event) => onText(event.target.value)}
             onPaste={(event) => {
               // A paste into an empty box is read at once; later changes are read when asked.
-              if (text === '') model.take(fileFromText(NAME, event.clipboardData.getData('text/plain').replace(/\r\n?/g, '\n')));
+              if (text === '')
+                model.take(
+                  fileFromText(
+                    NAME,
+                    event.clipboardData.getData('text/plain').replace(/\r\n?/g, '\n'),
+                  ),
+                );
             }}
           />
         </Field>

@@ -20,7 +20,7 @@ export function PointsPreview({ points, observable }: PointsPreviewProps) {
     <div className="grid gap-4">
       <ScanFigure points={points} observable={observable} title="Preview" />
       <details className="text-sm">
-        <summary className="text-ink-2 py-1">
+        <summary className="py-1 text-ink-2">
           The {points.length} {points.length === 1 ? 'point' : 'points'} as read, by line
         </summary>
         <DataTable
@@ -31,10 +31,22 @@ export function PointsPreview({ points, observable }: PointsPreviewProps) {
           rowKey={({ line }) => line}
           columns={[
             { key: 'line', label: 'line', numeric: true, cell: ({ line }) => line },
-            { key: 'energy', label: 'energy (keV)', numeric: true, cell: ({ energyKeV }) => significant(energyKeV, 6) },
-            { key: 'value', label: observable === 'rate' ? 'rate (µs⁻¹)' : 'fraction', numeric: true, cell: ({ value }) => significant(value, 6) },
+            {
+              key: 'energy',
+              label: 'energy (keV)',
+              numeric: true,
+              cell: ({ energyKeV }) => significant(energyKeV, 6),
+            },
+            {
+              key: 'value',
+              label: observable === 'rate' ? 'rate (µs⁻¹)' : 'fraction',
+              numeric: true,
+              cell: ({ value }) => significant(value, 6),
+            },
             { key: 'sigma', label: 'σ', numeric: true, cell: ({ sigma }) => significant(sigma, 4) },
-            ...(withNotes ? [{ key: 'note', label: 'note', cell: ({ note }: ScanRow) => note ?? '' }] : []),
+            ...(withNotes
+              ? [{ key: 'note', label: 'note', cell: ({ note }: ScanRow) => note ?? '' }]
+              : []),
           ]}
         />
       </details>

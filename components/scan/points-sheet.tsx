@@ -19,14 +19,26 @@ interface PointsSheetProps {
 export function PointsSheet({ sheet, typed, observable }: PointsSheetProps) {
   const columns: readonly SheetColumn[] = [
     { name: columnName(ENERGY, observable), unit: 'keV', numeric: true },
-    { name: columnName(VALUE, observable), unit: observable === 'rate' ? 'µs⁻¹' : '', numeric: true },
+    {
+      name: columnName(VALUE, observable),
+      unit: observable === 'rate' ? 'µs⁻¹' : '',
+      numeric: true,
+    },
     { name: columnName(SIGMA, observable), unit: '', numeric: true },
     { name: columnName(NOTE, observable), unit: '', numeric: false },
   ];
   return (
     <div className="grid gap-6">
-      <Sheet caption="Points of the scan" columns={columns} sheet={sheet} errors={typed.errors} maxRows={MAX_ENERGIES} />
-      {typed.points.length > 0 && <ScanFigure points={typed.points} observable={observable} title="Preview" />}
+      <Sheet
+        caption="Points of the scan"
+        columns={columns}
+        sheet={sheet}
+        errors={typed.errors}
+        maxRows={MAX_ENERGIES}
+      />
+      {typed.points.length > 0 && (
+        <ScanFigure points={typed.points} observable={observable} title="Preview" />
+      )}
     </div>
   );
 }

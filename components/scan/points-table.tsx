@@ -28,11 +28,24 @@ export function PointsTable({ points, observable }: PointsTableProps) {
       rowKey={({ energyKeV }) => energyKeV}
       rowClassName={({ enabled }) => (enabled ? undefined : 'text-ink-3')}
       columns={[
-        { key: 'energy', label: 'energy (keV)', numeric: true, rowHeader: true, cell: ({ energyKeV }) => asEntered(energyKeV) },
-        { key: 'value', label: observable === 'rate' ? 'rate (µs⁻¹)' : 'fraction', numeric: true, cell: ({ value, sigma }) => digits(value, sigma) },
+        {
+          key: 'energy',
+          label: 'energy (keV)',
+          numeric: true,
+          rowHeader: true,
+          cell: ({ energyKeV }) => asEntered(energyKeV),
+        },
+        {
+          key: 'value',
+          label: observable === 'rate' ? 'rate (µs⁻¹)' : 'fraction',
+          numeric: true,
+          cell: ({ value, sigma }) => digits(value, sigma),
+        },
         { key: 'sigma', label: 'σ', numeric: true, cell: ({ sigma }) => digits(sigma, sigma) },
         { key: 'used', label: 'used', cell: ({ enabled }) => (enabled ? 'yes' : 'switched off') },
-        ...(withNotes ? [{ key: 'note', label: 'note', cell: ({ note }: TypedPoint) => note }] : []),
+        ...(withNotes
+          ? [{ key: 'note', label: 'note', cell: ({ note }: TypedPoint) => note }]
+          : []),
       ]}
     />
   );

@@ -1,10 +1,22 @@
 import { typedNumber } from '@/components/upload/typed-number';
-import { guessEnergyUnit, guessScanColumns, readScan, type ScanColumns, type ScanReading } from '@/lib/files/scan-file';
+import {
+  guessEnergyUnit,
+  guessScanColumns,
+  readScan,
+  type ScanColumns,
+  type ScanReading,
+} from '@/lib/files/scan-file';
 import type { Decimal, Delimiter, Table } from '@/lib/files/table';
 import type { Scan, ScanReading as ScanReadingSent } from '@/lib/schemas/scan';
 
 export type ColumnRole = keyof ScanColumns;
-export const COLUMN_ROLES = ['energy', 'value', 'sigma', 'note', 'counts'] as const satisfies readonly ColumnRole[];
+const COLUMN_ROLES = [
+  'energy',
+  'value',
+  'sigma',
+  'note',
+  'counts',
+] as const satisfies readonly ColumnRole[];
 
 /** What the person changed about how a file is read; null or absent leaves it as recognised. */
 export interface ScanChoices {
@@ -48,20 +60,27 @@ const ROLE_WORDS: Record<ColumnRole, string> = {
 };
 
 /** Reads a table the way the person chose, and says what stands in the way of storing it. */
-export function previewScan(table: Table, choices: ScanChoices, observable: Scan['observable']): ScanPreview {
+export function previewScan(
+  table: Table,
+  choices: ScanChoices,
+  observable: Scan['observable'],
+): ScanPreview {
   const match = matchColumns(table, choices);
-  const energyUnit = choices.energyUnit ?? (match.energy === null ? 'keV' : guessEnergyUnit(table, match.energy));
+  const energyUnit =
+    choices.energyUnit ?? (match.energy === null ? 'keV' : guessEnergyUnit(table, match.energy));
   const base = { match, energyUnit };
   const columns = settledColumns(match);
   if (typeof columns === 'string') return { ...base, reading: null, blocked: columns, sent: null };
   const asymmetry = observable === 'fraction' ? readAmplitudes(choices.amplitudes) : null;
-  if (typeof asymmetry === 'string') return { ...base, reading: null, blocked: asymmetry, sent: null };
+  if (typeof asymmetry === 'string')
+    return { ...base, reading: null, blocked: asymmetry, sent: null };
 
   const skipLines = [...choices.skipLines];
   const reading = readScan(table, columns, { observable, energyUnit, asymmetry, skipLines });
   const blocked = whyBlocked(reading);
   const { delimiter, decimal } = table;
-  const sent = blocked === null ? { delimiter, decimal, columns, energyUnit, asymmetry, skipLines } : null;
+  const sent =
+    blocked === null ? { delimiter, decimal, columns, energyUnit, asymmetry, skipLines } : null;
   return { ...base, reading, blocked, sent };
 }
 
@@ -71,7 +90,13 @@ function matchColumns(table: Table, choices: ScanChoices): ColumnMatch {
     const chosen = choices.columns[role];
     return chosen === undefined ? (guess?.[role] ?? null) : chosen;
   };
-  return { energy: pick('energy'), value: pick('value'), sigma: pick('sigma'), note: pick('note'), counts: pick('counts') };
+  return {
+    energy: pick('energy'),
+    value: pick('value'),
+    sigma: pick('sigma'),
+    note: pick('note'),
+    counts: pick('counts'),
+  };
 }
 
 /** The columns when they can be used, otherwise the reason why not. */
@@ -82,25 +107,36 @@ function settledColumns(match: ColumnMatch): ScanColumns | string {
     return `Choose the column of ${missing.map((role) => ROLE_WORDS[role]).join(' and ')}.`;
   }
   const used = COLUMN_ROLES.filter((role) => match[role] !== null);
-  const twin = used.find((role, index) => used.slice(0, index).some((other) => match[other] === match[role]));
-  if (twin) return `Column ${(match[twin] ?? 0) + 1} is chosen twice; ${ROLE_WORDS[twin]} needs a column of its own.`;
+  const twin = used.find((role, index) =>
+    used.slice(0, index).some((other) => match[other] === match[role]),
+  );
+  if (twin)
+    return `Column ${(match[twin] ?? 0) + 1} is chosen twice; ${ROLE_WORDS[twin]} needs a column of its own.`;
   return { energy, value, sigma, note, counts };
 }
 
 /** Maximum asymmetry and σ as typed; null when the values are no amplitudes; a sentence when it is not settled. */
-function readAmplitudes({ on, maximum, sigma }: ScanChoices['amplitudes']): { maximum: number; sigma: number } | string | null {
+function readAmplitudes({
+  on,
+  maximum,
+  sigma,
+}: ScanChoices['amplitudes']): { maximum: number; sigma: number } | string | null {
   if (!on) return null;
   const limit = typedNumber(maximum) ?? Number.NaN;
-  if (!(limit > 0 && limit <= 1)) return 'Write the maximum asymmetry: a number above 0 and at most 1.';
+  if (!(limit > 0 && limit <= 1))
+    return 'Write the maximum asymmetry: a number above 0 and at most 1.';
   const spread = typedNumber(sigma) ?? Number.NaN;
-  if (!(spread >= 0 && spread <= 1)) return 'Write σ of the maximum asymmetry: a number from 0 to 1.';
+  if (!(spread >= 0 && spread <= 1))
+    return 'Write σ of the maximum asymmetry: a number from 0 to 1.';
   return { maximum: limit, sigma: spread };
 }
 
 function whyBlocked({ problems, points }: ScanReading): string | null {
   if (problems.length > 0) {
     const lines = new Set(problems.map(({ line }) => line)).size;
-    return lines === 1 ? 'One line needs mending or leaving out.' : `${lines} lines need mending or leaving out.`;
+    return lines === 1
+      ? 'One line needs mending or leaving out.'
+      : `${lines} lines need mending or leaving out.`;
   }
   return points.length === 0 ? 'No points are left.' : null;
 }

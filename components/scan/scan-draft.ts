@@ -24,7 +24,15 @@ export const NEW_SCAN: ScanDraft = {
 export function draftOfScan(scan: Scan): ScanDraft {
   const { name, observable, illumination, measuredOn, notes } = scan;
   const text = (value: number | null) => (value === null ? '' : String(value));
-  return { name, observable, illumination, measuredOn, notes, temperatureK: text(scan.temperatureK), fieldMT: text(scan.fieldMT) };
+  return {
+    name,
+    observable,
+    illumination,
+    measuredOn,
+    notes,
+    temperatureK: text(scan.temperatureK),
+    fieldMT: text(scan.fieldMT),
+  };
 }
 
 const OBSERVABLE_WORDS: Record<Scan['observable'], string> = {
@@ -32,7 +40,10 @@ const OBSERVABLE_WORDS: Record<Scan['observable'], string> = {
   rate: 'capture rate (µs⁻¹)',
 };
 
-export const OBSERVABLE_OPTIONS = OBSERVABLES.map((value) => ({ value, label: OBSERVABLE_WORDS[value] }));
+export const OBSERVABLE_OPTIONS = OBSERVABLES.map((value) => ({
+  value,
+  label: OBSERVABLE_WORDS[value],
+}));
 export const ILLUMINATION_OPTIONS = ILLUMINATIONS.map((value) => ({ value, label: value }));
 
 export function observableOf(value: string): Scan['observable'] {

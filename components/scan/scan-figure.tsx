@@ -30,10 +30,23 @@ export function ScanFigure({ points, observable, title }: ScanFigureProps) {
       height={HEIGHT}
       table={{
         columns: ['energy (keV)', valueName, 'σ', 'used'],
-        rows: points.map(({ energyKeV, value, sigma, enabled }) => [energyKeV, value, sigma, enabled ? 'yes' : 'no']),
+        rows: points.map(({ energyKeV, value, sigma, enabled }) => [
+          energyKeV,
+          value,
+          sigma,
+          enabled ? 'yes' : 'no',
+        ]),
       }}
     >
-      {(width) => <ScanChart residuals={marks} curves={[]} observable={observable} width={width} height={HEIGHT} />}
+      {(width) => (
+        <ScanChart
+          residuals={marks}
+          curves={[]}
+          observable={observable}
+          width={width}
+          height={HEIGHT}
+        />
+      )}
     </Figure>
   );
 }

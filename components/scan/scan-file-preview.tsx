@@ -58,7 +58,10 @@ export function ScanFilePreview({ model, observable }: ScanFilePreviewProps) {
             onEnergyUnit={(energyUnit) => choose({ energyUnit })}
           />
           {observable === 'fraction' && (
-            <AmplitudeChoices amplitudes={choices.amplitudes} onChange={(amplitudes) => choose({ amplitudes })} />
+            <AmplitudeChoices
+              amplitudes={choices.amplitudes}
+              onChange={(amplitudes) => choose({ amplitudes })}
+            />
           )}
           {preview.reading && (
             <>
@@ -66,12 +69,18 @@ export function ScanFilePreview({ model, observable }: ScanFilePreviewProps) {
                 problems={preview.reading.problems}
                 // A fault without a column is about the whole file; leaving out a line would not mend it.
                 mayLeaveOut={({ column }) => column !== null}
-                onLeaveOut={(problems) => choose({ skipLines: [...new Set([...leftOut, ...problems.map(({ line }) => line ?? 0)])] })}
+                onLeaveOut={(problems) =>
+                  choose({
+                    skipLines: [...new Set([...leftOut, ...problems.map(({ line }) => line ?? 0)])],
+                  })
+                }
               />
               <LeftOutLines
                 fileName={file.name}
                 lines={leftOut}
-                onTakeBack={(line) => choose({ skipLines: leftOut.filter((other) => other !== line) })}
+                onTakeBack={(line) =>
+                  choose({ skipLines: leftOut.filter((other) => other !== line) })
+                }
               />
               <PointsPreview points={preview.reading.points} observable={observable} />
             </>

@@ -35,31 +35,50 @@ export function ScanFits({ fits }: { fits: readonly FitRow[] }) {
             cell: ({ id, name }) => (
               <input
                 type="checkbox"
-                className="accent-kelp size-5"
+                className="size-5 accent-kelp"
                 aria-label={`Choose ${name} for comparison`}
                 checked={chosen.includes(id)}
                 onChange={() => toggle(id)}
               />
             ),
           },
-          { key: 'name', label: 'fit', rowHeader: true, cell: ({ id, name }) => <TextLink href={`/fits/${id}`}>{name}</TextLink> },
+          {
+            key: 'name',
+            label: 'fit',
+            rowHeader: true,
+            cell: ({ id, name }) => <TextLink href={`/fits/${id}`}>{name}</TextLink>,
+          },
           { key: 'profile', label: 'trial profile', cell: ({ profile }) => profile },
-          { key: 'edge', label: 'edge', numeric: true, cell: ({ edge }) => (edge === null ? '–' : parameterText(edge, 'nm')) },
+          {
+            key: 'edge',
+            label: 'edge',
+            numeric: true,
+            cell: ({ edge }) => (edge === null ? '–' : parameterText(edge, 'nm')),
+          },
           {
             key: 'chi',
             label: 'χ² / degrees of freedom',
             numeric: true,
-            cell: ({ chiSquare, degreesOfFreedom }) => `${significant(chiSquare, 3)} / ${degreesOfFreedom}`,
+            cell: ({ chiSquare, degreesOfFreedom }) =>
+              `${significant(chiSquare, 3)} / ${degreesOfFreedom}`,
           },
           { key: 'state', label: 'state', cell: ({ state }) => <StateBadge state={state} /> },
-          { key: 'by', label: 'by', cell: ({ createdBy, createdAt }) => <>{createdBy}, <Moment at={createdAt} dateOnly /></> },
+          {
+            key: 'by',
+            label: 'by',
+            cell: ({ createdBy, createdAt }) => (
+              <>
+                {createdBy}, <Moment at={createdAt} dateOnly />
+              </>
+            ),
+          },
         ]}
       />
       {fits.length > 1 &&
         (mayCompare ? (
           <ButtonLink href={compareAddress(chosen)}>Compare {chosen.length} fits</ButtonLink>
         ) : (
-          <p className="text-ink-2 text-sm">Choose two to {MOST_FITS} fits to compare them.</p>
+          <p className="text-sm text-ink-2">Choose two to {MOST_FITS} fits to compare them.</p>
         ))}
     </div>
   );

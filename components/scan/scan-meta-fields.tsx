@@ -26,7 +26,11 @@ export function ScanMetaFields({ draft, faults, onChange }: ScanMetaFieldsProps)
   return (
     <div className="grid gap-4">
       <Field label="Name" hint="Such as “205 K, dark”." error={faults.name} required>
-        <TextInput value={draft.name} maxLength={80} onChange={(event) => change({ name: event.target.value })} />
+        <TextInput
+          value={draft.name}
+          maxLength={80}
+          onChange={(event) => change({ name: event.target.value })}
+        />
       </Field>
       <Field label="What was measured" error={faults.observable}>
         <Select
@@ -35,12 +39,20 @@ export function ScanMetaFields({ draft, faults, onChange }: ScanMetaFieldsProps)
           onChange={(event) => change({ observable: observableOf(event.target.value) })}
         />
       </Field>
-      <div className="grid grid-cols-2 gap-3">
+      <div className="grid grid-cols-2 items-end gap-3">
         <Field label="Temperature" unit="K" error={faults.temperatureK} optional>
-          <TextInput numeric value={draft.temperatureK} onChange={(event) => change({ temperatureK: event.target.value })} />
+          <TextInput
+            numeric
+            value={draft.temperatureK}
+            onChange={(event) => change({ temperatureK: event.target.value })}
+          />
         </Field>
         <Field label="Field" unit="mT" error={faults.fieldMT} optional>
-          <TextInput numeric value={draft.fieldMT} onChange={(event) => change({ fieldMT: event.target.value })} />
+          <TextInput
+            numeric
+            value={draft.fieldMT}
+            onChange={(event) => change({ fieldMT: event.target.value })}
+          />
         </Field>
       </div>
       <Field label="Illumination" error={faults.illumination}>
@@ -52,10 +64,18 @@ export function ScanMetaFields({ draft, faults, onChange }: ScanMetaFieldsProps)
       </Field>
       {draft.illumination !== 'dark' && <LightCaution />}
       <Field label="Measured on" error={faults.measuredOn} optional>
-        <TextInput type="date" value={draft.measuredOn} onChange={(event) => change({ measuredOn: event.target.value })} />
+        <TextInput
+          type="date"
+          value={draft.measuredOn}
+          onChange={(event) => change({ measuredOn: event.target.value })}
+        />
       </Field>
       <Field label="Notes" error={faults.notes} optional>
-        <TextArea value={draft.notes} maxLength={4000} onChange={(event) => change({ notes: event.target.value })} />
+        <TextArea
+          value={draft.notes}
+          maxLength={4000}
+          onChange={(event) => change({ notes: event.target.value })}
+        />
       </Field>
     </div>
   );
@@ -64,8 +84,8 @@ export function ScanMetaFields({ draft, faults, onChange }: ScanMetaFieldsProps)
 function LightCaution() {
   return (
     <Notice kind="caution" title="Lamps and lasers can hurt eyes and skin">
-      Sources follow the facility’s laser-safety rules; ultraviolet lamps too. Ask its laser-safety officer, and leave
-      setting up to trained and licensed staff.
+      Sources follow the facility’s laser-safety rules; ultraviolet lamps too. Ask its laser-safety
+      officer, and leave setting up to trained and licensed staff.
     </Notice>
   );
 }

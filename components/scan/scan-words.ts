@@ -7,7 +7,9 @@ export const OBSERVABLE_WORDS: Record<Scan['observable'], string> = {
 };
 
 /** Conditions of a scan in the order in which they are read: "205 K", "10 mT", "dark", "2026-03-14". */
-export function conditionWords(scan: Pick<Scan, 'temperatureK' | 'fieldMT' | 'illumination' | 'measuredOn'>): string[] {
+export function conditionWords(
+  scan: Pick<Scan, 'temperatureK' | 'fieldMT' | 'illumination' | 'measuredOn'>,
+): string[] {
   const { temperatureK, fieldMT, illumination, measuredOn } = scan;
   return [
     temperatureK === null ? '' : `${asEntered(temperatureK)} K`,

@@ -33,7 +33,10 @@ export function useScanFile(observable: Scan['observable'], nothingYet: string):
   const { delimiter, decimal } = choices;
   const readFile = useCallback((): ReadTableResult | null => {
     if (file === null) return null;
-    return readTable(file.name, file.bytes, { delimiter: delimiter ?? undefined, decimal: decimal ?? undefined });
+    return readTable(file.name, file.bytes, {
+      delimiter: delimiter ?? undefined,
+      decimal: decimal ?? undefined,
+    });
   }, [file, delimiter, decimal]);
   const { result, reading } = useDeferredReading(readFile);
   const table = result?.ok ? result.table : null;

@@ -1,7 +1,7 @@
 import { parseNumber } from '@/lib/files/parse-number';
 import { parsePasted } from '@/lib/files/parse-pasted';
 
-export interface PastedBlock {
+interface PastedBlock {
   cells: string[][];
   /** One sentence of what was taken and what was not. */
   words: string;
@@ -23,7 +23,8 @@ export function pastedBlock(text: string, columnsLeft: number): PastedBlock {
   const widest = Math.max(0, ...kept.map((cells) => cells.length));
   const words = [`Pasted ${count(kept.length, 'row')}.`];
   if (heading) words.push('The heading line was left out.');
-  if (widest > columnsLeft) words.push(`${count(widest - columnsLeft, 'column')} beyond the last one left out.`);
+  if (widest > columnsLeft)
+    words.push(`${count(widest - columnsLeft, 'column')} beyond the last one left out.`);
   return { cells: kept.map((cells) => cells.slice(0, columnsLeft)), words: words.join(' ') };
 }
 
@@ -35,7 +36,9 @@ function linesOf(text: string): string[][] {
 }
 
 function hasNumber(cells: readonly string[]): boolean {
-  return cells.some((cell) => parseNumber(cell, 'point') !== null || parseNumber(cell, 'comma') !== null);
+  return cells.some(
+    (cell) => parseNumber(cell, 'point') !== null || parseNumber(cell, 'comma') !== null,
+  );
 }
 
 function count(howMany: number, what: string): string {

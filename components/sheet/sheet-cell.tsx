@@ -20,14 +20,19 @@ interface SheetCellProps {
 export function SheetCell(props: SheetCellProps) {
   const { place, label, value, numeric, off, errorId, onType, ...events } = props;
   return (
-    <td className={clsx('border-rule border p-0', errorId !== null && 'outline-coral outline-2 -outline-offset-2')}>
+    <td
+      className={clsx(
+        'border border-rule p-0',
+        errorId !== null && 'outline-2 -outline-offset-2 outline-coral',
+      )}
+    >
       <input
         data-place={place}
         aria-label={label}
         aria-invalid={errorId !== null || undefined}
         aria-describedby={errorId ?? undefined}
         className={clsx(
-          'focus-visible:outline-tide h-9 w-full min-w-16 bg-transparent px-2 text-sm focus-visible:outline-2 focus-visible:-outline-offset-2',
+          'h-9 w-full min-w-20 bg-transparent px-2 text-sm focus-visible:outline-2 focus-visible:-outline-offset-2 focus-visible:outline-tide',
           numeric && 'text-right font-mono tabular-nums',
           off && 'text-ink-3 line-through',
         )}

@@ -16,12 +16,16 @@ interface SheetErrorsProps {
 /** Every bad cell by name; each sentence leads to its cell. */
 export function SheetErrors({ id, errors, onGoTo }: SheetErrorsProps) {
   return (
-    <ul aria-live="polite" aria-label="cells to mend" className="mt-2 space-y-1 text-sm empty:hidden">
+    <ul
+      aria-live="polite"
+      aria-label="cells to mend"
+      className="mt-2 space-y-1 text-sm empty:hidden"
+    >
       {errors.map((error) => (
         <li key={`${error.rowId}:${error.column}`} id={`${id}-${error.rowId}-${error.column}`}>
           <button
             type="button"
-            className="text-coral-ink text-left underline decoration-dotted underline-offset-4"
+            className="text-left text-coral-ink underline decoration-dotted underline-offset-4"
             onClick={() => onGoTo(error.rowId, error.column)}
           >
             {error.message}

@@ -6,7 +6,7 @@ export interface CellPlace {
 }
 
 /** What a key asks of the grid; null leaves the key to the cell itself. */
-export type KeyWish = { kind: 'move'; to: CellPlace } | { kind: 'undo' | 'redo' } | null;
+type KeyWish = { kind: 'move'; to: CellPlace } | { kind: 'undo' | 'redo' } | null;
 
 /**
  * Up, Down and Enter change the row; Left and Right leave the cell only from its ends, so that the
@@ -24,7 +24,9 @@ export function keyWish(event: KeyboardEvent<HTMLInputElement>, at: CellPlace): 
     case 'Enter':
       return { kind: 'move', to: { row: event.shiftKey ? row - 1 : row + 1, column } };
     case 'ArrowLeft':
-      return !event.shiftKey && caretAt(event.currentTarget, 0) ? { kind: 'move', to: { row, column: column - 1 } } : null;
+      return !event.shiftKey && caretAt(event.currentTarget, 0)
+        ? { kind: 'move', to: { row, column: column - 1 } }
+        : null;
     case 'ArrowRight':
       return !event.shiftKey && caretAt(event.currentTarget, event.currentTarget.value.length)
         ? { kind: 'move', to: { row, column: column + 1 } }

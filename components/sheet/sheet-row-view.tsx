@@ -24,7 +24,10 @@ export function SheetRowView(props: SheetRowViewProps) {
   const rowName = `row ${index + 1}`;
   return (
     <tr>
-      <th scope="row" className="text-ink-3 px-1 text-right font-mono text-xs font-normal tabular-nums">
+      <th
+        scope="row"
+        className="px-1 text-right font-mono text-xs font-normal text-ink-3 tabular-nums"
+      >
         {index + 1}
       </th>
       {columns.map((column, at) => (
@@ -45,7 +48,7 @@ export function SheetRowView(props: SheetRowViewProps) {
       <td className="text-center">
         <input
           type="checkbox"
-          className="accent-kelp size-5 align-middle"
+          className="size-5 align-middle accent-kelp"
           aria-label={`use ${rowName}`}
           checked={row.on}
           onChange={() => sheet.toggleRow(row.id)}
@@ -55,7 +58,7 @@ export function SheetRowView(props: SheetRowViewProps) {
         {!row.kept && (
           <button
             type="button"
-            className="text-ink-2 hover:text-coral-ink size-8 rounded text-base"
+            className="size-8 rounded text-base text-ink-2 hover:text-coral-ink"
             aria-label={`remove ${rowName}`}
             onClick={onRemove}
           >

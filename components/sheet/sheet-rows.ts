@@ -20,7 +20,11 @@ export interface SheetLine {
 }
 
 /** Content from lines of cells; an empty list gives `blankRows` rows to type into. */
-export function sheetContent(lines: readonly SheetLine[], columnCount: number, blankRows = 0): SheetContent {
+export function sheetContent(
+  lines: readonly SheetLine[],
+  columnCount: number,
+  blankRows = 0,
+): SheetContent {
   const blank = { cells: Array.from({ length: columnCount }, () => '') };
   const all = [...lines, ...Array.from({ length: blankRows }, () => blank)];
   const rows = all.map((line: SheetLine, index) => ({
@@ -32,17 +36,32 @@ export function sheetContent(lines: readonly SheetLine[], columnCount: number, b
   return { rows, nextId: rows.length };
 }
 
-export function withCell(content: SheetContent, rowId: number, column: number, text: string): SheetContent {
-  const rows = content.rows.map((row) => (row.id === rowId ? { ...row, cells: row.cells.with(column, text) } : row));
+export function withCell(
+  content: SheetContent,
+  rowId: number,
+  column: number,
+  text: string,
+): SheetContent {
+  const rows = content.rows.map((row) =>
+    row.id === rowId ? { ...row, cells: row.cells.with(column, text) } : row,
+  );
   return { ...content, rows };
 }
 
 export function withRowToggled(content: SheetContent, rowId: number): SheetContent {
-  return { ...content, rows: content.rows.map((row) => (row.id === rowId ? { ...row, on: !row.on } : row)) };
+  return {
+    ...content,
+    rows: content.rows.map((row) => (row.id === rowId ? { ...row, on: !row.on } : row)),
+  };
 }
 
 export function withRowAt(content: SheetContent, index: number, columnCount: number): SheetContent {
-  const row = { id: content.nextId, cells: Array.from({ length: columnCount }, () => ''), on: true, kept: false };
+  const row = {
+    id: content.nextId,
+    cells: Array.from({ length: columnCount }, () => ''),
+    on: true,
+    kept: false,
+  };
   return { rows: content.rows.toSpliced(index, 0, row), nextId: content.nextId + 1 };
 }
 

@@ -18,18 +18,31 @@ export function SheetTools({ sheet, onAddRow, news }: SheetToolsProps) {
         <Button variant="secondary" size="small" type="button" onClick={onAddRow}>
           Add row
         </Button>
-        <Button variant="quiet" size="small" type="button" disabled={!sheet.canUndo} onClick={sheet.undo}>
+        <Button
+          variant="quiet"
+          size="small"
+          type="button"
+          disabled={!sheet.canUndo}
+          onClick={sheet.undo}
+        >
           Undo
         </Button>
-        <Button variant="quiet" size="small" type="button" disabled={!sheet.canRedo} onClick={sheet.redo}>
+        <Button
+          variant="quiet"
+          size="small"
+          type="button"
+          disabled={!sheet.canRedo}
+          onClick={sheet.redo}
+        >
           Redo
         </Button>
-        <p role="status" className="text-ink-2 text-sm">
+        <p role="status" className="text-sm text-ink-2">
           {news}
         </p>
       </div>
-      <p className="text-ink-2 mt-1 text-xs">
-        Paste a block from a spreadsheet into any cell. Arrows and Enter move between cells, Ctrl+Z undoes.
+      <p className="mt-1 text-xs text-ink-2">
+        Paste a block from a spreadsheet into any cell. Arrows and Enter move between cells, Ctrl+Z
+        undoes.
       </p>
     </div>
   );

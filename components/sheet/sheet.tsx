@@ -59,7 +59,9 @@ export function Sheet({ caption, columns, sheet, errors, maxRows }: SheetProps) 
     event.preventDefault();
     const block = pastedBlock(text, columns.length - at.column);
     if (at.row + block.cells.length > maxRows) {
-      return setNews(`Nothing was pasted: ${block.cells.length} rows from row ${at.row + 1} on are more than ${maxRows}.`);
+      return setNews(
+        `Nothing was pasted: ${block.cells.length} rows from row ${at.row + 1} on are more than ${maxRows}.`,
+      );
     }
     sheet.paste(at.row, at.column, block.cells);
     setNews(block.words);
@@ -69,10 +71,10 @@ export function Sheet({ caption, columns, sheet, errors, maxRows }: SheetProps) 
     <div>
       <SheetTools sheet={sheet} onAddRow={addRow} news={news} />
       <div className="overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
-        <table ref={table} className="bg-sheet w-full border-collapse text-sm">
+        <table ref={table} className="w-full border-collapse bg-sheet text-sm">
           <caption className="sr-only">{caption}</caption>
           <thead>
-            <tr className="text-ink-2 text-left text-xs">
+            <tr className="text-left text-xs text-ink-2">
               <th scope="col" className="w-9 px-1 py-1.5 font-medium">
                 <span className="sr-only">row</span>
               </th>
@@ -82,8 +84,12 @@ export function Sheet({ caption, columns, sheet, errors, maxRows }: SheetProps) 
                   {column.unit !== '' && <span className="text-ink-3"> ({column.unit})</span>}
                 </th>
               ))}
-              <th scope="col" className="w-12 px-2 py-1.5 font-medium">used</th>
-              <th scope="col" className="w-9"><span className="sr-only">remove</span></th>
+              <th scope="col" className="w-12 px-2 py-1.5 font-medium">
+                used
+              </th>
+              <th scope="col" className="w-9">
+                <span className="sr-only">remove</span>
+              </th>
             </tr>
           </thead>
           <tbody>
@@ -107,7 +113,13 @@ export function Sheet({ caption, columns, sheet, errors, maxRows }: SheetProps) 
           </tbody>
         </table>
       </div>
-      <SheetErrors id={id} errors={errors} onGoTo={(rowId, column) => focus({ row: rows.findIndex((row) => row.id === rowId), column })} />
+      <SheetErrors
+        id={id}
+        errors={errors}
+        onGoTo={(rowId, column) =>
+          focus({ row: rows.findIndex((row) => row.id === rowId), column })
+        }
+      />
     </div>
   );
 }

@@ -34,7 +34,12 @@ function reduce(history: SheetHistory, action: SheetAction): SheetHistory {
     case 'undo': {
       const previous = past.at(-1);
       if (!previous) return history;
-      return { past: past.slice(0, -1), content: previous, future: [content, ...future], typingIn: null };
+      return {
+        past: past.slice(0, -1),
+        content: previous,
+        future: [content, ...future],
+        typingIn: null,
+      };
     }
     case 'redo': {
       const [next, ...rest] = future;
@@ -79,8 +84,10 @@ export function useSheet(initial: () => SheetContent, columnCount: number): Shee
     typingIn: null,
   }));
   const verbs = useMemo(() => {
-    const change = (make: (content: SheetContent) => SheetContent, typingIn: string | null = null) =>
-      dispatch({ kind: 'change', change: make, typingIn });
+    const change = (
+      make: (content: SheetContent) => SheetContent,
+      typingIn: string | null = null,
+    ) => dispatch({ kind: 'change', change: make, typingIn });
     return {
       type: (rowId: number, column: number, text: string) =>
         change((content) => withCell(content, rowId, column, text), `${rowId}:${column}`),

@@ -22,7 +22,12 @@ export function EditStoppingForm({ set, action }: EditStoppingFormProps) {
   const router = useRouter();
   const [draft, setDraft] = useState(() => draftOfStopping(set));
   return (
-    <Form action={action} label={`Edit ${set.name}`} className="max-w-xl" onDone={() => router.push(`/stopping/${set.id}`)}>
+    <Form
+      action={action}
+      label={`Edit ${set.name}`}
+      className="max-w-xl"
+      onDone={() => router.push(`/stopping/${set.id}`)}
+    >
       <input type="hidden" name="id" value={set.id} />
       <StoppingMetaFields draft={draft} faults={{}} onChange={setDraft} />
       <div className="flex flex-wrap gap-2">

@@ -24,7 +24,7 @@ export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
   const table = preview?.table ?? null;
   const energiesKeV = preview?.energiesKeV ?? [];
   return (
-    <li className="border-rule grid gap-1 border-b py-2.5 text-sm">
+    <li className="grid gap-1 border-b border-rule py-2.5 text-sm">
       <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-2">
         <p className="min-w-0 flex-1 basis-64">
           <strong className="font-semibold break-all">{file.name}</strong>{' '}
@@ -34,7 +34,12 @@ export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
           </span>
         </p>
         {energiesKeV.length === 1 && (
-          <EnergyField name={file.name} typed={entry.energy} foundKeV={energiesKeV[0] ?? null} onType={(energy) => onChoose({ energy })} />
+          <EnergyField
+            name={file.name}
+            typed={entry.energy}
+            foundKeV={energiesKeV[0] ?? null}
+            onType={(energy) => onChoose({ energy })}
+          />
         )}
         <Button size="small" variant="quiet" aria-label={`Remove ${file.name}`} onClick={onRemove}>
           Remove
@@ -42,7 +47,9 @@ export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
       </div>
       {table && (
         <details>
-          <summary className="text-ink-2 w-fit py-0.5 text-[0.8125rem]">Change how it is read</summary>
+          <summary className="w-fit py-0.5 text-[0.8125rem] text-ink-2">
+            Change how it is read
+          </summary>
           <div className="mt-1 max-w-md pb-1">
             <FormatChoices
               delimiter={entry.delimiter ?? table.delimiter}
@@ -65,7 +72,9 @@ export function FileRow({ entry, preview, onChoose, onRemove }: FileRowProps) {
 function foundWords(preview: FilePreview | null): string {
   if (preview === null) return ' · Reading…';
   const { table, energiesKeV } = preview;
-  return table === null ? ' · not readable as a table' : ` · ${tableWords(table)} · ${energyWords(energiesKeV)}`;
+  return table === null
+    ? ' · not readable as a table'
+    : ` · ${tableWords(table)} · ${energyWords(energiesKeV)}`;
 }
 
 function energyWords(energiesKeV: readonly (number | null)[]): string {

@@ -55,10 +55,17 @@ export function LayoutChoices({ layout, choices, onChoose }: LayoutChoicesProps)
         />
       </Field>
       {(weightsAre ?? layout.weightsAre) === 'counts' && (
-        <Field label="Muons implanted per energy" optional hint="Gives the share that did not stop within the depths.">
+        <Field
+          label="Muons implanted per energy"
+          optional
+          hint="Gives the share that did not stop within the depths."
+        >
           <TextInput
             numeric
-            value={implanted ?? (layout.implantedPerEnergy === null ? '' : String(layout.implantedPerEnergy))}
+            value={
+              implanted ??
+              (layout.implantedPerEnergy === null ? '' : String(layout.implantedPerEnergy))
+            }
             onChange={(event) => onChoose({ implanted: event.target.value })}
           />
         </Field>
@@ -67,6 +74,9 @@ export function LayoutChoices({ layout, choices, onChoose }: LayoutChoicesProps)
   );
 }
 
-function known<Value extends string>(options: readonly { value: Value }[], value: string): Value | null {
+function known<Value extends string>(
+  options: readonly { value: Value }[],
+  value: string,
+): Value | null {
   return options.find((option) => option.value === value)?.value ?? null;
 }

@@ -4,7 +4,9 @@ import { significant } from '@/lib/format';
 const LARGEST_QUIET_LOSS = 0.02;
 
 /** A sentence for each energy at which more than 2 % of the muons did not stop within the bins. */
-export function lossWarnings(profiles: readonly { energyKeV: number; lostShare: number | null }[]): string[] {
+export function lossWarnings(
+  profiles: readonly { energyKeV: number; lostShare: number | null }[],
+): string[] {
   return profiles
     .filter(({ lostShare }) => lostShare !== null && lostShare > LARGEST_QUIET_LOSS)
     .map(

@@ -33,7 +33,7 @@ export function MomentsTable({ rows, onLight }: MomentsTableProps) {
           cell: ({ energyKeV }) => (
             <button
               type="button"
-              className="figures hover:text-coral-ink -my-1 px-1 py-1"
+              className="-my-1 px-1 py-1 figures hover:text-coral-ink"
               aria-label={`${energyKeV} keV: light its profile`}
               onPointerEnter={() => onLight(energyKeV)}
               onPointerLeave={() => onLight(null)}
@@ -45,12 +45,42 @@ export function MomentsTable({ rows, onLight }: MomentsTableProps) {
           ),
         },
         { key: 'mean', label: 'mean (nm)', numeric: true, cell: ({ meanNm }) => nm(meanNm) },
-        { key: 'straggle', label: 'straggling (nm)', numeric: true, cell: ({ straggleNm }) => nm(straggleNm) },
-        { key: 'median', label: 'median (nm)', numeric: true, cell: ({ medianNm }) => nm(medianNm) },
-        { key: 'low', label: '5 % (nm)', numeric: true, cell: ({ quantile05Nm }) => nm(quantile05Nm) },
-        { key: 'high', label: '95 % (nm)', numeric: true, cell: ({ quantile95Nm }) => nm(quantile95Nm) },
-        { key: 'lost', label: 'not stopped', numeric: true, cell: ({ lostShare }) => lostWords(lostShare) },
-        { key: 'bins', label: 'bins', numeric: true, cell: ({ bins }) => bins.toLocaleString('en') },
+        {
+          key: 'straggle',
+          label: 'straggling (nm)',
+          numeric: true,
+          cell: ({ straggleNm }) => nm(straggleNm),
+        },
+        {
+          key: 'median',
+          label: 'median (nm)',
+          numeric: true,
+          cell: ({ medianNm }) => nm(medianNm),
+        },
+        {
+          key: 'low',
+          label: '5 % (nm)',
+          numeric: true,
+          cell: ({ quantile05Nm }) => nm(quantile05Nm),
+        },
+        {
+          key: 'high',
+          label: '95 % (nm)',
+          numeric: true,
+          cell: ({ quantile95Nm }) => nm(quantile95Nm),
+        },
+        {
+          key: 'lost',
+          label: 'not stopped',
+          numeric: true,
+          cell: ({ lostShare }) => lostWords(lostShare),
+        },
+        {
+          key: 'bins',
+          label: 'bins',
+          numeric: true,
+          cell: ({ bins }) => bins.toLocaleString('en'),
+        },
       ]}
     />
   );

@@ -4,7 +4,12 @@ import { typedNumber } from '@/components/upload/typed-number';
 import type { FileProblem } from '@/lib/files/problem';
 import { profileEnergies } from '@/lib/files/profile-energies';
 import { readTable, type ReadTableResult } from '@/lib/files/read-table';
-import { guessStoppingLayout, readStoppingFiles, type StoppingReading, type StoppingLayout } from '@/lib/files/stopping-file';
+import {
+  guessStoppingLayout,
+  readStoppingFiles,
+  type StoppingReading,
+  type StoppingLayout,
+} from '@/lib/files/stopping-file';
 import type { Table } from '@/lib/files/table';
 import type { StoppingReading as StoppingReadingSent } from '@/lib/schemas/stopping-set';
 
@@ -41,7 +46,9 @@ export function previewStopping(choices: StoppingChoices, cache: TableCache): St
   const files = entries.map((entry, index) => filePreview(entry, results[index]));
   const inputFault = whyTooMuch(entries) ?? whyTypedWrong(choices);
   const mayRead = tables.length > 0 && refused.length === 0 && inputFault === null;
-  const reading = mayRead ? readAll(tables, files, layout) : { set: null, problems: [], warnings: [] };
+  const reading = mayRead
+    ? readAll(tables, files, layout)
+    : { set: null, problems: [], warnings: [] };
   const problems = [...refused, ...reading.problems];
   const blocked = whyBlocked(problems, inputFault, reading.set === null);
   const sent = blocked === null ? toSend(files, layout) : null;
@@ -49,11 +56,17 @@ export function previewStopping(choices: StoppingChoices, cache: TableCache): St
 }
 
 /** The table of one file, read at most once per format. */
-export function readCached({ file, delimiter, decimal }: StoppingEntry, cache: TableCache): ReadTableResult {
+export function readCached(
+  { file, delimiter, decimal }: StoppingEntry,
+  cache: TableCache,
+): ReadTableResult {
   const format = `${delimiter} ${decimal}`;
   const known = cache.get(file);
   if (known?.format === format) return known.result;
-  const result = readTable(file.name, file.bytes, { delimiter: delimiter ?? undefined, decimal: decimal ?? undefined });
+  const result = readTable(file.name, file.bytes, {
+    delimiter: delimiter ?? undefined,
+    decimal: decimal ?? undefined,
+  });
   cache.set(file, { format, result });
   return result;
 }
@@ -65,7 +78,8 @@ function settleLayout(choices: StoppingChoices, tables: readonly Table[]): Layou
     depthUnit: choices.depthUnit ?? guess.depthUnit,
     positionsAre: choices.positionsAre ?? guess.positionsAre,
     weightsAre: choices.weightsAre ?? guess.weightsAre,
-    implantedPerEnergy: choices.implanted === null ? guess.implantedPerEnergy : typedNumber(choices.implanted),
+    implantedPerEnergy:
+      choices.implanted === null ? guess.implantedPerEnergy : typedNumber(choices.implanted),
   };
 }
 
@@ -75,8 +89,14 @@ function filePreview(entry: StoppingEntry, result: ReadTableResult | undefined):
   return { entry, table, energiesKeV: profileEnergies([table], [typedNumber(entry.energy)]) };
 }
 
-function readAll(tables: readonly Table[], files: readonly FilePreview[], layout: Layout): StoppingReading {
-  const skipLines = Object.fromEntries(files.map(({ entry }) => [entry.file.name, [...entry.skipLines]]));
+function readAll(
+  tables: readonly Table[],
+  files: readonly FilePreview[],
+  layout: Layout,
+): StoppingReading {
+  const skipLines = Object.fromEntries(
+    files.map(({ entry }) => [entry.file.name, [...entry.skipLines]]),
+  );
   const energiesKeV = files.flatMap((file) => file.energiesKeV);
   return readStoppingFiles(tables, { ...layout, energiesKeV, skipLines });
 }
@@ -86,16 +106,21 @@ const MOST_FILES = 200;
 const MOST_BYTES = 20 * 1024 * 1024;
 
 function whyTooMuch(entries: readonly StoppingEntry[]): string | null {
-  if (entries.length > MOST_FILES) return `Expected at most ${MOST_FILES} files, found ${entries.length}.`;
+  if (entries.length > MOST_FILES)
+    return `Expected at most ${MOST_FILES} files, found ${entries.length}.`;
   const total = entries.reduce((sum, { file }) => sum + file.bytes.byteLength, 0);
-  return total > MOST_BYTES ? `The files have ${byteWords(total)} together; expected at most ${byteWords(MOST_BYTES)}.` : null;
+  return total > MOST_BYTES
+    ? `The files have ${byteWords(total)} together; expected at most ${byteWords(MOST_BYTES)}.`
+    : null;
 }
 
 /** A typed number that is none would silently be read as "not given"; it is said instead. */
 function whyTypedWrong({ entries, implanted }: StoppingChoices): string | null {
   const bad = entries.find(({ energy }) => !isAboveZeroOrBlank(energy));
   if (bad) return `Energy of ${bad.file.name}: expected keV above 0.`;
-  return isAboveZeroOrBlank(implanted ?? '') ? null : 'Implanted muons: expected a number above 0, or nothing.';
+  return isAboveZeroOrBlank(implanted ?? '')
+    ? null
+    : 'Implanted muons: expected a number above 0, or nothing.';
 }
 
 function isAboveZeroOrBlank(text: string): boolean {
@@ -103,7 +128,11 @@ function isAboveZeroOrBlank(text: string): boolean {
   return value === null || value > 0;
 }
 
-function whyBlocked(problems: readonly FileProblem[], inputFault: string | null, noSet: boolean): string | null {
+function whyBlocked(
+  problems: readonly FileProblem[],
+  inputFault: string | null,
+  noSet: boolean,
+): string | null {
   if (inputFault !== null) return inputFault;
   if (problems.length === 1) return 'One problem needs mending.';
   if (problems.length > 1) return `${problems.length.toLocaleString('en')} problems need mending.`;

@@ -35,7 +35,13 @@ export const NO_STOPPING_CHOICES: StoppingChoices = {
 };
 
 export function withFiles(choices: StoppingChoices, files: readonly ChosenFile[]): StoppingChoices {
-  const added = files.map((file) => ({ file, delimiter: null, decimal: null, energy: '', skipLines: [] }));
+  const added = files.map((file) => ({
+    file,
+    delimiter: null,
+    decimal: null,
+    energy: '',
+    skipLines: [],
+  }));
   const names = new Set(files.map(({ name }) => name));
   const kept = choices.entries.filter(({ file }) => !names.has(file.name));
   return { ...choices, entries: [...kept, ...added] };
@@ -46,13 +52,22 @@ export function withoutFile(choices: StoppingChoices, name: string): StoppingCho
   return entries.length === 0 ? NO_STOPPING_CHOICES : { ...choices, entries };
 }
 
-export function withFileChoices(choices: StoppingChoices, name: string, change: Partial<FileChoices>): StoppingChoices {
-  const entries = choices.entries.map((entry) => (entry.file.name === name ? { ...entry, ...change } : entry));
+export function withFileChoices(
+  choices: StoppingChoices,
+  name: string,
+  change: Partial<FileChoices>,
+): StoppingChoices {
+  const entries = choices.entries.map((entry) =>
+    entry.file.name === name ? { ...entry, ...change } : entry,
+  );
   return { ...choices, entries };
 }
 
 /** Leaves out the lines that these problems name. */
-export function withLinesLeftOut(choices: StoppingChoices, problems: readonly FileProblem[]): StoppingChoices {
+export function withLinesLeftOut(
+  choices: StoppingChoices,
+  problems: readonly FileProblem[],
+): StoppingChoices {
   const linesOf = new Map<string, Set<number>>();
   for (const { fileName, line } of problems) {
     if (line === null) continue;

@@ -10,6 +10,11 @@ export interface StoppingDraft {
 
 export const NEW_STOPPING: StoppingDraft = { name: '', layerStack: '', origin: '', notes: '' };
 
-export function draftOfStopping({ name, layerStack, origin, notes }: StoppingSetRow): StoppingDraft {
+export function draftOfStopping({
+  name,
+  layerStack,
+  origin,
+  notes,
+}: StoppingSetRow): StoppingDraft {
   return { name, layerStack, origin, notes };
 }

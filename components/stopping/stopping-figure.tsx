@@ -24,7 +24,13 @@ export function ridgelineHeight(energies: number): number {
 export function StoppingFigure({ profiles }: StoppingFigureProps) {
   const [litKeV, setLitKeV] = useState<number | null>(null);
   const rows = useMemo(
-    () => profiles.map((profile) => ({ energyKeV: profile.energyKeV, bins: profile.mass.length, lostShare: profile.lostShare, ...stoppingMoments(profile) })),
+    () =>
+      profiles.map((profile) => ({
+        energyKeV: profile.energyKeV,
+        bins: profile.mass.length,
+        lostShare: profile.lostShare,
+        ...stoppingMoments(profile),
+      })),
     [profiles],
   );
   const height = ridgelineHeight(profiles.length);
@@ -35,7 +41,16 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
         svgName="stopping-profiles"
         height={height}
         table={{
-          columns: ['energy (keV)', 'mean (nm)', 'straggling (nm)', 'median (nm)', '5 % (nm)', '95 % (nm)', 'lost share', 'bins'],
+          columns: [
+            'energy (keV)',
+            'mean (nm)',
+            'straggling (nm)',
+            'median (nm)',
+            '5 % (nm)',
+            '95 % (nm)',
+            'lost share',
+            'bins',
+          ],
           rows: rows.map((row) => [
             row.energyKeV,
             row.meanNm,
@@ -48,7 +63,14 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
           ]),
         }}
       >
-        {(width) => <StoppingRidgeline profiles={profiles} width={width} height={height} highlightedKeV={litKeV} />}
+        {(width) => (
+          <StoppingRidgeline
+            profiles={profiles}
+            width={width}
+            height={height}
+            highlightedKeV={litKeV}
+          />
+        )}
       </Figure>
       <MomentsTable rows={rows} onLight={setLitKeV} />
     </div>

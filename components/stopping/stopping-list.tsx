@@ -29,7 +29,12 @@ export function StoppingList({ sets }: { sets: readonly StoppingSetRow[] }) {
         },
         { key: 'stack', label: 'layer stack', cell: ({ layerStack }) => layerStack },
         { key: 'energies', label: 'energies', cell: ({ energiesKeV }) => energySpan(energiesKeV) },
-        { key: 'bins', label: 'depth bins', numeric: true, cell: ({ bins }) => bins.toLocaleString('en') },
+        {
+          key: 'bins',
+          label: 'depth bins',
+          numeric: true,
+          cell: ({ bins }) => bins.toLocaleString('en'),
+        },
         {
           key: 'added',
           label: 'added',

@@ -25,17 +25,31 @@ export function StoredProfiles({ setId, energies }: { setId: string; energies: n
   const profiles = useMemo(() => data?.profiles.map(toProfile) ?? [], [data]);
   if (error) {
     return (
-      <Notice kind="problem" alert title="The profiles could not be loaded" action={<Button size="small" onClick={() => void mutate()}>Try again</Button>}>
+      <Notice
+        kind="problem"
+        alert
+        title="The profiles could not be loaded"
+        action={
+          <Button size="small" onClick={() => void mutate()}>
+            Try again
+          </Button>
+        }
+      >
         {error instanceof Error ? error.message : 'No reason was given.'}
       </Notice>
     );
   }
   if (isLoading || !data) {
     return (
-      <div role="status" className="text-ink-2 text-sm">
+      <div role="status" className="text-sm text-ink-2">
         Loading the profiles…
         {/* Keeps the room of figure and table, so that nothing moves when they come. */}
-        <svg aria-hidden="true" width="100%" height={ridgelineHeight(energies) + TABLE_HEAD + TABLE_ROW * energies} className="block" />
+        <svg
+          aria-hidden="true"
+          width="100%"
+          height={ridgelineHeight(energies) + TABLE_HEAD + TABLE_ROW * energies}
+          className="block"
+        />
       </div>
     );
   }
@@ -51,7 +65,17 @@ async function fetchSet(path: string) {
   return stoppingSetSchema.parse(await fetchJson(path));
 }
 
-function toProfile({ energyKeV, edgesNm, mass, lostShare }: { energyKeV: number; edgesNm: number[]; mass: number[]; lostShare: number | null }) {
+function toProfile({
+  energyKeV,
+  edgesNm,
+  mass,
+  lostShare,
+}: {
+  energyKeV: number;
+  edgesNm: number[];
+  mass: number[];
+  lostShare: number | null;
+}) {
   return {
     energyKeV,
     edgesNm: Float64Array.from(edgesNm),

@@ -2,7 +2,12 @@
 
 import { useEffect, useRef, useState } from 'react';
 
-import { previewStopping, readCached, type StoppingPreview, type TableCache } from './preview-stopping';
+import {
+  previewStopping,
+  readCached,
+  type StoppingPreview,
+  type TableCache,
+} from './preview-stopping';
 import type { StoppingChoices } from './stopping-choices';
 
 /**
@@ -10,9 +15,14 @@ import type { StoppingChoices } from './stopping-choices';
  * them, so that the page paints and answers; only what changed is read again. `reading` is true
  * while the preview at hand belongs to earlier choices.
  */
-export function useStoppingPreview(choices: StoppingChoices): { preview: StoppingPreview | null; reading: boolean } {
+export function useStoppingPreview(choices: StoppingChoices): {
+  preview: StoppingPreview | null;
+  reading: boolean;
+} {
   const cache = useRef<TableCache>(new WeakMap());
-  const [done, setDone] = useState<{ choices: StoppingChoices; preview: StoppingPreview } | null>(null);
+  const [done, setDone] = useState<{ choices: StoppingChoices; preview: StoppingPreview } | null>(
+    null,
+  );
   useEffect(() => {
     const stop = new AbortController();
     void readInTurns(choices, cache.current, stop.signal).then((preview) => {
@@ -23,7 +33,11 @@ export function useStoppingPreview(choices: StoppingChoices): { preview: Stoppin
   return { preview: done?.preview ?? null, reading: done?.choices !== choices };
 }
 
-async function readInTurns(choices: StoppingChoices, cache: TableCache, stop: AbortSignal): Promise<StoppingPreview | null> {
+async function readInTurns(
+  choices: StoppingChoices,
+  cache: TableCache,
+  stop: AbortSignal,
+): Promise<StoppingPreview | null> {
   for (const entry of choices.entries) {
     await breath();
     if (stop.aborted) return null;

@@ -22,7 +22,10 @@ export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
   const [refused, setRefused] = useState<readonly string[]>([]);
   const take = async (files: readonly File[]) => {
     const { taken, refused: reasons } = await takeAll(multiple ? files : files.slice(0, 1));
-    const surplus = multiple || files.length < 2 ? [] : [`Only ${files[0]?.name ?? ''} was taken: a scan is one file.`];
+    const surplus =
+      multiple || files.length < 2
+        ? []
+        : [`Only ${files[0]?.name ?? ''} was taken: a scan is one file.`];
     setRefused([...reasons, ...surplus]);
     if (taken.length > 0) onFiles(taken);
   };
@@ -44,7 +47,7 @@ export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
         <label htmlFor={id} className="font-medium">
           {label}
         </label>
-        <p id={`${id}-hint`} className="text-ink-2 mt-0.5">
+        <p id={`${id}-hint`} className="mt-0.5 text-ink-2">
           {hint}
         </p>
         <input
@@ -52,10 +55,10 @@ export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
           // Shown, so that the browser's own button works with keyboard, touch and speech.
           style={undefined}
           tabIndex={0}
-          className="file:border-edge file:bg-sheet file:text-ink mt-3 block w-full max-w-full file:mr-3 file:cursor-pointer file:rounded file:border file:border-solid file:px-3 file:py-1.5 file:font-medium"
+          className="mt-3 block w-full max-w-full file:mr-3 file:cursor-pointer file:rounded file:border file:border-solid file:border-edge file:bg-sheet file:px-3 file:py-1.5 file:font-medium file:text-ink"
         />
       </div>
-      <ul role="alert" className="text-coral-ink mt-2 space-y-1 text-sm empty:hidden">
+      <ul role="alert" className="mt-2 space-y-1 text-sm text-coral-ink empty:hidden">
         {refused.map((reason) => (
           <li key={reason}>{reason}</li>
         ))}
@@ -64,12 +67,16 @@ export function DropZone({ label, hint, multiple, onFiles }: DropZoneProps) {
   );
 }
 
-async function takeAll(files: readonly File[]): Promise<{ taken: ChosenFile[]; refused: string[] }> {
+async function takeAll(
+  files: readonly File[],
+): Promise<{ taken: ChosenFile[]; refused: string[] }> {
   const taken: ChosenFile[] = [];
   const refused: string[] = [];
   for (const file of files) {
     if (file.size > MAX_FILE_BYTES) {
-      refused.push(`${file.name} has ${byteWords(file.size)}; expected at most ${byteWords(MAX_FILE_BYTES)}. It was not taken.`);
+      refused.push(
+        `${file.name} has ${byteWords(file.size)}; expected at most ${byteWords(MAX_FILE_BYTES)}. It was not taken.`,
+      );
       continue;
     }
     try {

@@ -2,7 +2,8 @@
 export async function fetchJson(path: string): Promise<unknown> {
   const response = await fetch(path);
   const answer: unknown = await response.json().catch(() => null);
-  if (!response.ok) throw new Error(sentenceOf(answer) ?? `The server answered with status ${response.status}.`);
+  if (!response.ok)
+    throw new Error(sentenceOf(answer) ?? `The server answered with status ${response.status}.`);
   return answer;
 }
 

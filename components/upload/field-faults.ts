@@ -10,8 +10,14 @@ export function fieldFaults(schema: z.ZodType, value: unknown): Record<string, s
 }
 
 /** Faults that a server names as `meta.name` belong to the field `name`. */
-export function withoutPrefix(faults: Record<string, string>, prefix: string): Record<string, string> {
+export function withoutPrefix(
+  faults: Record<string, string>,
+  prefix: string,
+): Record<string, string> {
   return Object.fromEntries(
-    Object.entries(faults).map(([name, fault]) => [name.startsWith(prefix) ? name.slice(prefix.length) : name, fault]),
+    Object.entries(faults).map(([name, fault]) => [
+      name.startsWith(prefix) ? name.slice(prefix.length) : name,
+      fault,
+    ]),
   );
 }

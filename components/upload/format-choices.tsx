@@ -24,7 +24,10 @@ export function FormatChoices({ delimiter, decimal, onDelimiter, onDecimal }: Fo
   return (
     <div className="grid grid-cols-2 gap-3">
       <Field label="Between cells">
-        <Select value={delimiter} onChange={(event) => onDelimiter(event.target.value as Delimiter)}>
+        <Select
+          value={delimiter}
+          onChange={(event) => onDelimiter(event.target.value as Delimiter)}
+        >
           {Object.entries(DELIMITERS).map(([value, words]) => (
             <option key={value} value={value}>
               {words}

@@ -9,7 +9,7 @@ interface KeptFileProps {
 /** An original file, kept byte for byte, with what proves it. */
 export function KeptFile({ file }: KeptFileProps) {
   return (
-    <div className="border-rule flex flex-wrap items-start justify-between gap-x-4 gap-y-2 border-b py-2 text-sm">
+    <div className="flex flex-wrap items-start justify-between gap-x-4 gap-y-2 border-b border-rule py-2 text-sm">
       <div className="min-w-0">
         <p>
           <span className="font-medium break-all">{file.name}</span>{' '}
@@ -17,9 +17,15 @@ export function KeptFile({ file }: KeptFileProps) {
             {byteWords(file.byteLength)}
           </span>
         </p>
-        <p className="text-ink-3 figures text-xs break-all">SHA-256 {file.sha256}</p>
+        <p className="figures text-xs break-all text-ink-3">SHA-256 {file.sha256}</p>
       </div>
-      <ButtonLink size="small" href={`/api/files/${file.id}`} prefetch={false} download={file.name} aria-label={`Download ${file.name}`}>
+      <ButtonLink
+        size="small"
+        href={`/api/files/${file.id}`}
+        prefetch={false}
+        download={file.name}
+        aria-label={`Download ${file.name}`}
+      >
         Download
       </ButtonLink>
     </div>

@@ -21,7 +21,7 @@ export function ProblemList({ problems, mayLeaveOut, onLeaveOut }: ProblemListPr
   const lines = [...new Set(removable.map(({ line }) => line))];
   const offered = new Set<string>();
   return (
-    <section aria-label="Lines to mend" className="border-coral-ink border-l-2 pl-3">
+    <section aria-label="Lines to mend" className="border-l-2 border-coral-ink pl-3">
       <ul className="space-y-2 text-sm">
         {problems.slice(0, MOST_LISTED).map((problem, index) => {
           const place = `${problem.fileName}:${problem.line}`;
@@ -40,13 +40,15 @@ export function ProblemList({ problems, mayLeaveOut, onLeaveOut }: ProblemListPr
         })}
       </ul>
       {problems.length > MOST_LISTED && (
-        <p className="text-ink-2 mt-2 text-sm">
+        <p className="mt-2 text-sm text-ink-2">
           … and {(problems.length - MOST_LISTED).toLocaleString('en')} more like these.
         </p>
       )}
       {lines.length > 1 && (
         <Button className="mt-2" size="small" onClick={() => onLeaveOut(removable)}>
-          {lines.length <= MOST_NAMED_AT_ONCE ? `Leave out lines ${lines.join(', ')}` : `Leave out all ${lines.length} bad lines`}
+          {lines.length <= MOST_NAMED_AT_ONCE
+            ? `Leave out lines ${lines.join(', ')}`
+            : `Leave out all ${lines.length} bad lines`}
         </Button>
       )}
     </section>

@@ -34,7 +34,7 @@ export function SaveBar({ label, blocked, saving, refusal, onSave }: SaveBarProp
         >
           {saving ? 'Saving…' : label}
         </Button>
-        <p id={reasonId} role="status" className="text-ink-2 text-sm">
+        <p id={reasonId} role="status" className="text-sm text-ink-2">
           {blocked ?? ''}
         </p>
       </div>

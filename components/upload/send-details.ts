@@ -1,14 +1,18 @@
 import type { ChosenFile } from './chosen-file';
 
 export type Sent =
-  | { ok: true; id: string }
-  | { ok: false; message: string; fields: Record<string, string> };
+  { ok: true; id: string } | { ok: false; message: string; fields: Record<string, string> };
 
 /** Sends `details` as JSON and the files beside it; every outcome comes back as a value. */
-export function sendUpload(path: string, details: unknown, files: readonly ChosenFile[]): Promise<Sent> {
+export function sendUpload(
+  path: string,
+  details: unknown,
+  files: readonly ChosenFile[],
+): Promise<Sent> {
   const body = new FormData();
   body.set('details', JSON.stringify(details));
-  for (const file of files) body.append('file', new Blob([file.bytes], { type: 'text/plain' }), file.name);
+  for (const file of files)
+    body.append('file', new Blob([file.bytes], { type: 'text/plain' }), file.name);
   return send(path, { method: 'POST', body });
 }
 
@@ -20,7 +24,8 @@ export function sendJson(path: string, method: 'POST' | 'PATCH', details: unknow
   });
 }
 
-const NOT_REACHED = 'The server could not be reached. Nothing was stored and nothing here is lost; try again.';
+const NOT_REACHED =
+  'The server could not be reached. Nothing was stored and nothing here is lost; try again.';
 
 async function send(path: string, request: RequestInit): Promise<Sent> {
   let response: Response;
@@ -46,7 +51,9 @@ function refusal(answer: unknown, status: number): Sent {
       ? error.message
       : `The server answered with status ${status} and no reason. Nothing was stored and nothing here is lost.`;
   const fields = isObject(error.fields) ? error.fields : {};
-  const named = Object.entries(fields).filter((entry): entry is [string, string] => typeof entry[1] === 'string');
+  const named = Object.entries(fields).filter(
+    (entry): entry is [string, string] => typeof entry[1] === 'string',
+  );
   return { ok: false, message, fields: Object.fromEntries(named) };
 }
 

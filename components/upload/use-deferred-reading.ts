@@ -7,7 +7,10 @@ import { useEffect, useState } from 'react';
  * `reading` is true while the result at hand belongs to earlier inputs. Keep `compute` stable
  * (useCallback) for unchanged inputs: it runs once per identity.
  */
-export function useDeferredReading<Result>(compute: () => Result): { result: Result | null; reading: boolean } {
+export function useDeferredReading<Result>(compute: () => Result): {
+  result: Result | null;
+  reading: boolean;
+} {
   const [done, setDone] = useState<{ compute: () => Result; result: Result } | null>(null);
   useEffect(() => {
     // A timer after the frame: the browser paints first, then the thread is taken.

@@ -31,7 +31,13 @@ export default async function StoppingSetsPage({ searchParams }: PageProps<'/sto
         actions={!archived && mayAdd && sets.length > 0 && add}
       />
       <div className="grid gap-6 py-6">
-        {sets.length > 0 ? <StoppingList sets={sets} /> : archived ? <NoneArchived /> : <NoneYet action={mayAdd && add} />}
+        {sets.length > 0 ? (
+          <StoppingList sets={sets} />
+        ) : archived ? (
+          <NoneArchived />
+        ) : (
+          <NoneYet action={mayAdd && add} />
+        )}
         {!archived && (
           <p className="text-sm">
             <TextLink href="/stopping?archived=yes">Archived stopping sets</TextLink>
@@ -54,5 +60,11 @@ function NoneYet({ action }: { action: React.ReactNode }) {
 }
 
 function NoneArchived() {
-  return <EmptyState className="border-t-0 py-2" title="Nothing is archived" text="A set that is archived leaves the lists and can be taken back here." />;
+  return (
+    <EmptyState
+      className="border-t-0 py-2"
+      title="Nothing is archived"
+      text="A set that is archived leaves the lists and can be taken back here."
+    />
+  );
 }

@@ -18,7 +18,13 @@ let answer: () => Response;
 
 beforeEach(() => {
   // jsdom has no layout and so no ResizeObserver; nothing is drawn then, and the form does not need it.
-  vi.stubGlobal('ResizeObserver', class { observe() {} disconnect() {} });
+  vi.stubGlobal(
+    'ResizeObserver',
+    class {
+      observe() {}
+      disconnect() {}
+    },
+  );
   vi.stubGlobal('fetch', (path: string, { body }: { body: FormData }) => {
     requests.push({ path, body });
     return Promise.resolve(answer());
@@ -33,7 +39,8 @@ afterEach(() => {
 
 const show = () => render(<AddScanForm samples={[SAMPLE]} sampleId={SAMPLE.id} />);
 const save = () => screen.getByRole<HTMLButtonElement>('button', { name: 'Save scan' });
-const reasonOf = (button: HTMLElement) => document.getElementById(button.getAttribute('aria-describedby') ?? '')?.textContent;
+const reasonOf = (button: HTMLElement) =>
+  document.getElementById(button.getAttribute('aria-describedby') ?? '')?.textContent;
 
 async function choose(text: string, name = 'scan.csv') {
   const input = screen.getByLabelText(/Drop a scan file|Another file/);
@@ -51,7 +58,9 @@ describe('adding a scan from a file', () => {
   it('shows what was recognised and sends file and reading together', async () => {
     show();
     await choose(CLEAN);
-    expect((await screen.findByLabelText<HTMLSelectElement>('Between cells')).value).toBe('semicolon');
+    expect((await screen.findByLabelText<HTMLSelectElement>('Between cells')).value).toBe(
+      'semicolon',
+    );
     expect(screen.getByLabelText<HTMLSelectElement>('Decimal mark').value).toBe('comma');
     expect(save().disabled).toBe(false);
     fireEvent.change(screen.getByLabelText('Name'), { target: { value: '260 K, dark' } });
@@ -59,7 +68,11 @@ describe('adding a scan from a file', () => {
     await waitFor(() => expect(push).toHaveBeenCalledWith('/scans/new-scan'));
     const sent = requests[0]?.body;
     const details = JSON.parse(String(sent?.get('details'))) as Record<string, unknown>;
-    expect(details).toMatchObject({ sampleId: SAMPLE.id, meta: { name: '260 K, dark' }, reading: { delimiter: 'semicolon', decimal: 'comma' } });
+    expect(details).toMatchObject({
+      sampleId: SAMPLE.id,
+      meta: { name: '260 K, dark' },
+      reading: { delimiter: 'semicolon', decimal: 'comma' },
+    });
     const file = sent?.get('file');
     expect(file instanceof File && file.size).toBe(CLEAN.length);
   });
@@ -102,12 +115,24 @@ describe('adding a scan from a file', () => {
     const input = screen.getByLabelText(/Drop a scan file/);
     const large = new File([new Uint8Array(6 * 1024 * 1024)], 'large.csv');
     fireEvent.change(input, { target: { files: [large] } });
-    expect(await screen.findByText(/large\.csv has 6\.0 MB; expected at most 5\.0 MB/)).toBeDefined();
+    expect(
+      await screen.findByText(/large\.csv has 6\.0 MB; expected at most 5\.0 MB/),
+    ).toBeDefined();
     expect(save().disabled).toBe(true);
   });
 
   it('shows a refusal of the server and loses nothing', async () => {
-    answer = () => Response.json({ error: { code: 'invalid', message: 'Name: this sample has one of that name.', fields: { 'meta.name': 'Taken.' } } }, { status: 422 });
+    answer = () =>
+      Response.json(
+        {
+          error: {
+            code: 'invalid',
+            message: 'Name: this sample has one of that name.',
+            fields: { 'meta.name': 'Taken.' },
+          },
+        },
+        { status: 422 },
+      );
     show();
     await choose(CLEAN);
     fireEvent.change(screen.getByLabelText('Name'), { target: { value: 'dark' } });
@@ -147,7 +172,9 @@ describe('typing a scan', () => {
     const first = screen.getByRole('textbox', { name: 'energy, row 1' });
     fireEvent.paste(first, { clipboardData: { getData: () => '2\t0,7\t0,01\n4\t0,6\t0' } });
     expect(reasonOf(save())).toBe('One cell needs mending.');
-    fireEvent.change(screen.getByRole('textbox', { name: 'σ, row 2' }), { target: { value: '0.02' } });
+    fireEvent.change(screen.getByRole('textbox', { name: 'σ, row 2' }), {
+      target: { value: '0.02' },
+    });
     expect(save().disabled).toBe(false);
     fireEvent.change(screen.getByLabelText('Name'), { target: { value: 'typed' } });
     fireEvent.click(save());

@@ -13,8 +13,11 @@ const CLEAN = 'energy_keV,fraction,sigma\n2,0.742,0.004\n4,0.731,0.004\n6,0.690,
 const SWAPPED = 'sigma,fraction,energy_keV\n0.004,0.742,2\n0.004,0.731,4\n';
 const BROKEN = 'energy_keV,fraction,sigma\n2,0.742,0.004\n4,abc,0.004\n6,0.690,-1\n8,0.62,0.004\n';
 
-const preview = (text: string, change: Partial<ScanChoices> = {}, observable: 'fraction' | 'rate' = 'fraction') =>
-  previewScan(tableOf(text), { ...NO_CHOICES, ...change }, observable);
+const preview = (
+  text: string,
+  change: Partial<ScanChoices> = {},
+  observable: 'fraction' | 'rate' = 'fraction',
+) => previewScan(tableOf(text), { ...NO_CHOICES, ...change }, observable);
 
 describe('preview of a scan file', () => {
   it('is ready to send when every row reads', () => {
@@ -39,7 +42,9 @@ describe('preview of a scan file', () => {
 
   it('says which column is still missing or chosen twice', () => {
     expect(preview(CLEAN, { columns: { sigma: null } }).blocked).toBe('Choose the column of σ.');
-    expect(preview(CLEAN, { columns: { sigma: 1 } }).blocked).toBe('Column 2 is chosen twice; σ needs a column of its own.');
+    expect(preview(CLEAN, { columns: { sigma: 1 } }).blocked).toBe(
+      'Column 2 is chosen twice; σ needs a column of its own.',
+    );
   });
 
   it('is blocked by bad rows and free again once their lines are left out', () => {
@@ -64,16 +69,29 @@ describe('preview of a scan file', () => {
   });
 
   it('asks for the maximum asymmetry and takes blank for blank, never for zero', () => {
-    expect(preview(CLEAN, { amplitudes: { on: true, maximum: '', sigma: '0' } }).blocked).toContain('Write the maximum asymmetry');
-    expect(preview(CLEAN, { amplitudes: { on: true, maximum: '0.25', sigma: '' } }).blocked).toContain('Write σ of the maximum asymmetry');
-    expect(preview(CLEAN, { amplitudes: { on: true, maximum: '0.25x', sigma: '0' } }).blocked).toContain('Write the maximum asymmetry');
+    expect(preview(CLEAN, { amplitudes: { on: true, maximum: '', sigma: '0' } }).blocked).toContain(
+      'Write the maximum asymmetry',
+    );
+    expect(
+      preview(CLEAN, { amplitudes: { on: true, maximum: '0.25', sigma: '' } }).blocked,
+    ).toContain('Write σ of the maximum asymmetry');
+    expect(
+      preview(CLEAN, { amplitudes: { on: true, maximum: '0.25x', sigma: '0' } }).blocked,
+    ).toContain('Write the maximum asymmetry');
   });
 
   it('never applies amplitudes to a rate', () => {
-    expect(preview(CLEAN, { amplitudes: { on: true, maximum: '0.25', sigma: '0' } }, 'rate').sent?.asymmetry).toBeNull();
+    expect(
+      preview(CLEAN, { amplitudes: { on: true, maximum: '0.25', sigma: '0' } }, 'rate').sent
+        ?.asymmetry,
+    ).toBeNull();
   });
 
   it('converts eV when that is chosen', () => {
-    expect(preview('2000 0.7 0.01\n4000 0.6 0.01\n', { energyUnit: 'eV' }).reading?.points.map((point) => point.energyKeV)).toEqual([2, 4]);
+    expect(
+      preview('2000 0.7 0.01\n4000 0.6 0.01\n', { energyUnit: 'eV' }).reading?.points.map(
+        (point) => point.energyKeV,
+      ),
+    ).toEqual([2, 4]);
   });
 });

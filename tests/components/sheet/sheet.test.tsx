@@ -14,21 +14,43 @@ const COLUMNS = [
   { name: 'note', unit: '', numeric: false },
 ];
 
-function Grid({ lines = [], blank = 3, maxRows = 200 }: { lines?: SheetLine[]; blank?: number; maxRows?: number }) {
+function Grid({
+  lines = [],
+  blank = 3,
+  maxRows = 200,
+}: {
+  lines?: SheetLine[];
+  blank?: number;
+  maxRows?: number;
+}) {
   const sheet = useSheet(() => sheetContent(lines, 4, blank), 4);
   const typed = useMemo(() => readTypedPoints(sheet.content.rows, 'fraction'), [sheet.content]);
   return (
     <>
-      <Sheet caption="Points" columns={COLUMNS} sheet={sheet} errors={typed.errors} maxRows={maxRows} />
+      <Sheet
+        caption="Points"
+        columns={COLUMNS}
+        sheet={sheet}
+        errors={typed.errors}
+        maxRows={maxRows}
+      />
       <pre>{JSON.stringify(typed.points)}</pre>
     </>
   );
 }
 
-const cell = (column: string, row: number) => screen.getByRole<HTMLInputElement>('textbox', { name: `${column}, row ${row}` });
-const points = () => JSON.parse(screen.getByText(/^\[/, { selector: 'pre' }).textContent ?? '') as { energyKeV: number; value: number; enabled: boolean }[];
-const paste = (target: HTMLElement, text: string) => fireEvent.paste(target, { clipboardData: { getData: () => text } });
-const type = (target: HTMLElement, value: string) => fireEvent.change(target, { target: { value } });
+const cell = (column: string, row: number) =>
+  screen.getByRole<HTMLInputElement>('textbox', { name: `${column}, row ${row}` });
+const points = () =>
+  JSON.parse(screen.getByText(/^\[/, { selector: 'pre' }).textContent ?? '') as {
+    energyKeV: number;
+    value: number;
+    enabled: boolean;
+  }[];
+const paste = (target: HTMLElement, text: string) =>
+  fireEvent.paste(target, { clipboardData: { getData: () => text } });
+const type = (target: HTMLElement, value: string) =>
+  fireEvent.change(target, { target: { value } });
 
 describe('pasting a block', () => {
   it('spreads cells from a spreadsheet, with decimal commas, and adds the rows that are missing', () => {
@@ -103,7 +125,11 @@ describe('cells that need mending', () => {
     render(<Grid />);
     paste(cell('energy', 1), '2\t0.7\t0.01\n3\tabc\t-0.01');
     const list = screen.getByRole('list', { name: 'cells to mend' });
-    expect(within(list).getAllByRole('listitem').map((item) => item.textContent)).toEqual([
+    expect(
+      within(list)
+        .getAllByRole('listitem')
+        .map((item) => item.textContent),
+    ).toEqual([
       'Row 2, fraction: expected a number, found “abc”.',
       'Row 2, σ: expected a number above 0, found -0.01.',
     ]);

@@ -14,7 +14,13 @@ const requests: FormData[] = [];
 
 beforeEach(() => {
   // jsdom has no layout and so no ResizeObserver; nothing is drawn then, and the form does not need it.
-  vi.stubGlobal('ResizeObserver', class { observe() {} disconnect() {} });
+  vi.stubGlobal(
+    'ResizeObserver',
+    class {
+      observe() {}
+      disconnect() {}
+    },
+  );
   vi.stubGlobal('fetch', (_path: string, { body }: { body: FormData }) => {
     requests.push(body);
     return Promise.resolve(Response.json({ id: 'new-set' }, { status: 201 }));
@@ -29,7 +35,9 @@ const save = () => screen.getByRole<HTMLButtonElement>('button', { name: 'Save s
 
 async function choose(files: Record<string, string>) {
   const input = screen.getByLabelText(/Drop stopping profiles|Add or replace/);
-  fireEvent.change(input, { target: { files: Object.entries(files).map(([name, text]) => new File([text], name)) } });
+  fireEvent.change(input, {
+    target: { files: Object.entries(files).map(([name, text]) => new File([text], name)) },
+  });
   await screen.findByText(Object.keys(files)[0] ?? '');
 }
 
@@ -44,12 +52,18 @@ describe('adding a stopping set', () => {
     await waitFor(() => expect(save().disabled).toBe(false));
     expect(screen.getByRole('region', { name: 'Moments' })).toBeDefined();
     fireEvent.change(screen.getByLabelText('Name'), { target: { value: 'SiC, 1 nm bins' } });
-    fireEvent.change(screen.getByLabelText('Layer stack'), { target: { value: '25 nm SiO₂ on 4H-SiC' } });
+    fireEvent.change(screen.getByLabelText('Layer stack'), {
+      target: { value: '25 nm SiO₂ on 4H-SiC' },
+    });
     fireEvent.click(save());
     await waitFor(() => expect(push).toHaveBeenCalledWith('/stopping/new-set'));
-    const names = requests[0]?.getAll('file').map((file) => (file instanceof File ? file.name : ''));
+    const names = requests[0]
+      ?.getAll('file')
+      .map((file) => (file instanceof File ? file.name : ''));
     expect(names).toEqual(['2keV.txt', 'second.txt']);
-    const details = JSON.parse(String(requests[0]?.get('details'))) as { reading: { files: { energyKeV: number | null }[] } };
+    const details = JSON.parse(String(requests[0]?.get('details'))) as {
+      reading: { files: { energyKeV: number | null }[] };
+    };
     expect(details.reading.files.map(({ energyKeV }) => energyKeV)).toEqual([null, 8]);
   });
 

@@ -27,7 +27,9 @@ import { archiveScanAction, restoreScanAction } from '../actions';
 /** Title and page ask for the same scan; it is read once. */
 const readOne = cache((id: string) => read(readScan, { id }));
 
-export async function generateMetadata({ params }: PageProps<'/scans/[scanId]'>): Promise<Metadata> {
+export async function generateMetadata({
+  params,
+}: PageProps<'/scans/[scanId]'>): Promise<Metadata> {
   const { scanId } = await params;
   return { title: (await readOne(scanId)).name };
 }
@@ -36,7 +38,9 @@ export default async function ScanPage({ params }: PageProps<'/scans/[scanId]'>)
   const { scanId } = await params;
   const [viewer, scan] = await Promise.all([readViewer(), readOne(scanId)]);
   const [fits, sets] = await Promise.all([read(listFits, { scanId }), read(listStoppingSets)]);
-  const energiesKeV = scan.points.filter(({ enabled }) => enabled).map(({ energyKeV }) => energyKeV);
+  const energiesKeV = scan.points
+    .filter(({ enabled }) => enabled)
+    .map(({ energyKeV }) => energyKeV);
   const mayEdit = mayAct(viewer, 'edit data');
   const archived = scan.archivedAt !== null;
   const off = scan.points.length - energiesKeV.length;
@@ -65,11 +69,20 @@ export default async function ScanPage({ params }: PageProps<'/scans/[scanId]'>)
             <>
               {!archived && <ButtonLink href={`/scans/${scan.id}/edit`}>Edit</ButtonLink>}
               {archived ? (
-                <ActionButton action={restoreScanAction} input={{ id: scan.id }} pendingLabel="Restoring…">
+                <ActionButton
+                  action={restoreScanAction}
+                  input={{ id: scan.id }}
+                  pendingLabel="Restoring…"
+                >
                   Restore
                 </ActionButton>
               ) : (
-                <ActionButton variant="quiet" action={archiveScanAction} input={{ id: scan.id }} pendingLabel="Archiving…">
+                <ActionButton
+                  variant="quiet"
+                  action={archiveScanAction}
+                  input={{ id: scan.id }}
+                  pendingLabel="Archiving…"
+                >
                   Archive
                 </ActionButton>
               )}
@@ -85,28 +98,51 @@ export default async function ScanPage({ params }: PageProps<'/scans/[scanId]'>)
       <div className="grid gap-x-10 gap-y-8 py-6 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <ScanFigure points={scan.points} observable={scan.observable} title="Energy scan" />
         <section aria-labelledby="points-heading" className="min-w-0">
-          <h2 id="points-heading" className="mb-2">Points</h2>
+          <h2 id="points-heading" className="mb-2">
+            Points
+          </h2>
           <PointsTable points={scan.points} observable={scan.observable} />
           {scan.asymmetryScaleError !== null && (
-            <p className="text-ink-2 mt-2 text-sm">
-              Fractions from asymmetry amplitudes: the maximum asymmetry is known to {asEntered(Number((scan.asymmetryScaleError * 100).toPrecision(3)))} %,
-              which scales all points together and is not part of their σ.
+            <p className="mt-2 text-sm text-ink-2">
+              Fractions from asymmetry amplitudes: the maximum asymmetry is known to{' '}
+              {asEntered(Number((scan.asymmetryScaleError * 100).toPrecision(3)))} %, which scales
+              all points together and is not part of their σ.
             </p>
           )}
         </section>
-        <section aria-labelledby="fits-heading" className="grid min-w-0 content-start gap-4 lg:col-span-2">
+        <section
+          aria-labelledby="fits-heading"
+          className="grid min-w-0 content-start gap-4 lg:col-span-2"
+        >
           <h2 id="fits-heading">Fits</h2>
-          {fits.length > 0 ? <ScanFits fits={fits} /> : <p className="text-ink-2 text-sm">No fit of this scan yet.</p>}
-          {mayAct(viewer, 'fit') && !archived && <FitThisScan scanId={scan.id} energiesKeV={energiesKeV} sets={sets} />}
+          {fits.length > 0 ? (
+            <ScanFits fits={fits} />
+          ) : (
+            <p className="text-sm text-ink-2">No fit of this scan yet.</p>
+          )}
+          {mayAct(viewer, 'fit') && !archived && (
+            <FitThisScan scanId={scan.id} energiesKeV={energiesKeV} sets={sets} />
+          )}
         </section>
-        <section aria-labelledby="origin-heading" className="grid min-w-0 content-start gap-2 lg:col-span-2">
+        <section
+          aria-labelledby="origin-heading"
+          className="grid min-w-0 content-start gap-2 lg:col-span-2"
+        >
           <h2 id="origin-heading">Where it comes from</h2>
-          {scan.file ? <KeptFile file={scan.file} /> : <p className="text-sm">The points were typed in; there is no original file.</p>}
-          <p className="text-ink-3 figures text-xs break-all">SHA-256 of the points {scan.pointsSha256}</p>
-          <p className="text-ink-2 text-sm">
+          {scan.file ? (
+            <KeptFile file={scan.file} />
+          ) : (
+            <p className="text-sm">The points were typed in; there is no original file.</p>
+          )}
+          <p className="figures text-xs break-all text-ink-3">
+            SHA-256 of the points {scan.pointsSha256}
+          </p>
+          <p className="text-sm text-ink-2">
             Added by {scan.createdBy}, <Moment at={scan.createdAt} />
           </p>
-          {scan.notes !== '' && <p className="prose-measure mt-2 whitespace-pre-wrap">{scan.notes}</p>}
+          {scan.notes !== '' && (
+            <p className="mt-2 prose-measure whitespace-pre-wrap">{scan.notes}</p>
+          )}
         </section>
       </div>
     </>

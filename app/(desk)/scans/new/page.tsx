@@ -34,10 +34,17 @@ export default async function AddScanPage({ searchParams }: PageProps<'/scans/ne
           className="border-t-0"
           title="A scan belongs to a sample, and there is none yet"
           text="Describe the wafer first: material, carriers, doping and cap layer."
-          action={<ButtonLink variant="primary" href="/samples/new">Add a sample</ButtonLink>}
+          action={
+            <ButtonLink variant="primary" href="/samples/new">
+              Add a sample
+            </ButtonLink>
+          }
         />
       ) : (
-        <AddScanForm samples={samples.map(({ id, name }) => ({ id, name }))} sampleId={sample?.id ?? null} />
+        <AddScanForm
+          samples={samples.map(({ id, name }) => ({ id, name }))}
+          sampleId={sample?.id ?? null}
+        />
       )}
     </>
   );

@@ -21,7 +21,9 @@ import { archiveStoppingSetAction, restoreStoppingSetAction } from '../actions';
 /** Title and page ask for the same set; it is read once. */
 const readSet = cache((id: string) => read(readStoppingSet, { id }));
 
-export async function generateMetadata({ params }: PageProps<'/stopping/[setId]'>): Promise<Metadata> {
+export async function generateMetadata({
+  params,
+}: PageProps<'/stopping/[setId]'>): Promise<Metadata> {
   const { setId } = await params;
   return { title: (await readSet(setId)).name };
 }
@@ -42,17 +44,30 @@ export default async function StoppingSetPage({ params }: PageProps<'/stopping/[
             {set.invented && <InventedMark />}
           </>
         }
-        meta={[set.layerStack, energySpan(set.energiesKeV), `${set.bins.toLocaleString('en')} depth bins`]}
+        meta={[
+          set.layerStack,
+          energySpan(set.energiesKeV),
+          `${set.bins.toLocaleString('en')} depth bins`,
+        ]}
         actions={
           mayEdit && (
             <>
               {!archived && <ButtonLink href={`/stopping/${set.id}/edit`}>Edit</ButtonLink>}
               {archived ? (
-                <ActionButton action={restoreStoppingSetAction} input={{ id: set.id }} pendingLabel="Restoring…">
+                <ActionButton
+                  action={restoreStoppingSetAction}
+                  input={{ id: set.id }}
+                  pendingLabel="Restoring…"
+                >
                   Restore
                 </ActionButton>
               ) : (
-                <ActionButton variant="quiet" action={archiveStoppingSetAction} input={{ id: set.id }} pendingLabel="Archiving…">
+                <ActionButton
+                  variant="quiet"
+                  action={archiveStoppingSetAction}
+                  input={{ id: set.id }}
+                  pendingLabel="Archiving…"
+                >
                   Archive
                 </ActionButton>
               )}
@@ -62,7 +77,8 @@ export default async function StoppingSetPage({ params }: PageProps<'/stopping/[
       />
       {archived && (
         <Notice kind="information" title="This stopping set is archived" className="mt-5">
-          It is out of the lists; fits made with it stay as they are.{mayEdit && ' Restore takes it back.'}
+          It is out of the lists; fits made with it stay as they are.
+          {mayEdit && ' Restore takes it back.'}
         </Notice>
       )}
       <div className="grid gap-8 py-6">
@@ -73,11 +89,15 @@ export default async function StoppingSetPage({ params }: PageProps<'/stopping/[
           {set.files.map((file) => (
             <KeptFile key={file.id} file={file} />
           ))}
-          <p className="text-ink-3 figures text-xs break-all">SHA-256 of the profiles {set.sha256}</p>
-          <p className="text-ink-2 text-sm">
+          <p className="figures text-xs break-all text-ink-3">
+            SHA-256 of the profiles {set.sha256}
+          </p>
+          <p className="text-sm text-ink-2">
             Added by {set.createdBy}, <Moment at={set.createdAt} />
           </p>
-          {set.notes !== '' && <p className="prose-measure mt-2 whitespace-pre-wrap">{set.notes}</p>}
+          {set.notes !== '' && (
+            <p className="mt-2 prose-measure whitespace-pre-wrap">{set.notes}</p>
+          )}
         </section>
       </div>
     </>

@@ -13,7 +13,10 @@ export default async function AddStoppingPage() {
   const viewer = await readViewer();
   return (
     <>
-      <PageHeader breadcrumb={[{ label: 'Stopping sets', href: '/stopping' }]} title="Add a stopping set" />
+      <PageHeader
+        breadcrumb={[{ label: 'Stopping sets', href: '/stopping' }]}
+        title="Add a stopping set"
+      />
       {mayAct(viewer, 'edit data') ? (
         <AddStoppingForm />
       ) : (

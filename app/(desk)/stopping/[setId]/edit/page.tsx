@@ -31,7 +31,9 @@ export default async function EditStoppingPage({ params }: PageProps<'/stopping/
         {mayAct(viewer, 'edit data') ? (
           <EditStoppingForm set={row} action={editStoppingSetAction} />
         ) : (
-          <Notice kind="information">Analysts and owners change stopping sets. Your role reads them.</Notice>
+          <Notice kind="information">
+            Analysts and owners change stopping sets. Your role reads them.
+          </Notice>
         )}
       </div>
     </>
