@@ -28,3 +28,54 @@ export { runChecks } from './checks/run-checks';
 export { compareFits, type Comparison, type ComparisonRow } from './compare/compare-fits';
 export { zeroWidthTest, type ZeroWidthTest } from './compare/zero-width-test';
 export { simulateScan, type Simulation } from './simulate/simulate-scan';
+export type { Estimate } from './electrostatics/estimate';
+export {
+  checkSemiconductor,
+  type Semiconductor,
+  type Sourced,
+} from './electrostatics/semiconductor';
+export { MATERIALS, type MaterialName } from './electrostatics/materials';
+export { gapEv } from './electrostatics/gap';
+export {
+  intrinsicConcentration,
+  type IntrinsicConcentration,
+} from './electrostatics/intrinsic-concentration';
+export { bulkCarriers } from './electrostatics/bulk-carriers';
+export { fermiPotential, type FermiPotentialInput } from './electrostatics/fermi-potential';
+export { debyeLengthNm, type DebyeLengthInput } from './electrostatics/debye-length';
+export { depletionWidthNm, type DepletionWidthInput } from './electrostatics/depletion-width';
+export { maximumDepletionWidthNm } from './electrostatics/maximum-depletion-width';
+export {
+  edgeElectrostatics,
+  type EdgeElectrostatics,
+  type EdgeElectrostaticsInput,
+} from './electrostatics/edge-electrostatics';
+export { surfaceRegime, type SurfaceRegime } from './electrostatics/surface-regime';
+export { surfaceCharge, type SurfaceCharge } from './electrostatics/surface-charge';
+export type { BandBendingInput } from './electrostatics/band-bending-input';
+export { bandBendingProfile, type BandBendingProfile } from './electrostatics/band-bending-profile';
+export { HYPERFINE_MHZ } from './charge-cycle/muon-constants';
+export { breitRabiLines, diamagneticMHz, type MuoniumLine } from './charge-cycle/muonium-lines';
+export { fitTemperatureScans } from './charge-cycle/joint-fit';
+export type {
+  JointFitAnswer,
+  JointFitOptions,
+  JointFitOutcome,
+  JointParameter,
+  JointParameterName,
+  JointResidual,
+} from './charge-cycle/joint-fit-answer';
+export type {
+  JointFitInput,
+  TemperaturePoint,
+  TemperatureScan,
+} from './charge-cycle/joint-fit-input';
+export {
+  captureRateScan,
+  type CaptureRateScan,
+  type CaptureRateScanOutcome,
+} from './charge-cycle/capture-rate-scan';
+export {
+  simulateTemperatureScans,
+  type TemperatureScanTruth,
+} from './charge-cycle/simulate-temperature-scans';

@@ -1,5 +1,5 @@
 import type { ScanPoint } from '../types';
-import type { JointFitAnswer } from './joint-fit';
+import type { JointFitAnswer } from './joint-fit-answer';
 
 /** A capture-rate scan with the covariance of its points, ready to be the data of a profile fit. */
 export interface CaptureRateScan {

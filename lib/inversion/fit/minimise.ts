@@ -1,7 +1,7 @@
 import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
-import { openWidths } from './widths';
+import { OPENED_WIDTHS } from './widths';
 import { refine, type RefineResult, type RefineScratch } from './refine';
 
 /** Index of the edge whose borders χ² has kinks at. */
@@ -51,7 +51,11 @@ export function minimise(
   return { ...result, converged: true, predictedReduction: Math.min(result.predictedReduction, 0) };
 }
 
-/** A width that came to rest at zero is tried once more from beside it. */
+/**
+ * A width that came to rest at zero may have to leave again: Φ has no slope there. Where the other parameters are at their
+ * best, the change of their minimum with a small width is the change at fixed others (envelope theorem), so a few widths are
+ * tried as they stand, and the best is followed if it lies lower.
+ */
 function leaveZeroWidth(
   problem: Problem,
   theta: Float64Array,
@@ -60,15 +64,30 @@ function leaveZeroWidth(
   options: { maxIterations: number; tolerance: number },
   result: RefineResult,
 ): RefineResult {
-  if (!problem.model.trial.widths.some((k) => !held[k] && theta[k] === 0)) return result;
-  inner.set(theta);
-  openWidths(problem.model, inner, held);
-  const opened = refine(problem, inner, held, scratch, options);
-  if (opened.chiSquare < result.chiSquare) {
-    theta.set(inner);
-    return { ...opened, iterations: opened.iterations + result.iterations };
+  const { trial, upper } = problem.model;
+  let lowest = result.chiSquare;
+  let width = -1;
+  let opened = 0;
+  let tried = false;
+  for (const k of trial.widths) {
+    if (held[k] || theta[k]! > 0) continue;
+    tried = true;
+    for (const share of OPENED_WIDTHS) {
+      inner.set(theta);
+      inner[k] = share * upper[k]!;
+      const chiSquare = evaluate(problem, inner, held);
+      if (chiSquare >= lowest) continue;
+      lowest = chiSquare;
+      width = k;
+      opened = share * upper[k]!;
+    }
   }
-  evaluate(problem, theta, held);
+  if (width >= 0) {
+    theta[width] = opened;
+    const followed = refine(problem, theta, held, scratch, options);
+    return { ...followed, iterations: followed.iterations + result.iterations };
+  }
+  if (tried) evaluate(problem, theta, held);
   return result;
 }
 

@@ -1,7 +1,7 @@
 import type { Model } from './model';
 
-/** A width to begin a polish with, as a share of its range: below the bins of any stopping file that shows it. */
-const OPENED = 0.006;
+/** Widths to leave zero by, as shares of the range: the first is about a bin of a usual stopping file. */
+export const OPENED_WIDTHS = [0.006, 0.02, 0.06] as const;
 
 /**
  * At width zero the derivative by the width vanishes, so a polish that arrives there, or begins there, never leaves again.
@@ -10,6 +10,6 @@ const OPENED = 0.006;
 export function openWidths({ trial, upper }: Model, theta: Float64Array, held: Uint8Array): void {
   for (const k of trial.widths) {
     if (held[k] || theta[k]! > 0) continue;
-    theta[k] = OPENED * upper[k]!;
+    theta[k] = OPENED_WIDTHS[0] * upper[k]!;
   }
 }

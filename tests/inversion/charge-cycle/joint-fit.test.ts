@@ -1,11 +1,11 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { captureRateScan } from '@/lib/inversion/charge-cycle/capture-rate-scan';
-import {
-  fitTemperatureScans,
-  type JointFitAnswer,
-  type JointFitOptions,
-} from '@/lib/inversion/charge-cycle/joint-fit';
+import { fitTemperatureScans } from '@/lib/inversion/charge-cycle/joint-fit';
+import type {
+  JointFitAnswer,
+  JointFitOptions,
+} from '@/lib/inversion/charge-cycle/joint-fit-answer';
 import type { JointFitInput } from '@/lib/inversion/charge-cycle/joint-fit-input';
 import { jointProblem, whiten } from '@/lib/inversion/charge-cycle/joint-problem';
 import { simulateTemperatureScans } from '@/lib/inversion/charge-cycle/simulate-temperature-scans';

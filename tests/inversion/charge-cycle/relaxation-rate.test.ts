@@ -96,6 +96,20 @@ describe('exchange matrix', () => {
     expect(Math.abs(mode.ratePerUs / 110 - 1)).toBeLessThan(1e-3);
   });
 
+  it('the diamagnetic line is the mode with the largest share of its signal, far beyond the usual ranges too', () => {
+    for (const fieldMt of [0.5, 10, 100]) {
+      const cycle = chargeCycle(GE, fieldMt);
+      for (const capturePerUs of [0.1, 300, 3000, 3e4]) {
+        for (const ionisationPerUs of [3, 178, 1780, 1.78e4, 1e6]) {
+          const modes = exchangeModes(cycle, capturePerUs, ionisationPerUs);
+          const largest = Math.max(...modes.map(({ amplitude }) => amplitude));
+          const mode = diamagneticMode(cycle, capturePerUs, ionisationPerUs);
+          expect(mode.amplitude / largest).toBeCloseTo(1, 9);
+        }
+      }
+    }
+  });
+
   it('without ionisation every capture is final: the diamagnetic line decays with Λ_c', () => {
     // What comes back in one muon life is Λ_i/Δω of it: 1e-6.
     const { ratePerUs } = exchangeRate(chargeCycle(GE, 100), 20, 1e-3);

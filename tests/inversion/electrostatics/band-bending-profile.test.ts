@@ -116,6 +116,21 @@ describe('band bending in its limits', () => {
     expect(above.minorityPerCm3At(0)).toBeCloseTo(1e16 * Math.exp(0.1), -10);
   });
 
+  it('is n-type with bands up as it is p-type with bands down: Poisson with the signs of n-type holds', () => {
+    // ψ″ = −(q/ε)(N + p₀e^(−ψ/kT) − N e^(ψ/kT)) with ψ = −φ, in Debye lengths: differences of what the profile gives.
+    const profile = bandBendingProfile(bulk(15, 13.4));
+    const h = 0.01 * profile.debyeLengthNm;
+    for (const depthNm of [20, 60, 120, 200]) {
+      const psi = (x: number): number => -profile.bandBendingEvAt(x) / KT;
+      const bend = (psi(depthNm + h) - 2 * psi(depthNm) + psi(depthNm - h)) / 1e-4;
+      const holes = profile.minorityPerCm3At(depthNm) / 1e16;
+      const electrons = profile.majorityPerCm3At(depthNm) / 1e16;
+      const donors = 1 - Math.exp(-2 * 13.4);
+      // Second differences at h = 0.01: h²/12 and rounding of 15/h² are below 1e-4.
+      expect(Math.abs(bend + (holes - electrons + donors))).toBeLessThan(1e-4);
+    }
+  });
+
   it('is flat when nothing bends it', () => {
     const profile = bandBendingProfile(bulk(0, 13.4));
     expect(profile.bandBendingEvAt(10)).toBe(0);
