@@ -18,7 +18,15 @@ interface FitBarProps {
 }
 
 /** Fit and Compare all, with what is under way below them. The button that fits is the form's own, so Enter fits, too. */
-export function FitBar({ fit, outOfDate, obstacle, loading, comparing, onCompare }: FitBarProps) {
+export function FitBar({
+  fit,
+  outOfDate,
+  obstacle,
+  ready,
+  loading,
+  comparing,
+  onCompare,
+}: FitBarProps) {
   const blocked = !ready;
   const problem = obstacle ?? fit.refusal?.message ?? null;
   return (
