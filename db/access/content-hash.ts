@@ -1,7 +1,7 @@
 import type { ScanPoint, StoppingProfile } from '@/lib/inversion/index';
-import { createHash } from 'node:crypto';
 
 import { canonicalJson } from './canonical-json';
+import { toBlob } from './float-blob';
 import { sha256 } from './sha256';
 
 /** SHA-256 of what a fit sees of the points: energy, value, σ and whether each is switched on. */
@@ -15,12 +15,16 @@ export function pointsSha256(points: readonly ScanPoint[]): string {
   return sha256(canonicalJson(seen));
 }
 
-/** SHA-256 of the profiles in ascending energy, one at a time: a large set never stands in memory as text. */
+/**
+ * SHA-256 of the profiles in ascending energy: of canonical JSON in which edges and masses stand as
+ * the hashes of their little-endian 64-bit floats. As text, millions of numbers would take seconds.
+ */
 export function stoppingSha256(profiles: readonly StoppingProfile[]): string {
-  const hash = createHash('sha256');
-  for (const { energyKeV, edgesNm, mass, lostShare } of profiles) {
-    const plain = { energyKeV, edgesNm: [...edgesNm], mass: [...mass], lostShare };
-    hash.update(canonicalJson(plain)).update('\n');
-  }
-  return hash.digest('hex');
+  const seen = profiles.map(({ energyKeV, edgesNm, mass, lostShare }) => ({
+    energyKeV,
+    edgesSha256: sha256(toBlob(edgesNm)),
+    massSha256: sha256(toBlob(mass)),
+    lostShare,
+  }));
+  return sha256(canonicalJson(seen));
 }

@@ -56,6 +56,7 @@ export async function saveFit(ctx: Context, input: unknown): Promise<{ id: strin
     ),
   };
   await transaction(ctx, async (tx) => {
+    if (wanted.parentFitId !== null) await ownedFit(tx, viewer.teamId, wanted.parentFitId);
     await tx.insert(fits).values({
       ...wanted,
       ...computed,
@@ -80,7 +81,6 @@ export async function saveFit(ctx: Context, input: unknown): Promise<{ id: strin
 interface Named {
   scanId: string;
   stoppingSetId: string;
-  parentFitId: string | null;
 }
 
 async function ownedInputs(db: Handle, teamId: string, named: Named) {
@@ -94,7 +94,6 @@ async function ownedInputs(db: Handle, teamId: string, named: Named) {
     .from(stoppingSets)
     .where(and(eq(stoppingSets.id, named.stoppingSetId), eq(stoppingSets.teamId, teamId)));
   if (set === undefined) throw new AppError('not_found', 'There is no such stopping set.');
-  if (named.parentFitId !== null) await ownedFit(db, teamId, named.parentFitId);
   return { scan, set };
 }
 

@@ -2,6 +2,7 @@ import { audit } from '@/db/access/audit';
 import { stoppingSha256 } from '@/db/access/content-hash';
 import type { Context, Handle } from '@/db/access/context';
 import { storeFile } from '@/db/access/file/store-file';
+import { toBlob } from '@/db/access/float-blob';
 import { parse } from '@/db/access/parse';
 import { allow } from '@/db/access/policy';
 import { transaction } from '@/db/access/transaction';
@@ -12,13 +13,12 @@ import type { StoppingSet } from '@/lib/inversion/index';
 import { createStoppingSetSchema } from '@/lib/schemas/stopping-set';
 import { randomUUID } from 'node:crypto';
 
-import { toBlob } from './float-blob';
 import { readUploadedSet } from './read-uploaded-set';
 
 export async function createStoppingSet(ctx: Context, input: unknown): Promise<{ id: string }> {
   const viewer = allow(ctx, 'edit data');
   const { meta, reading, files } = parse(createStoppingSetSchema, input);
-  const { set, warnings } = readUploadedSet({ reading, files });
+  const { set, warnings } = await readUploadedSet({ reading, files });
   const id = randomUUID();
   await transaction(ctx, async (tx) => {
     await tx.insert(stoppingSets).values({

@@ -1,9 +1,8 @@
 import type { Handle } from '@/db/access/context';
+import { fromBlob } from '@/db/access/float-blob';
 import { stoppingProfiles } from '@/db/schema/stopping-profiles';
 import type { StoppingSet } from '@/lib/inversion/index';
 import { asc, eq } from 'drizzle-orm';
-
-import { fromBlob } from './float-blob';
 
 /** The profiles exactly as they were stored. The caller has checked whose set it is. */
 export async function loadStoppingSet(db: Handle, stoppingSetId: string): Promise<StoppingSet> {

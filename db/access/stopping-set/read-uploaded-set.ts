@@ -7,25 +7,28 @@ import { readStoppingFiles } from '@/lib/files/stopping-file';
 import type { Table } from '@/lib/files/table';
 import type { StoppingSet } from '@/lib/inversion/index';
 import type { createStoppingSetSchema } from '@/lib/schemas/stopping-set';
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { z } from 'zod';
 
 type Upload = Pick<z.output<typeof createStoppingSetSchema>, 'reading' | 'files'>;
 
 /** The profiles in the uploaded files, read again from their bytes, or a refusal that names every fault. */
-export function readUploadedSet({ reading, files }: Upload): {
-  set: StoppingSet;
-  warnings: string[];
-} {
+export async function readUploadedSet({
+  reading,
+  files,
+}: Upload): Promise<{ set: StoppingSet; warnings: string[] }> {
   if (reading.files.length !== files.length)
     throw new AppError('invalid', `Expected ${reading.files.length} files, found ${files.length}.`);
   const problems: FileProblem[] = twinNames(files.map(({ name }) => name));
   const tables: Table[] = [];
-  files.forEach(({ name, bytes }, index) => {
+  for (const [index, { name, bytes }] of files.entries()) {
     const { delimiter, decimal } = reading.files[index] ?? {};
     const read = readTable(name, bytes, { delimiter, decimal });
     if (read.ok) tables.push(read.table);
     else problems.push(...read.problems);
-  });
+    // Twenty megabytes take a while to read: others get their turn between files.
+    await nextTurn();
+  }
   if (problems.length > 0) throw fileRefusal(problems);
 
   const found = readStoppingFiles(tables, {
