@@ -50,10 +50,17 @@ function roundStep(atLeast: number): number {
   return ([1, 2, 5].find((factor) => factor * power >= atLeast) ?? 10) * power;
 }
 
-/** Where on the page the thing stands that a comment points at; null for the whole fit. */
+/** Where on the page the thing stands that a comment points at, lit where a figure can do that; null for the whole fit. */
 export function targetAnchor(value: string): string | null {
   if (value.startsWith('check ')) return `#check-${value.slice('check '.length)}`;
-  if (value.startsWith('point ')) return '#scan';
+  if (value.startsWith('point ')) return `?about=${encodeURIComponent(value)}#scan`;
   if (value.startsWith('depth ')) return '#depth';
   return null;
+}
+
+/** The energy (keV) that an address wants lit: "point 14 keV" gives 14. */
+export function litEnergyKeV(about: string | string[] | undefined): number | null {
+  const energy = typeof about === 'string' ? /^point (\S+) keV$/.exec(about)?.[1] : undefined;
+  const value = Number(energy);
+  return energy !== undefined && Number.isFinite(value) ? value : null;
 }

@@ -21,6 +21,8 @@ interface FitFiguresProps {
   figures: SavedFitFigures;
   carrier: 'electrons' | 'holes';
   fileName: string;
+  /** The point that a comment speaks of. */
+  litKeV?: number | null;
 }
 
 const DEPTH_HEIGHT = 520;
@@ -28,7 +30,7 @@ const SCAN_HEIGHT = 300;
 const RESIDUAL_HEIGHT = 120;
 
 /** Stopping profiles, carriers and reach over one depth axis. */
-export function SavedDepthFigure({ fit, figures, carrier, fileName }: FitFiguresProps) {
+export function SavedDepthFigure({ fit, figures, carrier, fileName, litKeV }: FitFiguresProps) {
   const { edge, carrierProfile, spec } = fit;
   const gamma = spec.response.kind === 'capture-rate' ? spec.response : null;
   const edgeWords = edge ? `edge ${withDecimals(edge.value, 1)} nm` : undefined;
@@ -48,6 +50,7 @@ export function SavedDepthFigure({ fit, figures, carrier, fileName }: FitFigures
           edgeLabel={edgeWords}
           edgeInterval={edge?.interval68}
           carrier={carrier}
+          highlightedKeV={litKeV}
           depthScale={fit.depthScale}
           capThicknessNm={spec.capThicknessNm}
           maxDepthNm={carrierProfile.points.at(-1)?.depthNm ?? carrierProfile.reachNm}
@@ -64,7 +67,12 @@ export function SavedDepthFigure({ fit, figures, carrier, fileName }: FitFigures
 }
 
 /** The scan with its folded curve, and the residuals under it. */
-export function SavedScanFigure({ fit, figures, fileName }: Omit<FitFiguresProps, 'carrier'>) {
+export function SavedScanFigure({
+  fit,
+  figures,
+  fileName,
+  litKeV,
+}: Omit<FitFiguresProps, 'carrier'>) {
   const { residuals, observable, spec } = fit;
   const label = `${spec.profile} edge`;
   return (
@@ -80,6 +88,7 @@ export function SavedScanFigure({ fit, figures, fileName }: Omit<FitFiguresProps
             residuals={residuals}
             curves={[{ label, style: 'solid', ...figures.curve }]}
             observable={observable}
+            highlightedKeV={litKeV}
             width={width}
             height={SCAN_HEIGHT}
           />
@@ -94,6 +103,7 @@ export function SavedScanFigure({ fit, figures, fileName }: Omit<FitFiguresProps
         {(width) => (
           <ResidualChart
             series={[{ label, style: 'solid', residuals }]}
+            highlightedKeV={litKeV}
             width={width}
             height={RESIDUAL_HEIGHT}
           />

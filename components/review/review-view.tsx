@@ -32,12 +32,14 @@ interface ReviewViewProps {
   /** Other fits of the same scan. */
   others: FitRow[];
   now: Date;
+  /** The point that the address points at. */
+  litKeV: number | null;
   actions: { accept: AcceptAction; return: FormActionFunction; comment: FormActionFunction };
 }
 
 /** One fit as a reviewer needs it: the answer, what it rests on, what speaks against it, and what was said. */
 export function ReviewView(props: ReviewViewProps) {
-  const { fit, own, figures, carrier, others, now, actions } = props;
+  const { fit, own, figures, carrier, others, now, litKeV, actions } = props;
   const drawn = drawnFit(fit);
   const fileName = fileNameOf(fit.name);
   const { chiSquare, degreesOfFreedom, pValue } = fit.answer;
@@ -95,10 +97,16 @@ export function ReviewView(props: ReviewViewProps) {
       </section>
       <div className="grid gap-8 lg:grid-cols-2">
         <div id="scan" className="min-w-0">
-          <SavedScanFigure fit={drawn} figures={figures} fileName={fileName} />
+          <SavedScanFigure fit={drawn} figures={figures} fileName={fileName} litKeV={litKeV} />
         </div>
         <div id="depth" className="min-w-0">
-          <SavedDepthFigure fit={drawn} figures={figures} carrier={carrier} fileName={fileName} />
+          <SavedDepthFigure
+            fit={drawn}
+            figures={figures}
+            carrier={carrier}
+            fileName={fileName}
+            litKeV={litKeV}
+          />
         </div>
       </div>
       <div className="mt-10 grid gap-x-10 gap-y-10 lg:grid-cols-2">

@@ -1,4 +1,5 @@
 import { Moment } from '@/components/ui/moment';
+import { TextLink } from '@/components/ui/text-link';
 import type { ReviewEvent } from '@/lib/schemas/fit';
 
 import { checkName, targetAnchor } from './comment-targets';
@@ -39,17 +40,5 @@ function Target({ value }: { value: string }) {
   const words = value.startsWith('check ')
     ? `the check “${checkName(value.slice('check '.length))}”`
     : value;
-  return (
-    <>
-      {' '}
-      on{' '}
-      {anchor ? (
-        <a href={anchor} className="text-link">
-          {words}
-        </a>
-      ) : (
-        words
-      )}
-    </>
-  );
+  return <> on {anchor ? <TextLink href={anchor}>{words}</TextLink> : words}</>;
 }

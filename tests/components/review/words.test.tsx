@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 
 import { checkSummary } from '@/components/review/check-list';
-import { commentTargets, targetAnchor } from '@/components/review/comment-targets';
+import { commentTargets, litEnergyKeV, targetAnchor } from '@/components/review/comment-targets';
 import { edgeCaption } from '@/components/review/edge-answer';
 import { parameterText } from '@/components/review/parameter-value';
 import { parameterLabel } from '@/components/review/parameter-words';
@@ -95,10 +95,18 @@ describe('what a comment may point at', () => {
 
   it('leads to the place on the page', () => {
     expect(targetAnchor('check edge-inside-reach')).toBe('#check-edge-inside-reach');
-    expect(targetAnchor('point 14 keV')).toBe('#scan');
+    expect(targetAnchor('point 14 keV')).toBe('?about=point%2014%20keV#scan');
     expect(targetAnchor('depth 80 nm')).toBe('#depth');
     expect(targetAnchor('')).toBeNull();
   });
+});
+
+it('reads from the address which point to light', () => {
+  expect(litEnergyKeV('point 14 keV')).toBe(14);
+  expect(litEnergyKeV('point 2.5 keV')).toBe(2.5);
+  expect([undefined, '', 'depth 80 nm', 'point x keV', ['point 2 keV']].map(litEnergyKeV)).toEqual(
+    Array(5).fill(null),
+  );
 });
 
 it('sums up checks', () => {

@@ -1,3 +1,4 @@
+import { litEnergyKeV } from '@/components/review/comment-targets';
 import { ReviewView } from '@/components/review/review-view';
 import { savedFitFigures } from '@/components/review/saved-fit-figures';
 import { listFits } from '@/db/access/fit/list-fits';
@@ -17,7 +18,7 @@ export async function generateMetadata({
   return { title: `Review of ${fit.name}` };
 }
 
-export default async function ReviewPage({ params }: PageProps<'/reviews/[fitId]'>) {
+export default async function ReviewPage({ params, searchParams }: PageProps<'/reviews/[fitId]'>) {
   const fit = await read(readFit, { id: (await params).fitId });
   const [viewer, sample, stoppingSet, ofScan] = await Promise.all([
     readViewer(),
@@ -33,6 +34,7 @@ export default async function ReviewPage({ params }: PageProps<'/reviews/[fitId]
       carrier={sample.carrier}
       others={ofScan.filter((other) => other.id !== fit.id)}
       now={new Date()}
+      litKeV={litEnergyKeV((await searchParams).about)}
       actions={{
         accept: acceptFitAction,
         return: returnFitAction,
