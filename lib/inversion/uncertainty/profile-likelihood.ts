@@ -17,9 +17,12 @@ export interface MinimumPoint {
   covariance: Covariance;
 }
 
-/** Δχ² is met to this, relative: a 20,000th of the half-width of the interval. */
-const TARGET_TOLERANCE = 1e-4;
-const INNER = { maxIterations: 40, tolerance: 1e-9 };
+/**
+ * A rise this close to the target, relative, is corrected by the slope of √Φ and not evaluated again: what is left is a
+ * thousandth of a quarter per cent of the half-width.
+ */
+const TARGET_TOLERANCE = 5e-3;
+const INNER = { maxIterations: 40, tolerance: 1e-7 };
 /** A fall of Φ by more than this is a new minimum, less is rounding. */
 const NEW_MINIMUM = 1e-4;
 const MOST_STEPS = 40;
@@ -184,36 +187,38 @@ function findBracket(
 
 /**
  * Crossing of the target between two points: √Φ rises nearly linearly, so the secant on it, kept inside the bracket by the
- * Illinois rule, needs few steps.
+ * Illinois rule, needs few steps, and the last of them none at all.
  */
 function findRoot(line: Line, inside: Point, outside: Point, target: number): number {
   const goal = Math.sqrt(target);
-  let a = inside.x;
-  let fa = Math.sqrt(inside.rise) - goal;
-  let b = outside.x;
-  let fb = Math.sqrt(outside.rise) - goal;
-  if (Math.abs(outside.rise - target) <= TARGET_TOLERANCE * target) return b;
-  let side = 0;
+  const height = ({ rise }: Point): number => Math.sqrt(rise) - goal;
+  let before = inside;
+  let last = outside;
+  // Ends of the bracket; the Illinois rule halves the height of an end that stays.
+  let low = { x: inside.x, height: height(inside) };
+  let high = { x: outside.x, height: height(outside) };
   for (let step = 0; step < MOST_STEPS; step++) {
-    const x = fb === fa ? (a + b) / 2 : a - (fa * (b - a)) / (fb - fa);
-    const rise = line.rise(x);
-    const f = Math.sqrt(rise) - goal;
-    if (
-      Math.abs(rise - target) <= TARGET_TOLERANCE * target ||
-      Math.abs(b - a) <= 1e-12 * Math.abs(x)
-    )
-      return x;
-    if (f < 0) {
-      a = x;
-      fa = f;
-      if (side === -1) fb /= 2;
-      side = -1;
+    if (Math.abs(last.rise - target) <= TARGET_TOLERANCE * target)
+      return crossing(before, last, height);
+    const x = low.x - (low.height * (high.x - low.x)) / (high.height - low.height);
+    if (!(Math.abs(high.x - low.x) > 1e-12 * Math.abs(x))) return x;
+    before = last;
+    last = { x, rise: line.rise(x) };
+    const end = { x, height: height(last) };
+    const sameSide = end.height * height(before) > 0;
+    if (end.height < 0) {
+      low = end;
+      if (sameSide) high = { x: high.x, height: high.height / 2 };
     } else {
-      b = x;
-      fb = f;
-      if (side === 1) fa /= 2;
-      side = 1;
+      high = end;
+      if (sameSide) low = { x: low.x, height: low.height / 2 };
     }
   }
-  return (a + b) / 2;
+  return last.x;
+}
+
+/** Where the straight line through two points on √Φ meets the target. */
+function crossing(a: Point, b: Point, height: (point: Point) => number): number {
+  const rise = height(b) - height(a);
+  return rise === 0 ? b.x : b.x - (height(b) * (b.x - a.x)) / rise;
 }
