@@ -23,10 +23,11 @@ export function InvitationLink({ path }: { path: string }) {
 
   return (
     <Notice kind="fine" title="The link is ready" alert>
-      Send it to the person yourself. It shows only now, opens once, and runs out after some days.
+      Send it to the person yourself. It shows only now, and opens once; until when stands below.
       <span className="mt-2 flex flex-wrap gap-2">
         <TextInput
           readOnly
+          autoFocus
           aria-label="Invitation link"
           value={link}
           className="min-w-48 flex-1 figures"

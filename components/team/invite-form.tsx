@@ -21,6 +21,8 @@ export function InviteForm({ action }: { action: FormActionFunction<{ path: stri
   return (
     <div className="grid gap-4">
       <Form
+        // A new form for the next person, once a link is made.
+        key={path}
         action={action}
         label="Invite a person"
         className="items-start sm:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto]"
