@@ -52,8 +52,10 @@ const PATIENCE_MS = 80;
 export function createPool({ size, spawn }: { size: number; spawn: () => Hand }): InversionPool {
   const hands: (Hand | null)[] = Array.from({ length: size }, () => null);
   let lastJob = 0;
+  let closed = false;
 
   const handAt = (index: number): Hand => {
+    if (closed) throw new HandEnded('The pool was ended.');
     const present = hands[index];
     // A worker that failed is not asked again: the next call starts a new one.
     if (present && !present.failed) return present;
@@ -61,14 +63,19 @@ export function createPool({ size, spawn }: { size: number; spawn: () => Hand })
   };
 
   /** Closes a job everywhere; with patience, ends the workers that do not answer in time. */
-  const letGo = (job: number, patienceMs: number | null): void => {
-    for (const hand of hands) {
-      if (!hand || hand.failed) continue;
-      const patience = patienceMs === null ? undefined : setTimeout(() => hand.end(), patienceMs);
-      const forget = () => clearTimeout(patience);
-      hand.ask((api) => api.close(job)).then(forget, forget);
-    }
+  const letGo = async (job: number, patienceMs: number | null): Promise<void> => {
+    const present = hands.filter((hand) => hand !== null && !hand.failed);
+    await Promise.all(
+      present.map((hand) => {
+        const patience =
+          patienceMs === null ? undefined : setTimeout(() => hand?.end(), patienceMs);
+        const forget = () => clearTimeout(patience);
+        return hand?.ask((api) => api.close(job)).then(forget, forget);
+      }),
+    );
   };
+  /** Until then a stopped job may still cost its workers their life, so the next job waits for it. */
+  let settled: Promise<void> = Promise.resolve();
 
   return {
     size,
@@ -83,18 +90,20 @@ export function createPool({ size, spawn }: { size: number; spawn: () => Hand })
           if (over) return;
           over = true;
           resolve({ status: 'stopped', elapsedMs: elapsed() });
-          letGo(job, PATIENCE_MS);
+          settled = Promise.all([settled, letGo(job, PATIENCE_MS)]).then(() => {});
         };
       });
-      const work = runJob({ job, request, listener, handAt, size, elapsed, isOver: () => over });
+      const context = { job, request, listener, handAt, size, elapsed, isOver: () => over };
+      const work = settled.then(() => runJob(context));
       const end = Promise.race([stopped, work]).then((result) => {
-        if (!over) letGo(job, null);
+        if (!over) void letGo(job, null);
         over = true;
         return result;
       });
       return { end, stop };
     },
     async fitEach(inputs) {
+      await settled;
       const replies = await Promise.all(
         inputs.map(async (input, index) => {
           const job = ++lastJob;
@@ -107,6 +116,7 @@ export function createPool({ size, spawn }: { size: number; spawn: () => Hand })
       return replies;
     },
     end() {
+      closed = true;
       hands.forEach((hand) => hand?.end());
     },
   };

@@ -15,6 +15,8 @@ export default defineConfig({
   reporter: report ? [['list'], ['json', { outputFile: report }]] : [['list']],
   use: {
     baseURL: process.env.STRANDLINE_TEST_URL,
+    actionTimeout: 20_000,
+    navigationTimeout: 30_000,
     viewport: { width: 1440, height: 960 },
     locale: 'en-GB',
     timezoneId: 'Europe/Zurich',
