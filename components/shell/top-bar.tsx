@@ -18,7 +18,7 @@ type TopBarProps = {
 export function TopBar({ viewer, theme, waiting, signOut, switchTeam }: TopBarProps) {
   return (
     <header className="no-print border-b border-rule">
-      <div className="page flex min-h-13 flex-wrap items-center gap-x-5 gap-y-1 py-1 lg:gap-x-7 lg:py-0">
+      <div className="page flex min-h-13 flex-wrap items-center gap-x-3 gap-y-1 py-1 sm:gap-x-5 lg:gap-x-7 lg:py-0">
         <Wordmark />
         <MainNav waiting={waiting} />
         <div className="ml-auto flex min-w-0 items-center gap-3 text-sm">
