@@ -6,7 +6,7 @@ import { AxisLeft, AxisTitle, SANS } from './axis';
 import type { CarrierScale } from './carrier-scale';
 import { dashOf, strokeOf, type ProfileSeries } from './chart-types';
 import { Hatch } from './hatch';
-import { Legend } from './legend';
+import { Legend, legendWidth } from './legend';
 
 interface CarrierPanelProps {
   series: readonly ProfileSeries[];
@@ -32,12 +32,14 @@ export function CarrierPanel({
 }: CarrierPanelProps) {
   const [left, right] = x.range() as [number, number];
   const first = series[0]?.profile ?? null;
+  const entries = legendOf(series);
+  const fits = legendWidth(entries) + title.length * 7 < right - left;
   return (
     <g>
       <AxisTitle x={left} y={top - 9} anchor="start">
         {title}
       </AxisTitle>
-      <Legend entries={legendOf(series)} right={right} y={top - 9} />
+      <Legend entries={entries} right={right} y={fits ? top - 9 : top - 27} />
       <AxisLeft ticks={scale.ticks} at={left} grid={right - left} />
       {first && <Unknown profile={first} scale={scale} x={x} top={top} height={height} />}
       {/* A nested svg clips what leaves the panel and needs no id. */}
@@ -123,8 +125,8 @@ function Unknown({
         </HatchLabel>
       )}
       {right - reach > 12 && right - reach <= 84 && (
-        <HatchLabel x={reach - 6} y={top + 16} anchor="end">
-          beyond reach →
+        <HatchLabel x={right - 2} y={top + height - 30} anchor="end">
+          beyond reach
         </HatchLabel>
       )}
       {spans.map(([from, to]) => (

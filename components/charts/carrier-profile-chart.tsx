@@ -6,7 +6,7 @@ import { carrierScale } from './carrier-scale';
 import type { ProfileSeries } from './chart-types';
 
 const LEFT = 54;
-const TOP = 28;
+const TOP = 46;
 const BOTTOM = 46;
 
 /** Carrier profiles over depth: bands for the first, lines for all, hatching where the scan says nothing. */

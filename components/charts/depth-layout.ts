@@ -18,7 +18,7 @@ const LEFT = 54;
 const RIGHT = 16;
 const STRIP = 12;
 const BELOW = 46;
-const GAP = 34;
+const GAP = 42;
 
 export function depthLayout({
   width,

@@ -54,7 +54,10 @@ export function EvidenceTable({
             key={row.label}
             className={`border-t border-rule ${row === best ? 'font-semibold' : ''}`}
           >
-            <th scope="row" className="py-1.5 text-left font-[inherit]">
+            <th
+              scope="row"
+              className={`py-1.5 text-left ${row === best ? 'font-semibold' : 'font-normal'}`}
+            >
               <LineSample colour={row.colour ?? 'var(--ink-3)'} dashed={row.dashed ?? false} />
               {row.label}
             </th>

@@ -24,7 +24,7 @@ export function Legend({
   return (
     <g fontFamily={SANS} fontSize={11.5} fill="var(--ink-2)">
       {entries.map((entry, index) => {
-        const end = right - widthOf(entries.slice(0, index));
+        const end = right - legendWidth(entries.slice(0, index));
         const start = end - entry.label.length * LETTER;
         return (
           <g key={entry.label}>
@@ -47,6 +47,7 @@ export function Legend({
   );
 }
 
-function widthOf(entries: readonly Entry[]): number {
+/** Room that the entries need, px. */
+export function legendWidth(entries: readonly Pick<Entry, 'label'>[]): number {
   return entries.reduce((sum, entry) => sum + entry.label.length * LETTER + SAMPLE, 0);
 }

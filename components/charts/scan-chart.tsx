@@ -66,7 +66,7 @@ export function ScanChart({
       <AxisTitle x={(left + right) / 2} y={height - 8} anchor="middle">
         implantation energy (keV)
       </AxisTitle>
-      <Legend entries={all} right={right} y={14} />
+      <Legend entries={all} right={right} y={34} />
       {/* A nested svg clips a drawn curve that leaves the panel. */}
       <svg x={left} y={top} width={right - left} height={bottom - top} overflow="hidden">
         <g transform={`translate(${-left} ${-top})`}>

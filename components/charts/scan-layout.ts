@@ -12,7 +12,7 @@ export interface ScanLayout {
   bottom: number;
 }
 
-const MARGIN: Margin = { top: 30, right: 14, bottom: 44, left: 54 };
+const MARGIN: Margin = { top: 46, right: 14, bottom: 44, left: 54 };
 
 /** Horizontal scale shared by the scan and its residuals, so that they stand under each other. */
 export function energyScale(

@@ -14,7 +14,7 @@ export function DeskColumns({
   follows: ReactNode;
 }) {
   return (
-    <div className="grid gap-x-5 gap-y-8 pt-4 [reading-flow:grid-order] lg:grid-cols-[18.5rem_minmax(0,1fr)] xl:grid-cols-[18rem_minmax(0,5fr)_minmax(0,8fr)]">
+    <div className="grid gap-x-5 gap-y-8 pt-4 [reading-flow:grid-order] lg:grid-cols-[18.5rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,5fr)_minmax(0,8fr)]">
       <section
         aria-label="What is assumed"
         className="order-3 min-w-0 lg:order-none lg:row-span-2 xl:row-span-1"

@@ -11,6 +11,11 @@ export const DRAWABLE = ['edgeDepthNm', 'levelTop', 'levelBulk'] as const;
 export type Drawable = (typeof DRAWABLE)[number];
 export type Drawn = Partial<Record<Drawable, number>>;
 
+/** A drawn value to four digits: a hand does not draw more, and an address should be readable. */
+export function asDrawn(value: number): number {
+  return Number(value.toPrecision(4));
+}
+
 export function answerValues(answer: Pick<FitAnswer, 'parameters'>): ParameterValues {
   return Object.fromEntries(answer.parameters.map(({ name, value }) => [name, value]));
 }

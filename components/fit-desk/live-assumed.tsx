@@ -4,6 +4,7 @@ import type { StoppingSetRow } from '@/lib/schemas/stopping-set';
 
 import { AlsoAssumed } from './also-assumed';
 import { freed, held, withSetting } from './assumptions';
+import { asDrawn } from './drawn-values';
 import { ChecksList } from './checks-list';
 import { FitBar } from './fit-bar';
 import { ParameterTable } from './parameter-table';
@@ -44,7 +45,9 @@ export function LiveAssumed({ desk, figures, scan, sample, stoppingSets }: LiveA
         edit={{
           hold: (name, isHeld) =>
             change((present) =>
-              isHeld ? held(present, name, drawing.values[name] ?? 0) : freed(present, name),
+              isHeld
+                ? held(present, name, asDrawn(drawing.values[name] ?? 0))
+                : freed(present, name),
             ),
           change: (name, setting, kind) =>
             change((present) => withSetting(present, name, setting), kind),

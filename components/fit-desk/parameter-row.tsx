@@ -175,7 +175,7 @@ function Figures({
         {value}
         {unit && <span className="text-ink-3"> {unit}</span>}
       </span>
-      <span className="min-w-[5.2rem] text-[0.8125rem] whitespace-nowrap text-ink-2">{side}</span>
+      <span className="min-w-[4.6rem] text-[0.8125rem] whitespace-nowrap text-ink-2">{side}</span>
     </span>
   );
 }

@@ -158,5 +158,5 @@ function readingOf(
   const fit = residual
     ? `, folded ${residual.predicted.toPrecision(4)}, ${residual.reduced.toFixed(1).replace('-', '−')} σ away`
     : '';
-  return `${point.energyKeV} keV: ${point.value.toPrecision(4)} ± ${point.sigma.toPrecision(2)} ${unit}${fit}${point.enabled ? '' : ', switched off'}.`;
+  return `${point.energyKeV} keV: ${point.value.toPrecision(4)} ± ${point.sigma.toPrecision(2)}${unit && ` ${unit}`}${fit}${point.enabled ? '' : ', switched off'}.`;
 }

@@ -8,6 +8,7 @@ import type { ParameterValues, PreparedFit } from '@/lib/inversion/index';
 import { held, settingOf, type Assumptions } from './assumptions';
 import {
   answerValues,
+  asDrawn,
   drawnChiSquare,
   valuesToDraw,
   type Drawable,
@@ -90,13 +91,13 @@ export function useDrawing({ prepared, assumptions, good, change }: DrawingInput
   const drop = (name: Drawable) => {
     const value = drawn[name];
     if (value === undefined || !settingOf(assumptions, name).held) return;
-    change((present) => held(present, name, value));
+    change((present) => held(present, name, asDrawn(value)));
     setDrawn(({ [name]: _taken, ...others }) => others);
   };
   const hold = () => {
     change((present) =>
       Object.entries(drawn).reduce(
-        (next, [name, value]) => held(next, name as Drawable, value),
+        (next, [name, value]) => held(next, name as Drawable, asDrawn(value)),
         present,
       ),
     );
