@@ -2,31 +2,49 @@ import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
 import { OPENED_WIDTHS } from './widths';
-import { refine, type RefineResult, type RefineScratch } from './refine';
+import { refine, type RefineOptions, type RefineResult, type RefineScratch } from './refine';
 
 /** Index of the edge whose borders χ² has kinks at. */
 const EDGE = 0;
 
 /**
- * Local minimum of Φ over everything not held, θ improved in place. A smooth trial profile needs refine alone. For a
- * sharp edge Φ has kinks where the edge crosses a bin border; there the edge is bracketed and minimised on a line with
- * everything else re-optimised at each step.
+ * Local minimum of Φ over everything not held, θ improved in place. Where the trial profile is smooth, refine alone does it.
+ * For a step (a sharp edge, or a graded one whose width came to rest at zero) Φ has kinks where the edge crosses a bin border;
+ * there the edge is minimised on a line with everything else re-optimised at each step.
  */
 export function minimise(
   problem: Problem,
   theta: Float64Array,
   held: Uint8Array,
   scratch: MinimiseScratch,
-  options: { maxIterations: number; tolerance: number },
+  options: RefineOptions,
 ): RefineResult {
+  const { kinked, widths } = problem.model.trial;
   const result = refine(problem, theta, held, scratch.refine, options);
-  if (!problem.model.trial.kinked)
-    return leaveZeroWidth(problem, theta, held, scratch, options, result);
-  if (held[EDGE]) return result;
+  if (kinked) return minimiseStep(problem, theta, held, scratch, options, result);
+  if (!widths.some((k) => theta[k] === 0 && !held[k])) return result;
+  const opened = leaveZeroWidth(problem, theta, held, scratch, options, result);
+  return opened ?? minimiseStep(problem, theta, held, scratch, options, result);
+}
+
+/** Brent's minimiser over the edge within two bins of where refine stopped; widths stay, the rest follows. */
+function minimiseStep(
+  problem: Problem,
+  theta: Float64Array,
+  held: Uint8Array,
+  scratch: MinimiseScratch,
+  options: RefineOptions,
+  result: RefineResult,
+): RefineResult {
   const { model } = problem;
+  if (held[EDGE]) {
+    evaluate(problem, theta, held);
+    return result;
+  }
   const { inner, innerHeld } = scratch;
   innerHeld.set(held);
   innerHeld[EDGE] = 1;
+  for (const k of model.trial.widths) innerHeld[k] = 1;
   inner.set(theta);
   const linear = held[model.scaleIndex] === 1;
   const at = (edgeNm: number): number => {
@@ -41,37 +59,36 @@ export function minimise(
     Math.max(model.lower[EDGE]!, theta[EDGE]! - span),
     theta[EDGE]!,
     Math.min(model.upper[EDGE]!, theta[EDGE]! + span),
-    1e-9 * model.upper[EDGE]!,
+    Math.min(1e-5, Math.max(1e-9, options.tolerance)) * model.upper[EDGE]!,
   );
-  if (best.value < result.chiSquare) {
-    result.chiSquare = at(best.x);
+  let { chiSquare } = result;
+  if (best.value < chiSquare) {
+    chiSquare = at(best.x);
     theta.set(inner);
   }
   evaluate(problem, theta, held);
-  return { ...result, converged: true, predictedReduction: Math.min(result.predictedReduction, 0) };
+  return { chiSquare, iterations: result.iterations, converged: true, predictedReduction: 0 };
 }
 
 /**
  * A width that came to rest at zero may have to leave again: Φ has no slope there. Where the other parameters are at their
  * best, the change of their minimum with a small width is the change at fixed others (envelope theorem), so a few widths are
- * tried as they stand, and the best is followed if it lies lower.
+ * tried as they stand, and the best is followed if it lies lower. Null where none does.
  */
 function leaveZeroWidth(
   problem: Problem,
   theta: Float64Array,
   held: Uint8Array,
   { refine: scratch, inner }: MinimiseScratch,
-  options: { maxIterations: number; tolerance: number },
+  options: RefineOptions,
   result: RefineResult,
-): RefineResult {
+): RefineResult | null {
   const { trial, upper } = problem.model;
   let lowest = result.chiSquare;
   let width = -1;
   let opened = 0;
-  let tried = false;
   for (const k of trial.widths) {
     if (held[k] || theta[k]! > 0) continue;
-    tried = true;
     for (const share of OPENED_WIDTHS) {
       inner.set(theta);
       inner[k] = share * upper[k]!;
@@ -82,13 +99,10 @@ function leaveZeroWidth(
       opened = share * upper[k]!;
     }
   }
-  if (width >= 0) {
-    theta[width] = opened;
-    const followed = refine(problem, theta, held, scratch, options);
-    return { ...followed, iterations: followed.iterations + result.iterations };
-  }
-  if (tried) evaluate(problem, theta, held);
-  return result;
+  if (width < 0) return null;
+  theta[width] = opened;
+  const followed = refine(problem, theta, held, scratch, options);
+  return { ...followed, iterations: followed.iterations + result.iterations };
 }
 
 export interface MinimiseScratch {

@@ -15,6 +15,12 @@ export interface RefineResult {
   converged: boolean;
 }
 
+export interface RefineOptions {
+  maxIterations: number;
+  /** Converged when the undamped step promises less than this times 1 + Φ. */
+  tolerance: number;
+}
+
 export interface RefineScratch {
   normal: NormalEquations;
   trial: Float64Array;
@@ -31,6 +37,8 @@ export function createRefineScratch(size: number): RefineScratch {
 
 const FIRST_DAMPING = 1e-4;
 const LARGEST_DAMPING = 1e9;
+/** Widths below this share of their range, a fraction of a bin, may be taken to zero in one step. */
+const SMALLEST_SHARE = 0.002;
 
 /**
  * Levenberg-Marquardt on the shape and the depth scale with the levels re-solved exactly after every step (variable
@@ -44,10 +52,11 @@ export function refine(
   theta: Float64Array,
   held: Uint8Array,
   scratch: RefineScratch,
-  options: { maxIterations: number; tolerance: number },
+  options: RefineOptions,
 ): RefineResult {
   const { normal, trial, active } = scratch;
   const { lower, upper, size, shapeCount, levelCount } = problem.model;
+  const { widths } = problem.model.trial;
   let chiSquare = evaluate(problem, theta, held);
   let damping = FIRST_DAMPING;
   let iterations = 0;
@@ -73,6 +82,10 @@ export function refine(
       trial[k] = active[k]
         ? theta[k]!
         : Math.min(Math.max(theta[k]! + normal.step[k]!, lower[k]!), upper[k]!);
+    }
+    for (const k of widths) {
+      // Φ is even in a width: a step past zero says little of where the minimum is, so it stops short of it.
+      if (trial[k] === 0 && theta[k]! > SMALLEST_SHARE * upper[k]!) trial[k] = theta[k]! / 5;
     }
     const next = evaluate(problem, trial, held);
     if (next < chiSquare) {

@@ -7,8 +7,9 @@ import { openWidths } from './widths';
 
 /** Valleys of the coarse search that are followed to their bottom. */
 const STARTS = 3;
-/** Convergence: what Φ may still fall by, relative to 1 + Φ, on the way and at the end. */
-const POLISH_TOLERANCE = 1e-7;
+/** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
+const VALLEY = { maxIterations: 60, tolerance: 1e-5 };
+const POLISH_TOLERANCE = 1e-10;
 const FINAL = { maxIterations: 100, tolerance: 1e-13 };
 
 export interface GlobalMinimum {
@@ -40,9 +41,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   for (const node of nodes) {
     thetaOfNode(model, node, neutral, trial);
     openWidths(model, trial, model.held);
-    const result = model.trial.kinked
-      ? minimise(problem, trial, held, scratch, FINAL)
-      : polish(problem, trial, scratch.refine, POLISH_TOLERANCE);
+    const result = minimise(problem, trial, held, scratch, VALLEY);
     iterations += result.iterations;
     if (result.chiSquare < best) {
       best = result.chiSquare;
@@ -50,6 +49,8 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
     }
   }
   const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };
+  if (!model.trial.kinked)
+    evidence.iterations += polish(problem, theta, scratch.refine, POLISH_TOLERANCE).iterations;
   return finish(problem, scratch, theta, evidence, highestOverDepths(grid.lattice, chiSquares));
 }
 
