@@ -16,10 +16,10 @@ import { saveFitSchema } from '@/lib/schemas/fit';
 import { and, eq } from 'drizzle-orm';
 import { randomUUID } from 'node:crypto';
 
-import { firstDisagreement } from './disagreement';
+import { firstDisagreement, type Claim } from './disagreement';
 import { fitInputOf, frozenPoints } from './frozen-inputs';
 import { ownedFit } from './owned-fit';
-import { recompute } from './recompute';
+import { recompute, type Recomputed } from './recompute';
 
 /**
  * Freezes a fit. What the browser claims is checked number by number against a computation from the
@@ -59,7 +59,9 @@ export async function saveFit(ctx: Context, input: unknown): Promise<{ id: strin
     if (wanted.parentFitId !== null) await ownedFit(tx, viewer.teamId, wanted.parentFitId);
     await tx.insert(fits).values({
       ...wanted,
-      ...computed,
+      answer: computed.answer,
+      carrierProfile: computed.carrierProfile,
+      checks: computed.checks,
       ...hashes,
       ...summaryOf(computed.answer),
       id,
@@ -97,12 +99,8 @@ async function ownedInputs(db: Handle, teamId: string, named: Named) {
   return { scan, set };
 }
 
-function refuseDisagreement(
-  claimed: Parameters<typeof firstDisagreement>[0],
-  computed: Awaited<ReturnType<typeof recompute>>,
-): void {
-  const ours = { answer: computed.answer, profile: computed.carrierProfile };
-  const difference = firstDisagreement(claimed, ours);
+function refuseDisagreement(claimed: Claim, computed: Recomputed): void {
+  const difference = firstDisagreement(claimed, computed);
   if (difference === null) return;
   const { what, claimed: theirs, recomputed } = difference;
   const message =
