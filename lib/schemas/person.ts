@@ -17,13 +17,11 @@ export const signUpSchema = z.object({
   password: newPassword,
   teamName: text('Team', 80),
 });
-export type SignUpInput = z.input<typeof signUpSchema>;
 
 export const signInSchema = z.object({
   email: emailSchema,
   password: z.string('Password: write it here.').min(1, 'Password: write it here.').max(200),
 });
-export type SignInInput = z.input<typeof signInSchema>;
 
 /** With an invitation: a new person gives name and password, a known one only the password. */
 export const acceptInvitationSchema = z.object({

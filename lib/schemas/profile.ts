@@ -38,7 +38,6 @@ export const exportProfileSchema = z.object({
   depthUnit: z.enum(['nm', 'um', 'cm']).default('nm'),
   concentrationUnit: z.enum(['cm-3', 'm-3']).default('cm-3'),
 });
-export type ExportProfileInput = z.input<typeof exportProfileSchema>;
 
 export const listIssuedProfilesSchema = z.object({
   /** Words that number, sample, material, scan or fit must contain. */

@@ -30,7 +30,9 @@ export const scanReadingSchema = z.object({
     counts: z.int().min(0).nullable(),
   }),
   energyUnit: z.enum(['keV', 'eV']),
-  asymmetry: z.object({ maximum: z.number().positive().max(1), sigma: z.number().min(0).max(1) }).nullable(),
+  asymmetry: z
+    .object({ maximum: z.number().positive().max(1), sigma: z.number().min(0).max(1) })
+    .nullable(),
   /** Lines that the person switched off by name. */
   skipLines: z.array(z.int().min(1)).max(20_000),
 });
@@ -50,14 +52,25 @@ export const createScanSchema = z.object({
   sampleId: idSchema,
   meta: scanMetaSchema,
   source: z.discriminatedUnion('kind', [
-    z.object({ kind: z.literal('file'), name: text('File name', 200), bytes: z.instanceof(Uint8Array), reading: scanReadingSchema }),
-    z.object({ kind: z.literal('typed'), points: z.array(typedPointSchema).min(1).max(MAX_ENERGIES) }),
+    z.object({
+      kind: z.literal('file'),
+      name: text('File name', 200),
+      bytes: z.instanceof(Uint8Array),
+      reading: scanReadingSchema,
+    }),
+    z.object({
+      kind: z.literal('typed'),
+      points: z.array(typedPointSchema).min(1).max(MAX_ENERGIES),
+    }),
   ]),
 });
 
 /** The JSON part of an upload (`details`); the bytes travel beside it in the multipart field `file`. */
-export const scanUploadSchema = z.object({ sampleId: idSchema, meta: scanMetaSchema, reading: scanReadingSchema });
-export type ScanUpload = z.input<typeof scanUploadSchema>;
+export const scanUploadSchema = z.object({
+  sampleId: idSchema,
+  meta: scanMetaSchema,
+  reading: scanReadingSchema,
+});
 
 export const editScanSchema = z.object({
   id: idSchema,
@@ -82,7 +95,9 @@ export const scanSchema = z.object({
   points: z.array(typedPointSchema),
   /** σ of the maximum asymmetry over the maximum asymmetry: a scale error common to all points. */
   asymmetryScaleError: z.number().nullable(),
-  file: z.object({ id: idSchema, name: z.string(), sha256: z.string(), byteLength: z.number() }).nullable(),
+  file: z
+    .object({ id: idSchema, name: z.string(), sha256: z.string(), byteLength: z.number() })
+    .nullable(),
   /** SHA-256 of the points in canonical form. */
   pointsSha256: z.string(),
   invented: z.boolean(),

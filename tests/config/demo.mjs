@@ -6,7 +6,11 @@ const env = { ...process.env, NEXT_TELEMETRY_DISABLED: '1', NODE_ENV: 'productio
 const next = ['node_modules/next/dist/bin/next'];
 
 execFileSync(process.execPath, [...next, 'build'], { stdio: 'inherit', env });
-const signIns = execFileSync('npm', ['run', '--silent', 'db:seed'], { encoding: 'utf8', env, stdio: ['ignore', 'pipe', 'inherit'] });
+const signIns = execFileSync('npm', ['run', '--silent', 'db:seed'], {
+  encoding: 'utf8',
+  env,
+  stdio: ['ignore', 'pipe', 'inherit'],
+});
 
 const server = spawn(process.execPath, [...next, 'start', '-p', port], { stdio: 'inherit', env });
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => server.kill(signal));

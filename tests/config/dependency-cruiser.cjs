@@ -23,11 +23,23 @@ module.exports = {
     layer('inversion-is-pure', '^lib/inversion/', ['^lib/inversion/', types], {
       packages: ['ml-matrix', 'ml-levenberg-marquardt', '@stdlib', 'pure-rand'],
     }),
-    layer('files-read-and-write-tables', '^lib/files/', ['^lib/files/', '^lib/inversion/(index|types|constants)\\.ts$', types], {
-      packages: ['papaparse', '@types/papaparse'],
+    layer(
+      'files-read-and-write-tables',
+      '^lib/files/',
+      ['^lib/files/', '^lib/inversion/(index|types|constants)\\.ts$', types],
+      {
+        packages: ['papaparse', '@types/papaparse'],
+      },
+    ),
+    layer(
+      'schemas-describe',
+      '^lib/schemas/',
+      ['^lib/schemas/', '^lib/inversion/(index|types|constants)\\.ts$'],
+      { packages: ['zod'] },
+    ),
+    layer('workers-are-thin', '^workers/', ['^workers/', '^lib/inversion/index\\.ts$'], {
+      packages: ['comlink'],
     }),
-    layer('schemas-describe', '^lib/schemas/', ['^lib/schemas/', '^lib/inversion/(index|types|constants)\\.ts$'], { packages: ['zod'] }),
-    layer('workers-are-thin', '^workers/', ['^workers/', '^lib/inversion/index\\.ts$'], { packages: ['comlink'] }),
     {
       name: 'db-stays-below-the-app',
       severity: 'error',
@@ -38,14 +50,19 @@ module.exports = {
       name: 'components-know-no-server',
       severity: 'error',
       from: { path: '^components/' },
-      to: { path: ['^db/', '^app/(?!.*actions\\.ts$)', '^workers/(?!client\\.ts$)', '^lib/(env|headless)'] },
+      to: {
+        path: ['^db/', '^app/', '^workers/(?!client\\.ts$)', '^lib/(env|headless)'],
+        dependencyTypesNot: ['type-only'],
+      },
     },
     {
       name: 'charts-are-pure',
       severity: 'error',
       comment: 'A chart draws what it is given: no fetching, no application state.',
       from: { path: '^components/charts/' },
-      to: { path: ['^components/(?!charts/|ui/)', '^app/', '^workers/', 'node_modules/(swr|nuqs)/'] },
+      to: {
+        path: ['^components/(?!charts/|ui/)', '^app/', '^workers/', 'node_modules/(swr|nuqs)/'],
+      },
     },
     {
       name: 'app-reaches-the-database-through-verbs',
@@ -71,6 +88,9 @@ module.exports = {
     tsPreCompilationDeps: true,
     doNotFollow: { path: 'node_modules' },
     exclude: { path: '\\.css$|node_modules/next/|^\\.next/' },
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'require', 'node', 'default', 'types'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'require', 'node', 'default', 'types'],
+    },
   },
 };

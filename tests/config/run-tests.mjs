@@ -12,7 +12,11 @@ import { ensureChromium } from './browser.mjs';
 const reports = mkdtempSync(path.join(tmpdir(), 'strandline-reports-'));
 const unitReport = path.join(reports, 'unit.json');
 const browserReport = path.join(reports, 'browser.json');
-const env = { ...process.env, NEXT_TELEMETRY_DISABLED: '1', STRANDLINE_BROWSER_REPORT: browserReport };
+const env = {
+  ...process.env,
+  NEXT_TELEMETRY_DISABLED: '1',
+  STRANDLINE_BROWSER_REPORT: browserReport,
+};
 
 let passed = 0;
 let failed = 0;
@@ -21,7 +25,9 @@ function run(title, command, args) {
   console.log(`\n== ${title}`);
   const started = Date.now();
   const { status } = spawnSync(command, args, { stdio: 'inherit', env });
-  console.log(`== ${title}: ${status === 0 ? 'ok' : 'FAILED'} (${Math.round((Date.now() - started) / 1000)} s)`);
+  console.log(
+    `== ${title}: ${status === 0 ? 'ok' : 'FAILED'} (${Math.round((Date.now() - started) / 1000)} s)`,
+  );
   return status === 0;
 }
 

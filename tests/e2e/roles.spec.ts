@@ -16,8 +16,17 @@ test('a modeller may neither add data nor decide, in the page or past it', async
     headers: origin,
     data: {
       sampleId: '3f8e2b52-6f0f-4a53-9d41-0d2f0e3c8a11',
-      meta: { name: 'x', observable: 'fraction', temperatureK: null, fieldMT: null, illumination: 'dark' },
-      source: { kind: 'typed', points: [{ energyKeV: 2, value: 0.5, sigma: 0.1, enabled: true, note: '' }] },
+      meta: {
+        name: 'x',
+        observable: 'fraction',
+        temperatureK: null,
+        fieldMT: null,
+        illumination: 'dark',
+      },
+      source: {
+        kind: 'typed',
+        points: [{ energyKeV: 2, value: 0.5, sigma: 0.1, enabled: true, note: '' }],
+      },
     },
   });
   expect(scan.status()).toBe(403);

@@ -101,7 +101,10 @@ async function addStoppingSet(page: Page): Promise<void> {
 async function addScan(page: Page): Promise<void> {
   await page.goto('/samples');
   await page.getByRole('link', { name: 'HB-7' }).click();
-  await page.getByRole('link', { name: /add (a|an energy) scan/i }).first().click();
+  await page
+    .getByRole('link', { name: /add (a|an energy) scan/i })
+    .first()
+    .click();
   await page.waitForURL(/\/scans\/new/);
   await page.getByLabel('Name', { exact: false }).first().fill('205 K, dark');
   await page.locator('input[type=file]').setInputFiles(fixture('bad/text-in-number.csv'));
@@ -114,7 +117,10 @@ async function addScan(page: Page): Promise<void> {
   await expect(page.getByRole('heading', { level: 1 })).toContainText('205 K, dark');
 
   const download = page.waitForEvent('download');
-  await page.getByRole('link', { name: /download/i }).first().click();
+  await page
+    .getByRole('link', { name: /download/i })
+    .first()
+    .click();
   const stored = readFileSync(await (await download).path());
   expect(stored.equals(readFileSync(fixture('files/scan.csv')))).toBe(true);
 }
@@ -183,7 +189,10 @@ async function takeCsv(page: Page): Promise<void> {
   const download = page.waitForEvent('download');
   await page.getByText('Download the CSV').click();
   const text = readFileSync(await (await download).path(), 'utf8');
-  const head = text.split('\r\n').filter((line) => line.startsWith('#')).join('\n');
+  const head = text
+    .split('\r\n')
+    .filter((line) => line.startsWith('#'))
+    .join('\n');
   expect(head).toMatch(/SL-\d{4}-001/);
   expect(head).toMatch(/carriers/);
   const { data, errors } = Papa.parse<Record<string, string>>(text, {

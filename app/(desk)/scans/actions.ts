@@ -2,9 +2,7 @@
 
 import { formAction } from '@/app/_server/form-action';
 import { archiveScan } from '@/db/access/scan/archive-scan';
-import { editScan } from '@/db/access/scan/edit-scan';
 import { restoreScan } from '@/db/access/scan/restore-scan';
 
-export const editScanAction = formAction(editScan, { redirectTo: ({ id }) => `/scans/${id}` });
 export const archiveScanAction = formAction(archiveScan);
 export const restoreScanAction = formAction(restoreScan);
