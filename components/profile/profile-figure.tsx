@@ -3,6 +3,7 @@
 import { CarrierProfileChart } from '@/components/charts/carrier-profile-chart';
 import { Figure } from '@/components/charts/figure';
 import type { DrawnFit } from '@/components/review/fit-figures';
+import { captureScaleError } from '@/components/review/scale-error';
 import { carrierTable } from '@/components/review/fit-tables';
 
 const HEIGHT = 420;
@@ -18,7 +19,6 @@ export function ProfileFigure({
   fileName: string;
 }) {
   const { carrierProfile, spec, edge } = fit;
-  const gamma = spec.response.kind === 'capture-rate' ? spec.response : null;
   return (
     <Figure
       title="Carrier profile"
@@ -31,9 +31,7 @@ export function ProfileFigure({
           profiles={[{ label: `${spec.profile} edge`, style: 'solid', profile: carrierProfile }]}
           edgeNm={edge?.value ?? null}
           carrier={carrier}
-          scaleError={
-            gamma?.gammaSigmaCm3PerS ? gamma.gammaSigmaCm3PerS / gamma.gammaCm3PerS : null
-          }
+          scaleError={captureScaleError(spec)}
           width={width}
           height={HEIGHT}
         />

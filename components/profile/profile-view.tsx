@@ -6,6 +6,7 @@ import { SavedScanFigure } from '@/components/review/fit-figures';
 import { carrierTable } from '@/components/review/fit-tables';
 import { ParameterTable } from '@/components/review/parameter-table';
 import type { SavedFitFigures } from '@/components/review/saved-fit-figures';
+import { scaleErrorOf } from '@/components/review/scale-error';
 import { SettingList } from '@/components/review/setting-list';
 import { Thread } from '@/components/review/thread';
 import { ButtonLink } from '@/components/ui/button-link';
@@ -41,6 +42,7 @@ export function ProfileView(props: ProfileViewProps) {
   const drawn = drawnFit(fit);
   const fileName = fileNameOf(profile.number);
   const { points } = fit.carrierProfile;
+  const scale = scaleErrorOf(fit.spec);
   return (
     <>
       <PageHeader
@@ -80,6 +82,7 @@ export function ProfileView(props: ProfileViewProps) {
         <div className="min-w-0">
           <div className="pt-6">
             <ProfileFigure fit={drawn} carrier={carrier} fileName={fileName} />
+            {scale && <p className="mt-1 text-[0.8125rem] text-ink-2">{scale.sentence}</p>}
             <details className="no-print mt-3 text-sm">
               <summary className="w-fit text-ink-2">Data, {points.length} depths</summary>
               <FigureDataTable caption="Carrier profile" table={carrierTable(fit.carrierProfile)} />
@@ -92,7 +95,7 @@ export function ProfileView(props: ProfileViewProps) {
             <SavedScanFigure fit={drawn} figures={figures} fileName={fileName} />
           </div>
         </div>
-        <div className="min-w-0">
+        <div className="min-w-0 print:columns-2 print:gap-8">
           <Section title="Cite it as" id="cite">
             <Citation text={profile.citation} />
           </Section>

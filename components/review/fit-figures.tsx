@@ -8,6 +8,7 @@ import { withDecimals } from '@/lib/format';
 import type { Fit } from '@/lib/schemas/fit';
 
 import { carrierTable, scanFitTable } from './fit-tables';
+import { captureScaleError } from './scale-error';
 import type { SavedFitFigures } from './saved-fit-figures';
 
 /** What the figures need of a fit: it travels to the browser. */
@@ -32,7 +33,6 @@ const RESIDUAL_HEIGHT = 120;
 /** Stopping profiles, carriers and reach over one depth axis. */
 export function SavedDepthFigure({ fit, figures, carrier, fileName, litKeV }: FitFiguresProps) {
   const { edge, carrierProfile, spec } = fit;
-  const gamma = spec.response.kind === 'capture-rate' ? spec.response : null;
   const edgeWords = edge ? `edge ${withDecimals(edge.value, 1)} nm` : undefined;
   return (
     <Figure
@@ -54,9 +54,7 @@ export function SavedDepthFigure({ fit, figures, carrier, fileName, litKeV }: Fi
           depthScale={fit.depthScale}
           capThicknessNm={spec.capThicknessNm}
           maxDepthNm={carrierProfile.points.at(-1)?.depthNm ?? carrierProfile.reachNm}
-          scaleError={
-            gamma?.gammaSigmaCm3PerS ? gamma.gammaSigmaCm3PerS / gamma.gammaCm3PerS : null
-          }
+          scaleError={captureScaleError(spec)}
           description={`Stopping profiles, ${carrier} and reach over depth; ${edgeWords ?? 'no edge'}, reach ${withDecimals(carrierProfile.reachNm, 0)} nm.`}
           width={width}
           height={DEPTH_HEIGHT}

@@ -19,6 +19,7 @@ import { ParameterTable } from './parameter-table';
 import { ReviewStanding } from './review-standing';
 import { submittedAt } from './review-queue';
 import type { SavedFitFigures } from './saved-fit-figures';
+import { scaleErrorOf } from './scale-error';
 import { SettingList } from './setting-list';
 import { SiblingFits } from './sibling-fits';
 import { Thread } from './thread';
@@ -42,6 +43,7 @@ export function ReviewView(props: ReviewViewProps) {
   const { fit, own, figures, carrier, others, now, litKeV, actions } = props;
   const drawn = drawnFit(fit);
   const fileName = fileNameOf(fit.name);
+  const scale = scaleErrorOf(fit.spec);
   const { chiSquare, degreesOfFreedom, pValue } = fit.answer;
   return (
     <>
@@ -107,6 +109,7 @@ export function ReviewView(props: ReviewViewProps) {
             fileName={fileName}
             litKeV={litKeV}
           />
+          {scale && <p className="mt-1 text-[0.8125rem] text-ink-2">{scale.sentence}</p>}
         </div>
       </div>
       <div className="mt-10 grid gap-x-10 gap-y-10 lg:grid-cols-2">

@@ -7,6 +7,7 @@ import { parameterText } from '@/components/review/parameter-value';
 import { parameterLabel } from '@/components/review/parameter-words';
 import { submittedAt } from '@/components/review/review-queue';
 import { waitingWords } from '@/components/review/waiting-words';
+import { captureScaleError, scaleErrorOf } from '@/components/review/scale-error';
 import { thinRidge } from '@/components/review/thin-ridge';
 import { commentFitSchema } from '@/lib/schemas/fit';
 
@@ -107,6 +108,32 @@ it('reads from the address which point to light', () => {
   expect([undefined, '', 'depth 80 nm', 'point x keV', ['point 2 keV']].map(litEnergyKeV)).toEqual(
     Array(5).fill(null),
   );
+});
+
+describe('an uncertainty that moves the whole profile', () => {
+  it('is the bulk concentration for a fraction', () => {
+    // 4e14 of 1.1e16 is 3.6 %.
+    expect(scaleErrorOf(makeFit().spec)?.sentence).toBe(
+      'Besides the bands, the uncertainty of the bulk concentration (±4 %) moves the whole profile.',
+    );
+    expect(captureScaleError(makeFit().spec)).toBeNull();
+  });
+
+  it('is the capture coefficient for a rate, and nothing where it has no σ', () => {
+    const rate = (gammaSigmaCm3PerS: number | null) =>
+      makeFit({
+        spec: {
+          response: {
+            kind: 'capture-rate',
+            gammaCm3PerS: 1e-6,
+            gammaSigmaCm3PerS,
+            baselinePerUs: 0,
+          },
+        },
+      }).spec;
+    expect(captureScaleError(rate(2e-7))).toBeCloseTo(0.2, 12);
+    expect(scaleErrorOf(rate(null))).toBeNull();
+  });
 });
 
 it('sums up checks', () => {
