@@ -9,10 +9,12 @@ export const checkReach: FitCheck = (context) => {
   const at = `${figure(edge.value)} nm`;
   const [lower, upper] = edge.interval95;
   if (edge.value > reachNm) {
+    const known =
+      edge.held || lower === null ? '' : ` All it says is deeper than ${figure(lower)} nm (95 %).`;
     return {
       id,
       state: 'problem',
-      message: `The edge at ${at} lies beyond the reach of the scan: only one muon in twenty of the deepest energy stops below ${figure(reachNm)} nm.`,
+      message: `The edge at ${at} lies beyond the reach of the scan: only one muon in twenty of the deepest energy stops below ${figure(reachNm)} nm.${known}`,
     };
   }
   if (!edge.held && lower === null && upper === null) {
