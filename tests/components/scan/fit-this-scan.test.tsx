@@ -12,7 +12,6 @@ const set = (id: string, name: string, energiesKeV: number[]): StoppingSetRow =>
   notes: '',
   energiesKeV,
   bins: 320,
-  warnings: [],
   sha256: 'ab',
   invented: false,
   archivedAt: null,
