@@ -1,3 +1,5 @@
+import 'server-only';
+
 import { memberships } from '@/db/schema/memberships';
 import { teams } from '@/db/schema/teams';
 import type { Viewer } from '@/lib/schemas/person';

@@ -29,7 +29,10 @@ const numberFrom = (label: string) =>
     z.number(`${label}: expected a number.`).nullable(),
   );
 
-export const optionalNumber = (label: string, range: { min?: number; max?: number; above?: number } = {}) =>
+export const optionalNumber = (
+  label: string,
+  range: { min?: number; max?: number; above?: number } = {},
+) =>
   numberFrom(label).refine(
     (value) =>
       value === null ||
@@ -40,7 +43,10 @@ export const optionalNumber = (label: string, range: { min?: number; max?: numbe
     { error: `${label}: ${rangeWords(range)}.` },
   );
 
-export const requiredNumber = (label: string, range: { min?: number; max?: number; above?: number } = {}) =>
+export const requiredNumber = (
+  label: string,
+  range: { min?: number; max?: number; above?: number } = {},
+) =>
   optionalNumber(label, range)
     .refine((value) => value !== null, { error: `${label}: a number is needed.` })
     .transform((value) => value as number);

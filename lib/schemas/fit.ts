@@ -183,7 +183,9 @@ export const fitSchema = fitRowSchema.extend({
   observable: z.enum(OBSERVABLES),
   spec: fitSpecSchema,
   /** The points as they were when the fit was frozen. */
-  points: z.array(z.object({ energyKeV: z.number(), value: z.number(), sigma: z.number(), enabled: z.boolean() })),
+  points: z.array(
+    z.object({ energyKeV: z.number(), value: z.number(), sigma: z.number(), enabled: z.boolean() }),
+  ),
   answer: fitAnswerSchema,
   carrierProfile: carrierProfileSchema,
   checks: z.array(checkSchema),
@@ -211,7 +213,9 @@ export const commentFitSchema = z.object({
   body: text('Comment', 2000),
   target: optionalText('About', 80),
 });
-export const compareFitsSchema = z.object({ ids: z.array(idSchema).min(2, 'Choose two fits or more.').max(8) });
+export const compareFitsSchema = z.object({
+  ids: z.array(idSchema).min(2, 'Choose two fits or more.').max(8),
+});
 
 export const listFitsSchema = z.object({
   scanId: idSchema.optional(),

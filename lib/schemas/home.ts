@@ -11,6 +11,11 @@ export const homeSchema = z.object({
   recentFits: z.array(fitRowSchema),
   recentProfiles: z.array(issuedProfileRowSchema),
   samples: z.array(sampleRowSchema),
-  counts: z.object({ samples: z.number(), scans: z.number(), stoppingSets: z.number(), fits: z.number() }),
+  counts: z.object({
+    samples: z.number(),
+    scans: z.number(),
+    stoppingSets: z.number(),
+    fits: z.number(),
+  }),
 });
 export type Home = z.infer<typeof homeSchema>;

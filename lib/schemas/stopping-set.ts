@@ -32,10 +32,16 @@ export const stoppingReadingSchema = z.object({
 export type StoppingReading = z.input<typeof stoppingReadingSchema>;
 
 /** The JSON part of an upload (`details`); files travel in the repeated multipart field `file`, in the order of reading.files. */
-export const stoppingUploadSchema = z.object({ meta: stoppingMetaSchema, reading: stoppingReadingSchema });
+export const stoppingUploadSchema = z.object({
+  meta: stoppingMetaSchema,
+  reading: stoppingReadingSchema,
+});
 
 export const createStoppingSetSchema = stoppingUploadSchema.extend({
-  files: z.array(z.object({ name: text('File name', 200), bytes: z.instanceof(Uint8Array) })).min(1).max(200),
+  files: z
+    .array(z.object({ name: text('File name', 200), bytes: z.instanceof(Uint8Array) }))
+    .min(1)
+    .max(200),
 });
 
 export const editStoppingSetSchema = z.object({ id: idSchema, meta: stoppingMetaSchema });
@@ -60,7 +66,9 @@ export type StoppingSetRow = z.infer<typeof stoppingSetRowSchema>;
 
 export const stoppingSetSchema = stoppingSetRowSchema.extend({
   warnings: z.array(z.string()),
-  files: z.array(z.object({ id: idSchema, name: z.string(), sha256: z.string(), byteLength: z.number() })),
+  files: z.array(
+    z.object({ id: idSchema, name: z.string(), sha256: z.string(), byteLength: z.number() }),
+  ),
   profiles: z.array(
     z.object({
       energyKeV: z.number(),

@@ -12,7 +12,13 @@ export const teamSchema = z.object({
   id: idSchema,
   name: z.string(),
   people: z.array(
-    z.object({ userId: idSchema, name: z.string(), email: z.string(), role: roleSchema, joinedAt: momentSchema }),
+    z.object({
+      userId: idSchema,
+      name: z.string(),
+      email: z.string(),
+      role: roleSchema,
+      joinedAt: momentSchema,
+    }),
   ),
   /** Open invitations, for owners only. */
   invitations: z.array(
