@@ -29,17 +29,15 @@ export function svgDocument(svg: SVGSVGElement, title: string): string {
   const name = document.createElementNS('http://www.w3.org/2000/svg', 'title');
   name.textContent = title;
   copy.prepend(name);
-  copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg');
   copy.prepend(background(svg, copy));
   return `<?xml version="1.0" encoding="UTF-8"?>\n${new XMLSerializer().serializeToString(copy)}\n`;
 }
 
 function carry(shown: Element, copy: Element): void {
   const style = getComputedStyle(shown);
+  const isText = copy.tagName === 'text' || copy.tagName === 'tspan';
   for (const property of CARRIED) {
-    if (!copy.hasAttribute(property) && !INHERITED_BY_TEXT.has(property)) continue;
-    if (INHERITED_BY_TEXT.has(property) && copy.tagName !== 'text' && copy.tagName !== 'tspan')
-      continue;
+    if (!copy.hasAttribute(property) && !(isText && OWNED_BY_TEXT.has(property))) continue;
     const value = style.getPropertyValue(property);
     if (value !== '')
       copy.setAttribute(property, COLOURS.has(property) ? plainColour(value) : value);
@@ -51,8 +49,8 @@ function carry(shown: Element, copy: Element): void {
   });
 }
 
-/** Text takes its font from the page when it names none. */
-const INHERITED_BY_TEXT = new Set<string>(['font-family', 'font-size', 'fill']);
+/** Text takes these from the page or its group when it names none itself. */
+const OWNED_BY_TEXT = new Set<string>(['font-family', 'font-size', 'fill']);
 
 function background(svg: SVGSVGElement, copy: SVGSVGElement): SVGRectElement {
   const rect = document.createElementNS('http://www.w3.org/2000/svg', 'rect');

@@ -2,6 +2,7 @@
 
 import { useState, type ComponentProps, type MouseEvent, type ReactNode } from 'react';
 
+import { withFonts } from './embed-fonts';
 import { pngOf } from './export-png';
 import { svgDocument } from './export-svg';
 import { tableAsText, type FigureTable } from './figure-table';
@@ -57,7 +58,11 @@ export function FigureTools({ title, table, svgName, children }: FigureToolsProp
           const { width, height } = svg();
           saveAs(
             `${svgName}.png`,
-            await pngOf(svgDocument(svg(), title), width.baseVal.value, height.baseVal.value),
+            await pngOf(
+              await withFonts(svgDocument(svg(), title)),
+              width.baseVal.value,
+              height.baseVal.value,
+            ),
           );
           return 'PNG saved.';
         })}

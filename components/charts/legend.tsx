@@ -2,7 +2,7 @@ import { SANS } from './axis';
 import { dashOf, strokeOf, type LineStyle } from './chart-types';
 
 /** Mean width of a letter at the legend's size, px; a legend need not be exact. */
-const LETTER = 6.1;
+const LETTER = 6.3;
 const SAMPLE = 40;
 
 interface Entry {

@@ -1,4 +1,6 @@
 const MOST_DECADES = 6;
+/** Beyond these a power of ten next to the value would be 0 or infinite. */
+const [SMALLEST, LARGEST] = [1e-290, 1e290];
 
 /**
  * [low, high] for a logarithmic axis: whole decades round the positive values, at most six of them.
@@ -12,7 +14,7 @@ export function logDomain(
   let least = Infinity;
   let most = 0;
   for (const value of values) {
-    if (value === null || !(value > 0) || !Number.isFinite(value)) continue;
+    if (value === null || !(value > SMALLEST && value < LARGEST)) continue;
     least = Math.min(least, value);
     most = Math.max(most, value);
   }

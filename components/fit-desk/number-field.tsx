@@ -5,7 +5,7 @@ import { useState } from 'react';
 import { Field } from '@/components/ui/field';
 import { TextInput } from '@/components/ui/text-input';
 
-import { readNumber, type NumberRange } from './read-number';
+import { numberText, readNumber, type NumberRange } from './read-number';
 
 interface NumberFieldProps {
   label: string;
@@ -32,7 +32,7 @@ export function NumberField({
 }: NumberFieldProps) {
   const [draft, setDraft] = useState<{ text: string; for: number | null } | null>(null);
   // A draft holds only as long as the value stays what the draft made of it: an undo shows the old number.
-  const text = draft && draft.for === value ? draft.text : value === null ? '' : String(value);
+  const text = draft && draft.for === value ? draft.text : numberText(value);
   const read = readNumber(text, label, range, optional);
   return (
     <Field

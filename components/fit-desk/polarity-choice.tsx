@@ -16,17 +16,17 @@ export function PolarityChoice({
 }) {
   return (
     <SettingGroup title="Polarity" says={value}>
-      <fieldset className="grid gap-1.5 text-sm">
+      <fieldset className="grid gap-1 text-sm">
         <legend className="sr-only">Polarity</legend>
         {POLARITIES.map((entry) => (
-          <label key={entry.value} className="flex items-start gap-2">
+          <label key={entry.value} className="flex min-h-7 items-center gap-2">
             <input
               type="radio"
               name="polarity"
               value={entry.value}
               checked={value === entry.value}
               onChange={() => onChange(entry.value)}
-              className="mt-1 accent-kelp"
+              className="size-4 accent-kelp"
             />
             {entry.label}
           </label>

@@ -34,3 +34,11 @@ function outside(value: number, { min, max, above, whole }: NumberRange): string
   if (max !== undefined && value > max) return `a number of at most ${max}`;
   return null;
 }
+
+/** A number as a field shows it, to be edited: 78.4, and 6.2e15 where the plain digits would not be read. */
+export function numberText(value: number | null): string {
+  if (value === null) return '';
+  const size = Math.abs(value);
+  const plain = value === 0 || (size >= 1e-4 && size < 1e7);
+  return plain ? String(value) : value.toExponential().replace('e+', 'e');
+}
