@@ -22,7 +22,7 @@ export async function fetchJson<Answer>(path: string, init?: RequestInit): Promi
   throw refusalOf(body, response.status);
 }
 
-function refusalOf(body: unknown, status: number): ServerRefusal {
+export function refusalOf(body: unknown, status: number): ServerRefusal {
   const error = typeof body === 'object' && body !== null && 'error' in body ? body.error : null;
   if (
     typeof error === 'object' &&
