@@ -6,7 +6,7 @@ import type { SearchGrid } from './model';
 import { createShareFold } from './workspace';
 
 /** Depth nodes of a graded edge; an edge moves the fold on the scale of the straggling, so tens of nodes find every valley. */
-const GRADED_DEPTHS = 32;
+const GRADED_DEPTHS = 28;
 /** Widths tried, as shares of the depth range: a step, then log-spaced. */
 const WIDTH_SHARES = [0, 0.012, 0.035, 0.09, 0.22, 0.5];
 /** A sharp edge has one shape parameter only and cheap folds: the lattice may be fine. */
@@ -45,6 +45,7 @@ export function buildSearchGrid(input: GridInput): SearchGrid {
   if (capNm > 0)
     foldStart(input.kernel, capNm / scale, capShares, new Float64Array(kernel.rowCount));
   const fold = createShareFold({ rowCount: kernel.rowCount, kernel, shapeCount });
+  fold.edge.derivatives = false;
   let node = 0;
   for (const width of widths) {
     for (const depth of depths) {
@@ -67,7 +68,7 @@ function blendedDepths(
   { kernel, capNm, scale, deepestNm, enabled }: GridInput,
   count: number,
 ): number[] {
-  const fine = 512;
+  const fine = 128;
   const blend = new Float64Array(fine + 1);
   const share = new Float64Array(kernel.rowCount);
   const density = new Float64Array(kernel.rowCount);

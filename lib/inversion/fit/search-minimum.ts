@@ -2,6 +2,7 @@ import type { FitStatus } from '../types';
 import { minimise, type MinimiseScratch } from './minimise';
 import type { Problem } from './model';
 import { polish } from './polish';
+import type { RefineResult } from './refine';
 import { localMinima, scanGrid, thetaOfNode } from './search';
 import { openWidths } from './widths';
 
@@ -81,17 +82,26 @@ function finish(
   return {
     theta,
     chiSquare,
-    status: result.converged
-      ? 'converged'
-      : result.iterations >= FINAL.maxIterations
-        ? 'iteration-limit'
-        : 'stalled',
+    status: statusOf(result),
     folds: evidence.folds + result.iterations,
     starts: evidence.starts,
     iterations: evidence.iterations + result.iterations,
     predictedReduction: result.predictedReduction,
     highestChiSquare,
   };
+}
+
+/** A polish that rounding stops, with next to nothing left to gain, has arrived. */
+const ROUNDING = 1e-9;
+
+function statusOf({
+  converged,
+  predictedReduction,
+  chiSquare,
+  iterations,
+}: RefineResult): FitStatus {
+  if (converged || predictedReduction <= ROUNDING * (1 + chiSquare)) return 'converged';
+  return iterations >= FINAL.maxIterations ? 'iteration-limit' : 'stalled';
 }
 
 /** Widths above this share of their range are not taken for zero. */

@@ -1,5 +1,7 @@
 /** A pivot this much smaller than its diagonal is rounding: the unknown is then not determined. */
 const SINGULAR = 1e-12;
+/** Above this share of the product of the diagonal, Cramer's rule keeps its digits. */
+const WELL_APART = 1e-6;
 
 const FREE = 0;
 const AT_LOWER = 1;
@@ -32,6 +34,10 @@ export function solveBounded(
   fallback: number,
   c: Float64Array,
 ): number {
+  if (n === 2 && !held[0] && !held[1]) {
+    const value = solvePair(gram, moment, lower, upper, offset, c);
+    if (value !== null) return value;
+  }
   for (let k = 0; k < n; k++) {
     state[k] = held[k] ? HELD : FREE;
     trial[k] = c[k]!;
@@ -50,6 +56,35 @@ export function solveBounded(
   }
   for (let k = 0; k < n; k++) c[k] = bestTrial[k]!;
   return best;
+}
+
+/** The usual case, two free levels well apart from their bounds, by Cramer's rule; null where it is not the case. */
+function solvePair(
+  gram: Float64Array,
+  moment: Float64Array,
+  lower: Float64Array,
+  upper: Float64Array,
+  offset: number,
+  c: Float64Array,
+): number | null {
+  const g00 = gram[0]!;
+  const g01 = gram[1]!;
+  const g11 = gram[3]!;
+  const determinant = g00 * g11 - g01 * g01;
+  if (!(determinant > WELL_APART * g00 * g11)) return null;
+  const first = (g11 * moment[0]! - g01 * moment[1]!) / determinant;
+  const second = (g00 * moment[1]! - g01 * moment[0]!) / determinant;
+  if (!(
+    first >= lower[offset]! &&
+    first <= upper[offset]! &&
+    second >= lower[offset + 1]! &&
+    second <= upper[offset + 1]!
+  )) {
+    return null;
+  }
+  c[0] = first;
+  c[1] = second;
+  return -(moment[0]! * first + moment[1]! * second);
 }
 
 const bestTrial = new Float64Array(3);

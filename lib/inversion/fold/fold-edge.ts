@@ -3,6 +3,8 @@ import { firstEdgeAtOrBeyond, type Kernel, type KernelGroup } from './kernel';
 
 /** Folds of one edge, one number per row of the kernel: the populated share and its derivatives. */
 export interface EdgeFold {
+  /** False leaves the derivatives alone and halves the work. */
+  derivatives: boolean;
   share: Float64Array;
   byEdge: Float64Array;
   byWidth: Float64Array;
@@ -18,6 +20,7 @@ export interface FoldScratch {
 
 export function createEdgeFold(rowCount: number): EdgeFold {
   return {
+    derivatives: true,
     share: new Float64Array(rowCount),
     byEdge: new Float64Array(rowCount),
     byWidth: new Float64Array(rowCount),
@@ -64,7 +67,8 @@ function foldGroup(
   const from = Math.max(firstEdgeAtOrBeyond(edgesNm, u - reach), afterStart);
   const to = Math.max(firstEdgeAtOrBeyond(edgesNm, u + reach), from);
   fillEdgeTerms(edgesNm, from, to, u, v, scratch);
-  sumPairs(group, from, to, scratch, out);
+  if (out.derivatives) sumPairs(group, from, to, scratch, out);
+  else sumShares(group, from, to, scratch, out);
   addTails(group, to, to < edgeCount ? edgesNm[to]! - u : 0, out);
   const startBin = cut && afterStart < edgeCount ? afterStart - 1 : -1;
   if (startBin >= 0) subtractStart(group, startBin, startNm - u, v, scratch, out);
@@ -121,6 +125,31 @@ function sumPairs(
     }
     store(out, rows[r]!, share0, cdf0, pdf0);
     if (paired) store(out, rows[r + 1]!, share1, cdf1, pdf1);
+  }
+}
+
+/** Σ_j jump_j G_j alone. */
+function sumShares(
+  { edgesNm, rows, jump }: KernelGroup,
+  from: number,
+  to: number,
+  { g }: FoldScratch,
+  out: EdgeFold,
+): void {
+  const edgeCount = edgesNm.length;
+  for (let r = 0; r < rows.length; r += 2) {
+    const paired = r + 1 < rows.length;
+    const first = r * edgeCount;
+    const second = paired ? first + edgeCount : first;
+    let share0 = 0;
+    let share1 = 0;
+    for (let j = from; j < to; j++) {
+      const gj = g[j]!;
+      share0 += jump[first + j]! * gj;
+      share1 += jump[second + j]! * gj;
+    }
+    store(out, rows[r]!, share0, 0, 0);
+    if (paired) store(out, rows[r + 1]!, share1, 0, 0);
   }
 }
 

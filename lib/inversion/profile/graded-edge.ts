@@ -29,6 +29,10 @@ export const gradedEdge: TrialProfile = {
     const { share, byEdge, byWidth, byStart } = out.edge;
     foldEdge(kernel, u, v, start, out.scratch, out.edge);
     const [intoEdge, intoWidth] = out.byShape as [Float64Array, Float64Array];
+    if (!out.edge.derivatives) {
+      out.share.set(share);
+      return;
+    }
     for (let i = 0; i < kernel.rowCount; i++) {
       out.share[i] = share[i]!;
       intoEdge[i] = byEdge[i]! / scale;
