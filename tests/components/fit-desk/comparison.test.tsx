@@ -32,7 +32,7 @@ describe('comparison of trial profiles', () => {
   });
 
   it('tests zero width against the half-half mixture (Self and Liang 1987): σ is the root of the χ² difference', () => {
-    const sigmas = Math.sqrt(sharp.answer.chiSquare - graded.answer.chiSquare);
+    const sigmas = Math.sqrt(Math.max(0, sharp.answer.chiSquare - graded.answer.chiSquare));
     expect(zeroWidthSentence([sharp, graded])).toContain(`${sigmas.toFixed(1)} σ, p = `);
     expect(zeroWidthSentence([graded])).toBeNull();
   });
