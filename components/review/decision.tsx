@@ -1,7 +1,5 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
-
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import type { FormActionFunction } from '@/components/ui/form-state';
@@ -9,19 +7,16 @@ import { TextArea } from '@/components/ui/text-area';
 
 import { FormDialog } from './form-dialog';
 
-export type AcceptAction = FormActionFunction<{ issuedProfileId: string; number: string }>;
-
 interface DecisionProps {
   fitId: string;
   fitName: string;
   may: { accept: boolean; return: boolean };
-  acceptAction: AcceptAction;
+  acceptAction: FormActionFunction<unknown>;
   returnAction: FormActionFunction<unknown>;
 }
 
 /** Accept or return. Neither shows to who may not; the server decides again. */
 export function Decision({ fitId, fitName, may, acceptAction, returnAction }: DecisionProps) {
-  const router = useRouter();
   return (
     <>
       {may.return && (
@@ -68,7 +63,6 @@ export function Decision({ fitId, fitName, may, acceptAction, returnAction }: De
           confirmLabel="Accept and issue"
           pendingLabel="Issuing…"
           action={acceptAction}
-          onDone={(issued) => issued && router.push(`/profiles/${issued.issuedProfileId}`)}
         >
           <input type="hidden" name="id" value={fitId} />
           <Field name="note" label="Note" optional hint="Stays in the history of the profile.">

@@ -9,7 +9,7 @@ import { Form } from '@/components/ui/form';
 import type { FormActionFunction } from '@/components/ui/form-state';
 import { SubmitButton } from '@/components/ui/submit-button';
 
-interface FormDialogProps<Answer> {
+interface FormDialogProps {
   trigger: ReactElement;
   title: string;
   /** What will happen, before the fields. */
@@ -17,14 +17,13 @@ interface FormDialogProps<Answer> {
   confirmLabel: string;
   pendingLabel: string;
   variant?: 'primary' | 'danger';
-  action: FormActionFunction<Answer>;
-  onDone?: (answer: Answer | undefined) => void;
+  action: FormActionFunction<unknown>;
   /** Fields, and hidden inputs. */
   children: ReactNode;
 }
 
 /** A decision with something to write: it stays open, with what was typed, when the server refuses. */
-export function FormDialog<Answer>({
+export function FormDialog({
   trigger,
   title,
   description,
@@ -32,9 +31,8 @@ export function FormDialog<Answer>({
   pendingLabel,
   variant = 'primary',
   action,
-  onDone,
   children,
-}: FormDialogProps<Answer>) {
+}: FormDialogProps) {
   const [open, setOpen] = useState(false);
   return (
     <AlertDialog.Root open={open} onOpenChange={setOpen}>
@@ -47,10 +45,7 @@ export function FormDialog<Answer>({
         <Form
           action={action}
           label={title}
-          onDone={(answer) => {
-            setOpen(false);
-            onDone?.(answer);
-          }}
+          onDone={() => setOpen(false)}
         >
           {children}
           <div className="flex flex-wrap justify-end gap-2">

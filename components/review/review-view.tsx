@@ -10,7 +10,7 @@ import type { Fit, FitRow } from '@/lib/schemas/fit';
 import { CheckList } from './check-list';
 import { CommentForm } from './comment-form';
 import { commentTargets } from './comment-targets';
-import { Decision, type AcceptAction } from './decision';
+import { Decision } from './decision';
 import { drawnFit, fileNameOf } from './drawn-fit';
 import { EdgeAnswer } from './edge-answer';
 import { SavedDepthFigure, SavedScanFigure } from './fit-figures';
@@ -35,7 +35,7 @@ interface ReviewViewProps {
   now: Date;
   /** The point that the address points at. */
   litKeV: number | null;
-  actions: { accept: AcceptAction; return: FormActionFunction; comment: FormActionFunction };
+  actions: { accept: FormActionFunction<unknown>; return: FormActionFunction; comment: FormActionFunction };
 }
 
 /** One fit as a reviewer needs it: the answer, what it rests on, what speaks against it, and what was said. */

@@ -149,7 +149,7 @@ async function submit(page: Page, address: string): Promise<void> {
   await page.goto(address);
   await page.getByRole('button', { name: 'Submit to review' }).click();
   await page.getByRole('dialog').getByRole('button', { name: 'Submit', exact: true }).click();
-  await expect(page.getByText('submitted').first()).toBeVisible();
+  await expect(page.getByText('in review').first()).toBeVisible();
 }
 
 async function compareAndDecide(

@@ -7,6 +7,9 @@ import { returnFit } from '@/db/access/review/return-fit';
 import { submitFit } from '@/db/access/review/submit-fit';
 
 export const submitFitAction = formAction(submitFit);
-export const acceptFitAction = formAction(acceptFit);
+// Once accepted the review page has no dialog left that could lead on, so the server does.
+export const acceptFitAction = formAction(acceptFit, {
+  redirectTo: ({ issuedProfileId }) => `/profiles/${issuedProfileId}`,
+});
 export const returnFitAction = formAction(returnFit);
 export const commentFitAction = formAction(commentFit);

@@ -34,7 +34,7 @@ export async function signIn(page: Page, email: string, password: string): Promi
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password').fill(password);
   await page.getByRole('button', { name: 'Sign in' }).click();
-  await expect(page.getByRole('navigation').first()).toContainText('Samples');
+  await page.waitForURL((url) => url.pathname === '/');
 }
 
 /** The people of the seeded demo team, whose password is shown openly with them. */
