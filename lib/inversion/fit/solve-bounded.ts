@@ -58,7 +58,11 @@ export function solveBounded(
   return best;
 }
 
-/** The usual case, two free levels well apart from their bounds, by Cramer's rule; null where it is not the case. */
+/**
+ * The usual case, two free levels, without lists of faces: Cramer's rule, and where that leaves the box the best point on its
+ * four sides (along a side the quadratic is a parabola, whose lowest point is clamped to the ends). Null where the two levels
+ * can hardly be told apart.
+ */
 function solvePair(
   gram: Float64Array,
   moment: Float64Array,
@@ -70,21 +74,35 @@ function solvePair(
   const g00 = gram[0]!;
   const g01 = gram[1]!;
   const g11 = gram[3]!;
+  const h0 = moment[0]!;
+  const h1 = moment[1]!;
   const determinant = g00 * g11 - g01 * g01;
   if (!(determinant > WELL_APART * g00 * g11)) return null;
-  const first = (g11 * moment[0]! - g01 * moment[1]!) / determinant;
-  const second = (g00 * moment[1]! - g01 * moment[0]!) / determinant;
-  if (!(
-    first >= lower[offset]! &&
-    first <= upper[offset]! &&
-    second >= lower[offset + 1]! &&
-    second <= upper[offset + 1]!
-  )) {
-    return null;
+  const low0 = lower[offset]!;
+  const high0 = upper[offset]!;
+  const low1 = lower[offset + 1]!;
+  const high1 = upper[offset + 1]!;
+  const free0 = (g11 * h0 - g01 * h1) / determinant;
+  const free1 = (g00 * h1 - g01 * h0) / determinant;
+  if (free0 >= low0 && free0 <= high0 && free1 >= low1 && free1 <= high1) {
+    c[0] = free0;
+    c[1] = free1;
+    return -(h0 * free0 + h1 * free1);
   }
-  c[0] = first;
-  c[1] = second;
-  return -(moment[0]! * first + moment[1]! * second);
+  let best = Infinity;
+  for (let side = 0; side < 4; side++) {
+    const fixed = side === 0 ? low0 : side === 1 ? high0 : side === 2 ? low1 : high1;
+    if (!Number.isFinite(fixed)) continue;
+    const first = side < 2 ? fixed : Math.min(Math.max((h0 - g01 * fixed) / g00, low0), high0);
+    const second = side < 2 ? Math.min(Math.max((h1 - g01 * fixed) / g11, low1), high1) : fixed;
+    const value =
+      first * (g00 * first + 2 * (g01 * second - h0)) + second * (g11 * second - 2 * h1);
+    if (value >= best) continue;
+    best = value;
+    c[0] = first;
+    c[1] = second;
+  }
+  return best;
 }
 
 const bestTrial = new Float64Array(3);
