@@ -42,11 +42,7 @@ export function FormDialog({
         <AlertDialog.Description render={<div />} className="grid gap-2 text-sm text-ink-2">
           {description}
         </AlertDialog.Description>
-        <Form
-          action={action}
-          label={title}
-          onDone={() => setOpen(false)}
-        >
+        <Form action={action} label={title} onDone={() => setOpen(false)}>
           {children}
           <div className="flex flex-wrap justify-end gap-2">
             <AlertDialog.Close render={<Button>Cancel</Button>} />

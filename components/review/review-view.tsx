@@ -35,7 +35,11 @@ interface ReviewViewProps {
   now: Date;
   /** The point that the address points at. */
   litKeV: number | null;
-  actions: { accept: FormActionFunction<unknown>; return: FormActionFunction; comment: FormActionFunction };
+  actions: {
+    accept: FormActionFunction<unknown>;
+    return: FormActionFunction;
+    comment: FormActionFunction;
+  };
 }
 
 /** One fit as a reviewer needs it: the answer, what it rests on, what speaks against it, and what was said. */

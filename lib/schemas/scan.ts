@@ -65,13 +65,6 @@ export const createScanSchema = z.object({
   ]),
 });
 
-/** The JSON part of an upload (`details`); the bytes travel beside it in the multipart field `file`. */
-export const scanUploadSchema = z.object({
-  sampleId: idSchema,
-  meta: scanMetaSchema,
-  reading: scanReadingSchema,
-});
-
 export const editScanSchema = z.object({
   id: idSchema,
   meta: scanMetaSchema,

@@ -61,7 +61,9 @@ test('someone from another team finds nothing', async ({ browser }) => {
   await outsider.page.getByRole('button', { name: 'Make the team' }).click();
   await expect(outsider.page.getByRole('heading', { level: 1 })).toContainText('Elsewhere');
   await outsider.page.goto(address);
-  await expect(outsider.page.getByRole('heading', { level: 1 })).toContainText('Nothing at this address');
+  await expect(outsider.page.getByRole('heading', { level: 1 })).toContainText(
+    'Nothing at this address',
+  );
   await expect(outsider.page.getByText(/SL-\d{4}-\d{3}/)).toHaveCount(0);
   const id = address.split('/').at(-1);
   const csv = await outsider.context.request.get(`/api/profiles/${id}/export`);

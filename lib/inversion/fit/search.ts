@@ -2,13 +2,6 @@ import { levelEquations } from './evaluate';
 import type { Problem } from './model';
 import { solveBounded } from './solve-bounded';
 
-/** χ² at every node of the search lattice, and the best local minima of it. */
-export interface SearchResult {
-  chiSquares: Float64Array;
-  /** Node numbers of local minima, best first. */
-  starts: number[];
-}
-
 /** χ² at every node, levels solved exactly, θ's priors on the nonlinear parameters included. Written to chiSquares. */
 export function scanGrid(
   { model, data, work, fallback }: Problem,

@@ -1,4 +1,4 @@
-import { expect, type Browser, type BrowserContext, type Page } from '@playwright/test';
+import { type Browser, type BrowserContext, type Page } from '@playwright/test';
 
 /** One person's browser: an own context, and a record of everything that must not happen. */
 export interface PersonBrowser {
