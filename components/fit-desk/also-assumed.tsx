@@ -1,3 +1,5 @@
+import { memo } from 'react';
+
 import type { ScanPoint } from '@/lib/inversion/index';
 import type { Sample } from '@/lib/schemas/sample';
 import type { Scan } from '@/lib/schemas/scan';
@@ -23,8 +25,11 @@ interface AlsoAssumedProps {
   change: (change: (present: Assumptions) => Assumptions, kind?: string) => void;
 }
 
-/** Everything assumed besides the trial profile and its parameters, folded to one line each. */
-export function AlsoAssumed({
+/**
+ * Everything assumed besides the trial profile and its parameters, folded to one line each. Not drawn
+ * anew while a handle moves.
+ */
+export const AlsoAssumed = memo(function AlsoAssumed({
   assumptions,
   scan,
   sample,
@@ -86,7 +91,7 @@ export function AlsoAssumed({
       />
     </section>
   );
-}
+});
 
 function capText(thicknessNm: number, { capMaterial }: Sample): string {
   return thicknessNm === 0 ? 'none' : [`${thicknessNm} nm`, capMaterial].filter(Boolean).join(', ');

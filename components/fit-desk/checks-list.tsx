@@ -1,3 +1,5 @@
+import { memo } from 'react';
+
 import { Mark } from '@/components/ui/mark';
 import type { Check } from '@/lib/inversion/index';
 
@@ -6,8 +8,11 @@ const WORDS = { problem: 'Problem', caution: 'Caution', fine: 'Fine' } as const;
 const MOST_AT_ONCE = 3;
 const RANK = { problem: 0, caution: 1, fine: 2 } as const;
 
-/** Checks in words; what needs attention first, what is fine folded away behind its number. */
-export function ChecksList({
+/**
+ * Checks in words; what needs attention first, what is fine folded away behind its number. Not drawn
+ * anew while a handle moves.
+ */
+export const ChecksList = memo(function ChecksList({
   checks,
   outOfDate,
 }: {
@@ -39,7 +44,7 @@ export function ChecksList({
       )}
     </section>
   );
-}
+});
 
 function Sentences({ checks }: { checks: readonly Check[] }) {
   return (

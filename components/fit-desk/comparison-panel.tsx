@@ -1,3 +1,5 @@
+import { memo } from 'react';
+
 import { EvidenceTable } from '@/components/charts/evidence-table';
 import { Notice } from '@/components/ui/notice';
 import type { ProfileKind } from '@/lib/inversion/index';
@@ -6,14 +8,19 @@ import { evidenceRows, zeroWidthSentence } from './comparison';
 import { profileKind } from './profile-kinds';
 import type { ComparisonInHand } from './use-comparison';
 
-interface ComparisonPanelProps {
-  comparison: Pick<ComparisonInHand, 'result' | 'busy' | 'error'> & { outOfDate: boolean };
+interface ComparisonPanelProps extends Pick<ComparisonInHand, 'result' | 'busy' | 'error'> {
+  outOfDate: boolean;
   current: ProfileKind;
 }
 
 /** Every trial profile on the same data: evidence, and whether the data ask for a width. */
-export function ComparisonPanel({ comparison, current }: ComparisonPanelProps) {
-  const { result, busy, error, outOfDate } = comparison;
+export const ComparisonPanel = memo(function ComparisonPanel({
+  result,
+  busy,
+  error,
+  outOfDate,
+  current,
+}: ComparisonPanelProps) {
   const evidence = result ? evidenceRows(result.fits, current) : null;
   const sentence = result ? zeroWidthSentence(result.fits) : null;
   return (
@@ -44,4 +51,4 @@ export function ComparisonPanel({ comparison, current }: ComparisonPanelProps) {
       )}
     </section>
   );
-}
+});

@@ -146,13 +146,14 @@ function Reading({
   depthScale,
   capThicknessNm,
   carrier,
+  handle,
 }: DepthPanelProps) {
   const main = profiles[0]?.profile ?? null;
   if (readDepthNm === null)
     return (
       <>
         Point at a depth to see which energies speak about it, at a ridge to find its point.{' '}
-        {main ? 'Drag the edge, or move it with the arrow keys.' : ''}
+        {main && handle ? 'Drag the edge, or move it with the arrow keys.' : ''}
       </>
     );
   if (readDepthNm < 0)

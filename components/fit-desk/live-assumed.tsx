@@ -12,6 +12,9 @@ import { ProfileChoice } from './profile-choice';
 import type { DeskFigures } from './use-desk-figures';
 import type { FitDesk } from './use-fit-desk';
 
+/** One empty list, so that nothing is drawn anew for another one. */
+const NOTHING: readonly never[] = [];
+
 interface LiveAssumedProps {
   desk: FitDesk;
   figures: DeskFigures;
@@ -69,10 +72,10 @@ export function LiveAssumed({ desk, figures, scan, sample, stoppingSets }: LiveA
         points={desk.points}
         sets={stoppingSets}
         interpolatedKeV={figures.interpolatedKeV}
-        warnings={desk.stopping.answer?.warnings ?? []}
+        warnings={desk.stopping.answer?.warnings ?? NOTHING}
         change={change}
       />
-      <ChecksList checks={fit.good?.checks ?? []} outOfDate={outOfDate} />
+      <ChecksList checks={fit.good?.checks ?? NOTHING} outOfDate={outOfDate} />
     </form>
   );
 }

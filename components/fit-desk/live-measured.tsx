@@ -18,7 +18,7 @@ interface LiveMeasuredProps {
 
 /** The middle column at work: the scan with its handles, and the comparison. */
 export function LiveMeasured({ desk, figures, hover, observable, svgName }: LiveMeasuredProps) {
-  const { assumptions, change, drawing, fit } = desk;
+  const { assumptions, change, drawing, fit, comparison } = desk;
   return (
     <>
       <ScanPanel
@@ -51,7 +51,10 @@ export function LiveMeasured({ desk, figures, hover, observable, svgName }: Live
         svgName={svgName}
       />
       <ComparisonPanel
-        comparison={desk.comparison}
+        result={comparison.result}
+        busy={comparison.busy}
+        error={comparison.error}
+        outOfDate={comparison.outOfDate}
         current={fit.good?.input.profile ?? assumptions.profile}
       />
     </>

@@ -81,9 +81,7 @@ export function ParameterRow({
             className="justify-self-end"
           />
         ) : (
-          <span className="justify-self-end text-[0.8125rem] text-ink-3">
-            {setting.held ? 'held' : ''}
-          </span>
+          <span />
         )}
       </div>
       {note && <p className="text-[0.8125rem] text-ink-3">{note}</p>}

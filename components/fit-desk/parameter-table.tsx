@@ -31,7 +31,7 @@ export function ParameterTable({
         <span>parameter</span>
         <span className="flex gap-3">
           <span>value, 68 %</span>
-          <span>hold</span>
+          {edit ? <span>hold</span> : <span className="w-6" />}
         </span>
       </div>
       <ul>

@@ -1,6 +1,6 @@
 'use client';
 
-import { useMemo } from 'react';
+import { memo, useMemo } from 'react';
 
 import type { ResidualSeries, ScanCurve, ScanMark } from '@/components/charts/chart-types';
 import { Figure } from '@/components/charts/figure';
@@ -106,28 +106,50 @@ export function ScanPanel(props: ScanPanelProps) {
           </div>
         )}
       </Figure>
-      <Figure
-        title="Residuals"
-        table={residualTable(residuals)}
+      <ResidualFigure
+        series={residuals}
+        points={points}
+        highlightedKeV={props.highlightedKeV}
         svgName={`${props.svgName}-residuals`}
-        height={RESIDUAL_HEIGHT}
-      >
-        {(width) => (
-          <ResidualChart
-            series={residuals}
-            energiesKeV={points.map(({ energyKeV }) => energyKeV)}
-            highlightedKeV={props.highlightedKeV}
-            width={width}
-            height={RESIDUAL_HEIGHT}
-          />
-        )}
-      </Figure>
+      />
       <p className="min-h-5 text-[0.8125rem] text-ink-2">
         {readingOf(props.highlightedKeV, points, fitted, edit !== null, unit)}
       </p>
     </div>
   );
 }
+
+/** Not drawn anew while a handle moves. */
+const ResidualFigure = memo(function ResidualFigure({
+  series,
+  points,
+  highlightedKeV,
+  svgName,
+}: {
+  series: readonly ResidualSeries[];
+  points: readonly ScanPoint[];
+  highlightedKeV: number | null;
+  svgName: string;
+}) {
+  return (
+    <Figure
+      title="Residuals"
+      table={residualTable(series)}
+      svgName={svgName}
+      height={RESIDUAL_HEIGHT}
+    >
+      {(width) => (
+        <ResidualChart
+          series={series}
+          energiesKeV={points.map(({ energyKeV }) => energyKeV)}
+          highlightedKeV={highlightedKeV}
+          width={width}
+          height={RESIDUAL_HEIGHT}
+        />
+      )}
+    </Figure>
+  );
+});
 
 const ignore = () => {};
 

@@ -268,23 +268,24 @@ describe('model comparison', () => {
   it('says what it is for before it was asked for, and that it is out of date after a change', () => {
     const { rerender } = render(
       <ComparisonPanel
-        comparison={{ result: null, busy: false, error: null, outOfDate: false }}
+        result={null}
+        busy={false}
+        error={null}
+        outOfDate={false}
         current="graded"
       />,
     );
     expect(screen.getByText(/Compare all fits every trial profile/)).toBeTruthy();
     rerender(
       <ComparisonPanel
-        comparison={{
-          result: {
-            key: 'k',
-            fits: [],
-            refusals: [{ kind: 'graded', message: 'Too few points.' }],
-          },
-          busy: false,
-          error: null,
-          outOfDate: true,
+        result={{
+          key: 'k',
+          fits: [],
+          refusals: [{ kind: 'graded', message: 'Too few points.' }],
         }}
+        busy={false}
+        error={null}
+        outOfDate
         current="graded"
       />,
     );
