@@ -8,7 +8,7 @@ import { depthLimit } from '@/components/charts/depth-layout';
 import { Figure } from '@/components/charts/figure';
 import { parameterParts } from '@/components/review/parameter-value';
 import { asEntered, significant, withDecimals } from '@/lib/format';
-import type { FitAnswer, ScanPoint } from '@/lib/inversion/index';
+import type { FitAnswer, FitParameter, ScanPoint } from '@/lib/inversion/index';
 
 import { AnswerHeadline } from './answer-headline';
 import { DepthOverlay, type DepthOverlayProps } from './depth-overlay';
@@ -96,7 +96,7 @@ export function DepthPanel(props: DepthPanelProps) {
             profiles={profiles.length > 0 ? profiles : NOTHING}
             information={props.information}
             edgeNm={edge?.value ?? null}
-            edgeLabel={edge ? `edge ${withDecimals(edge.value, 1)} nm` : undefined}
+            edgeLabel={edge ? `edge ${shortValue(edge)} nm` : undefined}
             edgeInterval={edge && !edge.held ? edge.interval68 : undefined}
             carrier={carrier}
             depthScale={depthScale}
@@ -133,6 +133,12 @@ export function DepthPanel(props: DepthPanelProps) {
       )}
     </Figure>
   );
+}
+
+/** The value as beside its interval; three digits where an interval does not set them. */
+function shortValue(edge: FitParameter): string {
+  const parts = parameterParts(edge, 'nm');
+  return edge.held || parts.plus === null ? significant(edge.value) : parts.value;
 }
 
 const ignore = () => {};

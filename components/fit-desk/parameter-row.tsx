@@ -133,7 +133,7 @@ function ValueText({
     return (
       <span
         title={parts.full}
-        className={`text-right figures text-[0.8125rem] ${outOfDate ? 'text-ink-3' : ''}`}
+        className={`max-w-36 text-right figures text-[0.8125rem] ${outOfDate ? 'text-ink-3' : ''}`}
       >
         {parts.sentence}
       </span>
