@@ -5,6 +5,7 @@ import { startTransition, useActionState, type ReactNode } from 'react';
 import { Button, type ButtonProps } from './button';
 import type { FormActionFunction } from './form-state';
 import { Mark } from './mark';
+import { reachable } from './reachable';
 
 type ActionButtonProps<Answer> = Omit<ButtonProps, 'onClick' | 'pending' | 'type'> & {
   action: FormActionFunction<Answer>;
@@ -20,7 +21,7 @@ export function ActionButton<Answer>({
   children,
   ...rest
 }: ActionButtonProps<Answer>) {
-  const [state, dispatch, pending] = useActionState(action, null);
+  const [state, dispatch, pending] = useActionState(reachable(action), null);
   return (
     <span className="inline-flex flex-wrap items-center">
       <Button {...rest} pending={pending} onClick={() => startTransition(() => dispatch(input))}>

@@ -13,6 +13,7 @@ import { Button } from './button';
 import { DialogSheet } from './dialog-parts';
 import type { FormActionFunction, FormState } from './form-state';
 import { Notice } from './notice';
+import { reachable } from './reachable';
 
 type ConfirmDialogProps<Answer> = {
   trigger: ReactElement;
@@ -44,7 +45,7 @@ export function ConfirmDialog<Answer>({
 }: ConfirmDialogProps<Answer>) {
   const [open, setOpen] = useState(false);
   const [state, confirm, pending] = useActionState(async (previous: FormState<Answer>) => {
-    const answer = await action(previous, input);
+    const answer = await reachable(action)(previous, input);
     if (answer?.ok) {
       setOpen(false);
       onDone?.();

@@ -13,6 +13,7 @@ import { cn } from './cn';
 import { FormContext } from './form-context';
 import type { FormActionFunction, FormState } from './form-state';
 import { Notice } from './notice';
+import { reachable } from './reachable';
 
 type FormProps<Answer> = {
   action: FormActionFunction<Answer>;
@@ -37,7 +38,7 @@ export function Form<Answer>({
   onDone,
   children,
 }: FormProps<Answer>) {
-  const [state, dispatch, pending] = useActionState(action, null);
+  const [state, dispatch, pending] = useActionState(reachable(action), null);
   const form = useRef<HTMLFormElement>(null);
   const handleAnswer = useEffectEvent((answer: FormState<Answer>) => {
     if (answer?.ok) onDone?.(answer.answer);

@@ -48,6 +48,16 @@ describe('Form', () => {
     expect(sent).toEqual([{ name: 'NB-34', doping: '1.1e16' }]);
   });
 
+  it('keeps what was typed when the server cannot be reached, and says so', async () => {
+    // What a browser's fetch rejects with, by the Fetch standard.
+    const { onDone } = show(() => Promise.reject(new TypeError('Failed to fetch')));
+    type('Name', 'NB-34');
+    submit();
+    expect((await screen.findByRole('alert')).textContent).toContain('could not be reached');
+    expect(screen.getByLabelText<HTMLInputElement>('Name').value).toBe('NB-34');
+    expect(onDone).not.toHaveBeenCalled();
+  });
+
   it('keeps what was typed when refused, and puts the focus on the first wrong field', async () => {
     const refusal = {
       ok: false as const,
