@@ -171,11 +171,13 @@ describe('whole inversions against general-purpose libraries', () => {
     // Minos is compared where it found the same minimum, calls itself valid and closes both ends away from a limit.
     const { iminuit } = c.reference;
     const closed = iminuit?.valid && Math.abs(iminuit.chiSquare - c.reference.chiSquare) < 1e-4;
-    it.runIf(closed)('agrees with minos', () => {
-      for (const [name, ends] of Object.entries(iminuit!.minos68) as [ParameterName, Ends][]) {
-        if (ends[0] === null || ends[1] === null || ends[0] <= 0) continue;
-        expectEnds(found(name).interval68, ends, found(name).value, `minos of ${name}`);
-      }
-    });
+    if (closed) {
+      it('agrees with minos', () => {
+        for (const [name, ends] of Object.entries(iminuit!.minos68) as [ParameterName, Ends][]) {
+          if (ends[0] === null || ends[1] === null || ends[0] <= 0) continue;
+          expectEnds(found(name).interval68, ends, found(name).value, `minos of ${name}`);
+        }
+      });
+    }
   });
 });

@@ -1,128 +1,76 @@
-import { levenbergMarquardt } from 'ml-levenberg-marquardt';
-import { evaluate, fillJacobian, foldAt, objectiveAt, predictFromFold } from './evaluate';
+import { evaluate, fillJacobian, foldAt, predictFromFold } from './evaluate';
+import { leastSquares, type LeastSquaresProblem, type LeastSquaresResult } from './least-squares';
 import type { Problem } from './model';
-import { fillNormalEquations, solveStep } from './normal-equations';
-import { findActive, type RefineScratch } from './refine';
 
-export interface PolishResult {
-  chiSquare: number;
-  iterations: number;
-  predictedReduction: number;
-  converged: boolean;
-}
-
-/** Iterations of the library between two looks at the gradient: it has no test of its own that stops on noisy data. */
-const BLOCK = 3;
-const MOST_BLOCKS = 20;
+const MOST_ROUNDS = 20;
 
 /**
- * Levenberg-Marquardt in all free parameters at once by ml-levenberg-marquardt, made to hold up: data whitened (weights 1,
- * one row per prior), parameters scaled by the diagonal of the normal matrix (its damping is λ·I), analytic Jacobian, held
- * parameters and those pressed against a bound left out (it only clips), and stopped by what the undamped step promises
- * (≤ tolerance·(1 + Φ)) or by a block that brings nothing. θ is improved in place and never made worse.
+ * Polish in all free parameters at once, levels included, by the general least-squares solver: θ is improved in place and
+ * never made worse. Priors are rows of their own.
  */
 export function polish(
   problem: Problem,
   theta: Float64Array,
-  scratch: RefineScratch,
   tolerance: number,
-): PolishResult {
+): LeastSquaresResult {
   const { model } = problem;
-  const { normal, active } = scratch;
-  let chiSquare = evaluate(problem, theta, model.held);
-  let iterations = 0;
-  let damping = 1e-3;
-  for (let block = 0; ; block++) {
-    fillJacobian(problem, theta);
-    fillNormalEquations(problem, theta, normal);
-    findActive(problem, theta, model.held, normal, active);
-    const predictedReduction = solveStep(normal, active, 0, 0, 0);
-    const converged = predictedReduction <= tolerance * (1 + chiSquare);
-    if (converged || block === MOST_BLOCKS || damping > 1e6) {
-      return { chiSquare, iterations, predictedReduction, converged };
-    }
-    const trial = runBlock(problem, theta, scratch, damping);
-    iterations += trial.iterations;
-    const next = evaluate(problem, trial.theta, model.held);
-    damping = next < chiSquare ? Math.max(damping / 100, 1e-7) : damping * 100;
-    if (next < chiSquare) {
-      chiSquare = next;
-      theta.set(trial.theta);
-    } else evaluate(problem, theta, model.held);
-  }
+  const free = Array.from(model.names.keys()).filter((k) => !model.held[k]);
+  evaluate(problem, theta, model.held);
+  const point = Float64Array.from(free, (k) => theta[k]!);
+  const result = leastSquares(whitened(problem, theta, free), point, {
+    tolerance,
+    floor: 1,
+    mostRounds: MOST_ROUNDS,
+  });
+  free.forEach((k, a) => {
+    theta[k] = point[a]!;
+  });
+  return result;
 }
 
-function runBlock(
+/** The fit as whitened rows: one per point (0 where switched off), then one per prior. */
+function whitened(
   problem: Problem,
   theta: Float64Array,
-  { normal, active }: RefineScratch,
-  damping: number,
-): { theta: Float64Array; iterations: number } {
-  const { model } = problem;
-  const moving = Array.from(model.names.keys()).filter((k) => !active[k]);
-  const scale = moving.map((k) => 1 / Math.sqrt(normal.matrix[k * model.size + k]!));
-  const rows = whitenedRows(problem, theta, moving, scale);
-  const { parameterValues, iterations } = levenbergMarquardt({ x: rows.x, y: rows.y }, rows.model, {
-    initialValues: moving.map((k, a) => theta[k]! / scale[a]!),
-    minValues: moving.map((k, a) => model.lower[k]! / scale[a]!),
-    maxValues: moving.map((k, a) => model.upper[k]! / scale[a]!),
-    jacobianFunction: rows.jacobian,
-    damping,
-    maxIterations: BLOCK,
-    errorTolerance: 0,
-  });
-  const next = Float64Array.from(theta);
-  moving.forEach((k, a) => {
-    next[k] = Math.min(Math.max(parameterValues[a]! * scale[a]!, model.lower[k]!), model.upper[k]!);
-  });
-  return { theta: next, iterations };
-}
-
-/** The whitened problem in the form that the library takes: x is a row number, rows past the points are priors. */
-function whitenedRows(
-  problem: Problem,
-  theta: Float64Array,
-  moving: readonly number[],
-  scale: readonly number[],
-) {
+  free: readonly number[],
+): LeastSquaresProblem {
   const { model, data, work } = problem;
   const { rowCount, priorInverseSigma } = model;
-  const priors = moving.filter((k) => priorInverseSigma[k]! > 0);
-  const point = Float64Array.from(theta);
-  const folded = new Array<number>(moving.length).fill(NaN);
-  // The library asks for value, error and Jacobian of one point in turn: fold it once.
-  const foldOnce = (parameters: readonly number[]): void => {
-    if (parameters.every((value, a) => value === folded[a])) return;
-    parameters.forEach((value, a) => {
-      folded[a] = value;
-      point[moving[a]!] = value * scale[a]!;
+  const priors = free.filter((k) => priorInverseSigma[k]! > 0);
+  const rows = rowCount + priors.length;
+  const full = Float64Array.from(theta);
+  const foldPoint = (values: ArrayLike<number>): void => {
+    free.forEach((k, a) => {
+      full[k] = values[a]!;
     });
-    foldAt(model, work, point);
-    predictFromFold(model, work, point);
-    objectiveAt(model, data, work, point);
+    foldAt(model, work, full);
   };
   return {
-    x: Array.from({ length: rowCount + priors.length }, (_, i) => i),
-    y: [
+    size: free.length,
+    rows,
+    target: [
       ...Array.from(data.y, (value, i) => value * data.inverseSigma[i]!),
       ...priors.map((k) => data.priorMean[k]! * priorInverseSigma[k]!),
     ],
-    model: (parameters: number[]) => {
-      foldOnce(parameters);
-      return (i: number) => {
-        if (i < rowCount) return work.predicted[i]! * data.inverseSigma[i]!;
-        const k = priors[i - rowCount]!;
-        return point[k]! * priorInverseSigma[k]!;
-      };
+    lower: free.map((k) => model.lower[k]!),
+    upper: free.map((k) => model.upper[k]!),
+    predict(values, into) {
+      foldPoint(values);
+      predictFromFold(model, work, full);
+      for (let i = 0; i < rowCount; i++) into[i] = work.predicted[i]! * data.inverseSigma[i]!;
+      priors.forEach((k, p) => {
+        into[rowCount + p] = full[k]! * priorInverseSigma[k]!;
+      });
     },
-    jacobian: (parameters: number[]) => {
-      foldOnce(parameters);
-      fillJacobian(problem, point);
-      return (i: number) =>
-        moving.map((k, a) => {
-          if (i < rowCount) return work.jacobian[k * rowCount + i]! * scale[a]!;
-          return k === priors[i - rowCount] ? priorInverseSigma[k]! * scale[a]! : 0;
+    jacobian(values, into) {
+      foldPoint(values);
+      fillJacobian(problem, full);
+      free.forEach((k, a) => {
+        into.set(work.jacobian.subarray(k * rowCount, (k + 1) * rowCount), a * rows);
+        priors.forEach((l, p) => {
+          into[a * rows + rowCount + p] = l === k ? priorInverseSigma[k]! : 0;
         });
+      });
     },
   };
 }

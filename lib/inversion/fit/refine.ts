@@ -105,7 +105,7 @@ export function refine(
 }
 
 /** Marks what may not move: held parameters, and those at a bound whose gradient points outward. */
-export function findActive(
+function findActive(
   problem: Problem,
   theta: Float64Array,
   held: Uint8Array,

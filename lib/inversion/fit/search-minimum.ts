@@ -10,7 +10,7 @@ import { openWidths } from './widths';
 const STARTS = 3;
 /** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
 const VALLEY = { maxIterations: 60, tolerance: 1e-5 };
-const POLISH_TOLERANCE = 1e-10;
+const POLISH_TOLERANCE = 1e-8;
 const FINAL = { maxIterations: 100, tolerance: 1e-13 };
 
 export interface GlobalMinimum {
@@ -51,7 +51,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   }
   const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };
   if (!model.trial.kinked)
-    evidence.iterations += polish(problem, theta, scratch.refine, POLISH_TOLERANCE).iterations;
+    evidence.iterations += polish(problem, theta, POLISH_TOLERANCE).iterations;
   return finish(problem, scratch, theta, evidence, highestOverDepths(grid.lattice, chiSquares));
 }
 

@@ -1,62 +1,39 @@
-import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import { fillJacobian, foldAt } from '../fit/evaluate';
 import type { Problem } from '../fit/model';
-import { createNormalEquations, fillNormalEquations } from '../fit/normal-equations';
-import type { Covariance, ParameterName } from '../types';
-
-/** Smallest eigenvalue of the scaled normal matrix that still leaves half of the digits of a variance. */
-const SMALLEST_EIGENVALUE = 1e-11;
+import { covarianceOfJacobian } from '../linalg/covariance-of-jacobian';
+import type { Covariance } from '../types';
 
 /**
- * Covariance (JᵀV⁻¹J + priors)⁻¹ at the minimum from the analytic Jacobian, over the free parameters that are not at a
- * bound; scaled to unit diagonal before it is inverted, so that units do not matter.
+ * Covariance (JᵀV⁻¹J + priors)⁻¹ at the minimum from the analytic Jacobian, over the free parameters that are not at a bound.
+ * Priors are rows of the Jacobian.
  *
  * @returns ok: false where the data leave a combination of parameters undetermined.
  */
 export function covarianceAt(problem: Problem, theta: Float64Array): Covariance {
-  const { model } = problem;
-  const { size, names } = model;
-  const normal = createNormalEquations(size);
-  foldAt(model, problem.work, theta);
+  const { model, work } = problem;
+  const { rowCount, size, priorInverseSigma } = model;
+  foldAt(model, work, theta);
   fillJacobian(problem, theta);
-  fillNormalEquations(problem, theta, normal);
   const inside = Array.from({ length: size }, (_, k) => k).filter(
     (k) => !model.held[k] && theta[k]! > model.lower[k]! && theta[k]! < model.upper[k]!,
   );
+  const names = inside.map((k) => model.names[k]!);
   if (inside.length === 0) return { ok: false, reason: 'Every parameter is held or at a bound.' };
-  const scale = inside.map((k) => Math.sqrt(normal.matrix[k * size + k]!));
-  const blind = inside.find((_, a) => !(scale[a]! > 0));
-  if (blind !== undefined)
-    return { ok: false, reason: `The points do not depend on ${names[blind]!}.` };
-  const scaled = new Matrix(
-    inside.map((k, a) =>
-      inside.map((l, b) => normal.matrix[k * size + l]! / (scale[a]! * scale[b]!)),
-    ),
-  );
-  return invertScaled(
-    scaled,
-    scale,
-    inside.map((k) => names[k]!),
-  );
-}
-
-function invertScaled(scaled: Matrix, scale: number[], names: ParameterName[]): Covariance {
-  const { realEigenvalues, eigenvectorMatrix } = new EigenvalueDecomposition(scaled, {
-    assumeSymmetric: true,
+  const rows = rowCount + inside.length;
+  const jacobian = new Float64Array(rows * inside.length);
+  inside.forEach((k, a) => {
+    jacobian.set(work.jacobian.subarray(k * rowCount, (k + 1) * rowCount), a * rows);
+    jacobian[a * rows + rowCount + a] = priorInverseSigma[k]!;
   });
-  const smallest = Math.min(...realEigenvalues);
-  if (!(smallest > SMALLEST_EIGENVALUE)) {
-    return {
-      ok: false,
-      reason: `The points leave a combination of ${names.join(', ')} undetermined.`,
-    };
+  const result = covarianceOfJacobian(jacobian, rows, inside.length);
+  if (!result.ok) {
+    const reason =
+      result.blind === 'dependent'
+        ? `The points leave a combination of ${names.join(', ')} undetermined.`
+        : `The points do not depend on ${names[result.blind]!}.`;
+    return { ok: false, reason };
   }
-  const weighted = Matrix.mul(eigenvectorMatrix, 1);
-  realEigenvalues.forEach((value, k) => weighted.mulColumn(k, 1 / value));
-  const inverse = weighted.mmul(eigenvectorMatrix.transpose());
-  const matrix = names.map((_, a) =>
-    names.map((__, b) => (inverse.get(a, b) + inverse.get(b, a)) / (2 * scale[a]! * scale[b]!)),
-  );
+  const { matrix } = result;
   const correlation = matrix.map((row, a) =>
     row.map((value, b) => (a === b ? 1 : value / Math.sqrt(matrix[a]![a]! * matrix[b]![b]!))),
   );
