@@ -40,7 +40,12 @@ export function CarrierPanel({
         {title}
       </AxisTitle>
       <Legend entries={entries} right={right} y={fits ? top - 9 : top - 27} />
-      <AxisLeft ticks={scale.ticks} at={left} grid={right - left} />
+      {first === null && (
+        <HatchLabel x={(left + right) / 2} y={top + height / 2}>
+          The carriers follow from the fit.
+        </HatchLabel>
+      )}
+      <AxisLeft ticks={first === null ? [] : scale.ticks} at={left} grid={right - left} />
       {first && <Unknown profile={first} scale={scale} x={x} top={top} height={height} />}
       {/* A nested svg clips what leaves the panel and needs no id. */}
       <svg x={left} y={top} width={right - left} height={height} overflow="hidden">
@@ -129,23 +134,28 @@ function Unknown({
           beyond reach
         </HatchLabel>
       )}
-      {spans.map(([from, to]) => (
-        <g key={from}>
-          <Hatch
-            x={x(from)}
-            y={floorY}
-            width={Math.min(x(to), reach) - x(from)}
-            height={top + height - floorY}
-          />
-          {Math.min(x(to), reach) - x(from) > 90 && top + height - floorY > 18 && (
-            <HatchLabel x={x(from) + 8} y={Math.min(top + height - 8, floorY + 18)} anchor="start">
-              below the floor
-            </HatchLabel>
-          )}
-        </g>
-      ))}
+      {spans.map(([from, to]) => {
+        const width = Math.min(x(to), reach) - x(from);
+        const room = top + height - floorY;
+        return (
+          <g key={from}>
+            <Hatch x={x(from)} y={floorY} width={width} height={room} />
+            {floorLines(width, room).map((line, index) => (
+              <HatchLabel key={line} x={x(from) + 8} y={floorY + 18 + index * 15} anchor="start">
+                {line}
+              </HatchLabel>
+            ))}
+          </g>
+        );
+      })}
     </g>
   );
+}
+
+/** The words in one line, in two where the span is narrow, none where they would not fit. */
+function floorLines(width: number, room: number): string[] {
+  if (width > 96 && room > 24) return ['below the floor'];
+  return width > 62 && room > 40 ? ['below', 'the floor'] : [];
 }
 
 /** Depth spans in which the profile is flagged as below the floor. */

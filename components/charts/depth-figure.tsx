@@ -59,7 +59,7 @@ export function DepthFigure(props: DepthFigureProps) {
         scale={scale}
         x={x}
         {...layout.carriers}
-        title={`${props.carrier} (${unit})`}
+        title={profiles.length === 0 ? props.carrier : `${props.carrier} (${unit})`}
         scaleError={props.scaleError}
       />
       <ReachStrip information={props.information} x={x} {...layout.strip} />
