@@ -23,7 +23,7 @@ export const checkCorrelation: FitCheck = ({ answer }) => {
   }
   if (strongest.value === 0) return null;
   const pair = `${IN_WORDS[names[strongest.b]!]} and ${IN_WORDS[names[strongest.a]!]}`;
-  const seen = `the strongest correlation is ${strongest.value.toFixed(2)}, between ${pair}`;
+  const seen = `the strongest correlation is ${strongest.value.toFixed(2).replace('-', '−')}, between ${pair}`;
   return Math.abs(strongest.value) > STRONG
     ? {
         id,

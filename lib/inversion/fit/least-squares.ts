@@ -1,18 +1,12 @@
-import { levenbergMarquardt } from 'ml-levenberg-marquardt';
 import { Matrix, QrDecomposition } from 'ml-matrix';
-
-/** A least-squares problem in whitened form: every row has σ = 1, priors are rows like any other. */
-export interface LeastSquaresProblem {
-  size: number;
-  rows: number;
-  target: ArrayLike<number>;
-  lower: ArrayLike<number>;
-  upper: ArrayLike<number>;
-  /** Model value of every row at θ. */
-  predict(theta: ArrayLike<number>, into: Float64Array): void;
-  /** ∂(row i)/∂θ_k at into[k·rows + i]. */
-  jacobian(theta: ArrayLike<number>, into: Float64Array): void;
-}
+import {
+  chiSquareAt,
+  type LeastSquaresProblem,
+  type Moving,
+  type State,
+  type Trial,
+} from './least-squares-problem';
+import { runLibraryBlock } from './library-block';
 
 export interface LeastSquaresResult {
   chiSquare: number;
@@ -31,33 +25,10 @@ export interface LeastSquaresOptions {
   mostRounds: number;
 }
 
-/** Iterations of the library between two looks at the gradient: it has no test of its own that stops on noisy data. */
-const BLOCK = 3;
 const FIRST_DAMPING = 1e-3;
 const LARGEST_DAMPING = 1e12;
 /** What a step promises, relative to χ², below which χ² itself is too coarse to judge it. */
 const NEAR = 1e-9;
-
-interface State {
-  jacobian: Float64Array;
-  residual: Float64Array;
-  predicted: Float64Array;
-  /** Largest column norm of each parameter so far. */
-  norms: Float64Array;
-}
-
-/** Parameters that may move, with the scale that gives their column norm one. */
-interface Moving {
-  index: number[];
-  scale: number[];
-}
-
-interface Trial {
-  theta: Float64Array;
-  chiSquare: number;
-  iterations: number;
-  damping: number;
-}
 
 /**
  * Levenberg-Marquardt by ml-levenberg-marquardt, made to hold up: data whitened (weights 1), parameters scaled by the column
@@ -108,7 +79,7 @@ export function leastSquares(
       }
     }
     const before = chiSquare;
-    take(runBlock(problem, theta, state, moving, damping));
+    take(runLibraryBlock(problem, theta, state, moving, damping));
     if (before - chiSquare >= 0.5 * promised) {
       damping = Math.max(damping / 100, 1e-7);
       continue;
@@ -117,21 +88,6 @@ export function leastSquares(
     if (take(better)) rescued++;
     damping = better.damping;
   }
-}
-
-/** χ² at θ, the residuals written out; a model that is not finite there counts as infinitely bad. */
-function chiSquareAt(
-  problem: LeastSquaresProblem,
-  theta: ArrayLike<number>,
-  residual: Float64Array,
-): number {
-  problem.predict(theta, residual);
-  let sum = 0;
-  for (let i = 0; i < problem.rows; i++) {
-    residual[i] = problem.target[i]! - residual[i]!;
-    sum += residual[i]! * residual[i]!;
-  }
-  return Number.isFinite(sum) ? sum : Infinity;
 }
 
 function movable(
@@ -240,72 +196,4 @@ function gaussNewton(
   problem.jacobian(trial, state.jacobian);
   const left = orthogonalStep(problem, state, movable(problem, trial, state), 0).promised;
   return left < promised / 4 ? { theta: trial, chiSquare: next } : null;
-}
-
-/** A few iterations of ml-levenberg-marquardt on the movable parameters, scaled to order one. */
-function runBlock(
-  problem: LeastSquaresProblem,
-  theta: Float64Array,
-  { jacobian, predicted }: State,
-  { index, scale }: Moving,
-  damping: number,
-): Trial {
-  const { rows, lower, upper, target } = problem;
-  const point = Float64Array.from(theta);
-  const at = new Array<number>(index.length).fill(NaN);
-  // The library asks for value, error and Jacobian of one point in turn: compute each once.
-  let differentiated = false;
-  const moveTo = (parameters: readonly number[]): void => {
-    if (parameters.every((value, a) => value === at[a])) return;
-    parameters.forEach((value, a) => {
-      at[a] = value;
-      point[index[a]!] = value * scale[a]!;
-    });
-    problem.predict(point, predicted);
-    differentiated = false;
-  };
-  const run = (): { parameterValues: number[]; iterations: number } =>
-    levenbergMarquardt(
-      { x: Array.from({ length: rows }, (_, i) => i), y: Array.from(target) },
-      (parameters) => {
-        moveTo(parameters);
-        // Infinity would make the library's matrices meaningless; at NaN it stops and keeps its best point.
-        return (i) => (Number.isFinite(predicted[i]!) ? predicted[i]! : NaN);
-      },
-      {
-        initialValues: index.map((k, a) => theta[k]! / scale[a]!),
-        minValues: index.map((k, a) => lower[k]! / scale[a]!),
-        maxValues: index.map((k, a) => upper[k]! / scale[a]!),
-        jacobianFunction: (parameters) => {
-          moveTo(parameters);
-          if (!differentiated) problem.jacobian(point, jacobian);
-          differentiated = true;
-          return (i) => index.map((k, a) => jacobian[k * rows + i]! * scale[a]!);
-        },
-        damping,
-        maxIterations: BLOCK,
-        errorTolerance: 0,
-      },
-    );
-  const block = attempt(run);
-  if (!block) return { theta, chiSquare: Infinity, iterations: 0, damping };
-  index.forEach((k, a) => {
-    point[k] = Math.min(Math.max(block.parameterValues[a]! * scale[a]!, lower[k]!), upper[k]!);
-  });
-  return {
-    theta: point,
-    chiSquare: chiSquareAt(problem, point, predicted),
-    iterations: block.iterations,
-    damping,
-  };
-}
-
-/** The library throws where its matrix JᵀJ + λ·I is singular to rounding: there it has no step to offer. Anything else is an error. */
-function attempt<T>(run: () => T): T | null {
-  try {
-    return run();
-  } catch (error) {
-    if (error instanceof Error && /singular|not symmetric/i.test(error.message)) return null;
-    throw error;
-  }
 }

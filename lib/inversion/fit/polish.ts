@@ -1,5 +1,6 @@
 import { evaluate, fillJacobian, foldAt, predictFromFold } from './evaluate';
-import { leastSquares, type LeastSquaresProblem, type LeastSquaresResult } from './least-squares';
+import { leastSquares, type LeastSquaresResult } from './least-squares';
+import type { LeastSquaresProblem } from './least-squares-problem';
 import type { Problem } from './model';
 
 const MOST_ROUNDS = 20;

@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import type { LeastSquaresProblem } from '@/lib/inversion/fit/least-squares';
+import type { LeastSquaresProblem } from '@/lib/inversion/fit/least-squares-problem';
 import { variables, type Dual } from './dual';
 
 export interface NistProblem {
