@@ -77,6 +77,21 @@ export function createPool({ size, spawn }: { size: number; spawn: () => Hand })
   /** Until then a stopped job may still cost its workers their life, so the next job waits for it. */
   let settled: Promise<void> = Promise.resolve();
 
+  /** A stop may end a worker that was busy with this fit: the fit then goes to the worker that replaces it. */
+  const fitOn = async (index: number, input: FitInput): Promise<Reply<FirstAnswer>> => {
+    await settled;
+    const job = ++lastJob;
+    try {
+      const hand = handAt(index);
+      const answer = await hand.ask((api) => api.fit(job, input));
+      await hand.ask((api) => api.close(job));
+      return answer;
+    } catch (error) {
+      if (closed || !(error instanceof HandEnded)) throw error;
+      return fitOn(index, input);
+    }
+  };
+
   return {
     size,
     run(request, listener) {
@@ -102,19 +117,7 @@ export function createPool({ size, spawn }: { size: number; spawn: () => Hand })
       });
       return { end, stop };
     },
-    async fitEach(inputs) {
-      await settled;
-      const replies = await Promise.all(
-        inputs.map(async (input, index) => {
-          const job = ++lastJob;
-          const hand = handAt(index % size);
-          const answer = await hand.ask((api) => api.fit(job, input));
-          await hand.ask((api) => api.close(job));
-          return answer;
-        }),
-      );
-      return replies;
-    },
+    fitEach: (inputs) => Promise.all(inputs.map((input, index) => fitOn(index % size, input))),
     end() {
       closed = true;
       hands.forEach((hand) => hand?.end());

@@ -55,6 +55,8 @@ export function zeroWidthSentence(fits: readonly ComparedFit[]): string | null {
   if (!sharp || !graded) return null;
   const { sigmas, pValue } = zeroWidthTest(sharp.answer, graded.answer);
   const numbers = `${sigmas.toFixed(1)} σ, p = ${pValue < 1e-4 ? 'below 0.0001' : Number(pValue.toPrecision(2))}, half-half mixture of χ²`;
-  if (pValue < 0.05) return `Zero width is rejected (${numbers}).`;
+  if (pValue < 0.01) return `Zero width is rejected (${numbers}).`;
+  // Between the two, AICc may still prefer the sharp edge: a sentence that decides would contradict the table.
+  if (pValue < 0.05) return `The data hint at a width without deciding it (${numbers}).`;
   return `These data do not tell the graded edge from a sharp one (${numbers}).`;
 }

@@ -96,7 +96,11 @@ export function DepthPanel(props: DepthPanelProps) {
             profiles={profiles.length > 0 ? profiles : NOTHING}
             information={props.information}
             edgeNm={edge?.value ?? null}
-            edgeLabel={edge ? `edge ${shortValue(edge)} nm` : undefined}
+            edgeLabel={
+              edge
+                ? `${props.handle?.edge?.isDrawn ? 'fitted edge' : 'edge'} ${shortValue(edge)} nm`
+                : undefined
+            }
             edgeInterval={edge && !edge.held ? edge.interval68 : undefined}
             carrier={carrier}
             depthScale={depthScale}

@@ -8,7 +8,7 @@ export function DrawnNote({ drawing, fitted }: { drawing: Drawing; fitted: FitAn
   const of = fitted ? `; that of the fit has ${fitted.dataChiSquare.toFixed(1)}` : '';
   return (
     <span className="flex flex-wrap items-center gap-2">
-      <span role="status">{`Drawn by hand: this curve has χ² ${drawing.chiSquare?.toFixed(1)}${of}.`}</span>
+      <span role="status">{`Drawn by hand: this curve has χ² ${drawing.chiSquare?.toFixed(1)} with everything else as it stands${of}.`}</span>
       <Button size="small" onClick={drawing.hold}>
         Hold what is drawn
       </Button>

@@ -122,6 +122,20 @@ describe('stopping', () => {
     expect(ended).toEqual([0]);
   });
 
+  it('takes a comparison to a new worker when a stop ended the one it was on', async () => {
+    const { pool, ended } = inProcessPool(1, (api, index) =>
+      index === 0
+        ? { ...api, fit: () => new Promise(() => {}), close: () => new Promise(() => {}) }
+        : api,
+    );
+    const replies = pool.fitEach([workedInput()]);
+    const run = pool.run(request(10), listener().hears);
+    await new Promise((resolve) => setTimeout(resolve, 5));
+    run.stop();
+    expect((await replies)[0]?.ok).toBe(true);
+    expect(ended).toEqual([0]);
+  });
+
   it('settles waiting calls when the pool ends', async () => {
     const { pool } = inProcessPool(1, (api) => ({ ...api, fit: () => new Promise(() => {}) }));
     const run = pool.run(request(10), listener().hears);
