@@ -85,7 +85,7 @@ export function AddScanForm({ samples, sampleId: firstSampleId }: AddScanFormPro
               value: 'file',
               label: 'File',
               panel: (
-                <div className="grid gap-6">
+                <div className="grid grid-cols-1 gap-6">
                   <DropZone
                     multiple={false}
                     label={

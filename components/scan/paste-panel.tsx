@@ -23,7 +23,7 @@ const NAME = 'pasted.txt';
 /** Pasted text is read like a file, and kept like one. */
 export function PastePanel({ text, onText, changed, model, observable }: PastePanelProps) {
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-1 gap-6">
       <div className="grid justify-items-start gap-2">
         <Field
           className="w-full"

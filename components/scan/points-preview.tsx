@@ -17,7 +17,7 @@ export function PointsPreview({ points, observable }: PointsPreviewProps) {
   if (points.length === 0) return null;
   const withNotes = points.some(({ note }) => note !== null);
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       <ScanFigure points={points} observable={observable} title="Preview" />
       <details className="text-sm">
         <summary className="py-1 text-ink-2">
@@ -27,6 +27,7 @@ export function PointsPreview({ points, observable }: PointsPreviewProps) {
           dense
           captionHidden
           caption="Points as read"
+          className="relative max-h-96 overflow-y-auto"
           rows={points}
           rowKey={({ line }) => line}
           columns={[

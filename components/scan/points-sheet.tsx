@@ -28,7 +28,7 @@ export function PointsSheet({ sheet, typed, observable }: PointsSheetProps) {
     { name: columnName(NOTE, observable), unit: '', numeric: false },
   ];
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-1 gap-6">
       <Sheet
         caption="Points of the scan"
         columns={columns}

@@ -23,7 +23,7 @@ export function PointsTable({ points, observable }: PointsTableProps) {
       dense
       captionHidden
       caption="Points of the scan"
-      className="max-h-[28rem] overflow-y-auto"
+      className="relative max-h-[28rem] overflow-y-auto"
       rows={points}
       rowKey={({ energyKeV }) => energyKeV}
       rowClassName={({ enabled }) => (enabled ? undefined : 'text-ink-3')}

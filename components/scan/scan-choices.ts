@@ -1,7 +1,6 @@
 import { typedNumber } from '@/components/upload/typed-number';
 import {
   guessEnergyUnit,
-  guessScanColumns,
   readScan,
   type ScanColumns,
   type ScanReading,
@@ -59,13 +58,17 @@ const ROLE_WORDS: Record<ColumnRole, string> = {
   counts: 'counts',
 };
 
-/** Reads a table the way the person chose, and says what stands in the way of storing it. */
+/**
+ * Reads a table the way the person chose, and says what stands in the way of storing it. `guess` is
+ * what was recognised of its columns.
+ */
 export function previewScan(
   table: Table,
+  guess: ScanColumns | null,
   choices: ScanChoices,
   observable: Scan['observable'],
 ): ScanPreview {
-  const match = matchColumns(table, choices);
+  const match = matchColumns(guess, choices);
   const energyUnit =
     choices.energyUnit ?? (match.energy === null ? 'keV' : guessEnergyUnit(table, match.energy));
   const base = { match, energyUnit };
@@ -84,8 +87,7 @@ export function previewScan(
   return { ...base, reading, blocked, sent };
 }
 
-function matchColumns(table: Table, choices: ScanChoices): ColumnMatch {
-  const guess = guessScanColumns(table);
+function matchColumns(guess: ScanColumns | null, choices: ScanChoices): ColumnMatch {
   const pick = (role: ColumnRole) => {
     const chosen = choices.columns[role];
     return chosen === undefined ? (guess?.[role] ?? null) : chosen;

@@ -24,7 +24,7 @@ export function ScanFilePreview({ model, observable }: ScanFilePreviewProps) {
   if (file === null) return null;
   const leftOut = choices.skipLines;
   return (
-    <div className="grid gap-5" aria-busy={reading}>
+    <div className="grid grid-cols-1 gap-5" aria-busy={reading}>
       <p className="text-sm">
         <strong className="font-semibold break-all">{file.name}</strong>{' '}
         <span className="text-ink-2">

@@ -6,6 +6,7 @@ import type { ChosenFile } from '@/components/upload/chosen-file';
 import { useDeferredReading } from '@/components/upload/use-deferred-reading';
 import type { FileProblem } from '@/lib/files/problem';
 import { readTable, type ReadTableResult } from '@/lib/files/read-table';
+import { guessScanColumns, type ScanColumns } from '@/lib/files/scan-columns';
 import type { Table } from '@/lib/files/table';
 import type { Scan, ScanReading } from '@/lib/schemas/scan';
 
@@ -26,25 +27,33 @@ export interface ScanFileModel {
   choose: (change: Partial<ScanChoices>) => void;
 }
 
+interface FileReading {
+  read: ReadTableResult;
+  /** What was recognised of the columns. */
+  guess: ScanColumns | null;
+}
+
 /** A scan file in preview: the text is taken apart once per format, the columns at every choice. */
 export function useScanFile(observable: Scan['observable'], nothingYet: string): ScanFileModel {
   const [file, setFile] = useState<ChosenFile | null>(null);
   const [choices, setChoices] = useState(NO_CHOICES);
   const { delimiter, decimal } = choices;
-  const readFile = useCallback((): ReadTableResult | null => {
+  const readFile = useCallback((): FileReading | null => {
     if (file === null) return null;
-    return readTable(file.name, file.bytes, {
+    const read = readTable(file.name, file.bytes, {
       delimiter: delimiter ?? undefined,
       decimal: decimal ?? undefined,
     });
+    return { read, guess: read.ok ? guessScanColumns(read.table) : null };
   }, [file, delimiter, decimal]);
   const { result, reading } = useDeferredReading(readFile);
-  const table = result?.ok ? result.table : null;
+  const table = result?.read.ok ? result.read.table : null;
+  const guess = result?.guess ?? null;
   const preview = useMemo(
-    () => (table === null ? null : previewScan(table, choices, observable)),
-    [table, choices, observable],
+    () => (table === null ? null : previewScan(table, guess, choices, observable)),
+    [table, guess, choices, observable],
   );
-  const refusal = file !== null && result?.ok === false ? result.problems : [];
+  const refusal = file !== null && result?.read.ok === false ? result.read.problems : [];
   const current = file !== null && !reading;
   return {
     file,

@@ -70,7 +70,7 @@ export function Sheet({ caption, columns, sheet, errors, maxRows }: SheetProps) 
   return (
     <div>
       <SheetTools sheet={sheet} onAddRow={addRow} news={news} />
-      <div className="overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
+      <div className="relative overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
         <table ref={table} className="w-full border-collapse bg-sheet text-sm">
           <caption className="sr-only">{caption}</caption>
           <thead>

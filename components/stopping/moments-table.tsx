@@ -23,6 +23,7 @@ export function MomentsTable({ rows, onLight }: MomentsTableProps) {
     <DataTable
       dense
       caption="Moments"
+      className="relative max-h-[36rem] overflow-y-auto"
       rows={rows}
       rowKey={({ energyKeV }) => energyKeV}
       columns={[

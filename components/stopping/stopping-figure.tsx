@@ -1,9 +1,10 @@
 'use client';
 
-import { useMemo, useState } from 'react';
+import { memo, useMemo, useState } from 'react';
 
 import { Figure } from '@/components/charts/figure';
 import { StoppingRidgeline } from '@/components/charts/stopping-ridgeline';
+import { thinRidge } from '@/components/review/thin-ridge';
 import { stoppingMoments, type StoppingProfile } from '@/lib/inversion/index';
 
 import { MomentsTable } from './moments-table';
@@ -20,8 +21,11 @@ export function ridgelineHeight(energies: number): number {
   return Math.min(LARGEST_HEIGHT, SMALLEST_HEIGHT + PER_ENERGY * energies);
 }
 
+/** More bins than this cannot be told apart in the picture, and cost time at every move of the pointer. */
+const MOST_DRAWN = 600;
+
 /** The stopping profiles as a ridgeline, with their moments below; pointing at an energy lights its ridge. */
-export function StoppingFigure({ profiles }: StoppingFigureProps) {
+export const StoppingFigure = memo(function StoppingFigure({ profiles }: StoppingFigureProps) {
   const [litKeV, setLitKeV] = useState<number | null>(null);
   const rows = useMemo(
     () =>
@@ -33,9 +37,13 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
       })),
     [profiles],
   );
+  const ridges = useMemo(
+    () => profiles.map((profile) => thinRidge(profile, MOST_DRAWN)),
+    [profiles],
+  );
   const height = ridgelineHeight(profiles.length);
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-1 gap-6">
       <Figure
         title="Stopping profiles"
         svgName="stopping-profiles"
@@ -65,7 +73,7 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
       >
         {(width) => (
           <StoppingRidgeline
-            profiles={profiles}
+            profiles={ridges}
             width={width}
             height={height}
             highlightedKeV={litKeV}
@@ -75,4 +83,4 @@ export function StoppingFigure({ profiles }: StoppingFigureProps) {
       <MomentsTable rows={rows} onLight={setLitKeV} />
     </div>
   );
-}
+});

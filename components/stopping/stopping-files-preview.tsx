@@ -1,5 +1,7 @@
 'use client';
 
+import { memo, useMemo } from 'react';
+
 import { ProblemList } from '@/components/upload/problem-list';
 
 import { FileRow } from './file-row';
@@ -24,22 +26,29 @@ interface StoppingFilesPreviewProps {
   onChange: (change: (before: StoppingChoices) => StoppingChoices) => void;
 }
 
-/** What was recognised in the files, open to correction, and what would be stored. */
-export function StoppingFilesPreview({
+/**
+ * What was recognised in the files, open to correction, and what would be stored. Remembered, so that
+ * typing a name beside it does not draw all of it again.
+ */
+export const StoppingFilesPreview = memo(function StoppingFilesPreview({
   choices,
   preview,
   reading,
   onChange,
 }: StoppingFilesPreviewProps) {
   const shown = preview !== null && preview.files.length > 0 ? preview : null;
+  const mayLeaveOut = useMemo(
+    () => leaveOutTest(shown?.files.map(({ table }) => table) ?? []),
+    [shown],
+  );
   return (
-    <div aria-busy={reading} className="grid gap-6">
-      <p role="status" className="min-h-5 text-sm text-ink-2">
-        {reading ? 'Reading…' : ''}
+    <div aria-busy={reading} className="grid grid-cols-1 gap-6">
+      <p role="status" className="-mb-4 text-sm text-ink-2">
+        {reading ? 'Reading…' : countWords(choices.entries.length)}
       </p>
       <ul
         aria-label="Files of the set"
-        className="max-h-[32rem] overflow-y-auto border-t border-rule"
+        className="relative max-h-[32rem] overflow-y-auto border-t border-rule"
       >
         {choices.entries.map((entry) => (
           <FileRow
@@ -62,7 +71,7 @@ export function StoppingFilesPreview({
           />
           <ProblemList
             problems={shown.problems}
-            mayLeaveOut={leaveOutTest(shown.files.map(({ table }) => table))}
+            mayLeaveOut={mayLeaveOut}
             onLeaveOut={(problems) => onChange((before) => withLinesLeftOut(before, problems))}
           />
         </>
@@ -75,4 +84,8 @@ export function StoppingFilesPreview({
       )}
     </div>
   );
+});
+
+function countWords(files: number): string {
+  return files === 1 ? '1 file' : `${files} files`;
 }

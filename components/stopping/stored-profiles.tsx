@@ -54,7 +54,7 @@ export function StoredProfiles({ setId, energies }: { setId: string; energies: n
     );
   }
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-1 gap-6">
       <WarningList warnings={[...data.warnings, ...lossWarnings(profiles)]} />
       <StoppingFigure profiles={profiles} />
     </div>

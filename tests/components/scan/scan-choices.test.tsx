@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 
 import { NO_CHOICES, previewScan, type ScanChoices } from '@/components/scan/scan-choices';
 import { readTable } from '@/lib/files/read-table';
+import { guessScanColumns } from '@/lib/files/scan-columns';
 
 function tableOf(text: string) {
   const result = readTable('scan.csv', new TextEncoder().encode(text));
@@ -17,7 +18,10 @@ const preview = (
   text: string,
   change: Partial<ScanChoices> = {},
   observable: 'fraction' | 'rate' = 'fraction',
-) => previewScan(tableOf(text), { ...NO_CHOICES, ...change }, observable);
+) => {
+  const table = tableOf(text);
+  return previewScan(table, guessScanColumns(table), { ...NO_CHOICES, ...change }, observable);
+};
 
 describe('preview of a scan file', () => {
   it('is ready to send when every row reads', () => {

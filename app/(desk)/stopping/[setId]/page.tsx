@@ -81,7 +81,7 @@ export default async function StoppingSetPage({ params }: PageProps<'/stopping/[
           {mayEdit && ' Restore takes it back.'}
         </Notice>
       )}
-      <div className="grid gap-8 py-6">
+      <div className="grid grid-cols-1 gap-8 py-6">
         <StoredProfiles setId={set.id} energies={set.energiesKeV.length} />
         <section aria-labelledby="origin-heading" className="grid content-start gap-2">
           <h2 id="origin-heading">Where it comes from</h2>
