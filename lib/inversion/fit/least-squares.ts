@@ -35,7 +35,7 @@ const NEAR = 1e-9;
  * norms of the Jacobian (its damping is λ·I), analytic Jacobian, parameters pressed against a bound left out (it only clips),
  * stopped by what the undamped step promises. It forms JᵀJ and keeps a step that makes things worse, so where a block of it
  * brings less than half of what was promised, a damped step from the QR decomposition of the Jacobian itself follows
- * (J. J. Moré, Lecture Notes in Mathematics 630, 105, 1978), accepted only if it helps. θ is improved in place and never made
+ * (J. J. Moré, in Numerical Analysis, Dundee 1977, Springer, p. 105), accepted only if it helps. θ is improved in place and never made
  * worse.
  */
 export function leastSquares(
