@@ -79,3 +79,73 @@ export {
   simulateTemperatureScans,
   type TemperatureScanTruth,
 } from './charge-cycle/simulate-temperature-scans';
+export {
+  bootstrapLikelihoodRatio,
+  likelihoodRatioTest,
+  type LikelihoodRatioTest,
+} from './compare/bootstrap-likelihood-ratio';
+export type { FittedModel, NestedFits } from './compare/nested-fits';
+export {
+  smallestWidthFromSharp,
+  type SmallestWidth,
+  type WidthPower,
+} from './compare/smallest-width';
+export {
+  bestNextEnergy,
+  type NextEnergy,
+  type NextEnergyInput,
+  type NextEnergyOutcome,
+} from './planning/best-next-energy';
+export {
+  bestSplit,
+  type EnergyHours,
+  type OptimalPlan,
+  type Plan,
+  type SplitInput,
+  type SplitOutcome,
+} from './planning/best-split';
+export {
+  oneHourSigmaAt,
+  oneHourSigmas,
+  type EnergySigma,
+  type OneHourSigma,
+} from './planning/one-hour-sigma';
+export {
+  injectAndRecover,
+  type Injection,
+  type RecoveredParameter,
+  type RecoveredScan,
+} from './simulate/inject-and-recover';
+export {
+  recoveryReport,
+  type Coverage,
+  type ParameterRecovery,
+  type RecoveryReport,
+} from './simulate/recovery-report';
+export type { SeededBlock } from './simulate/check-block';
+export type { FreeFormInput, Monotonic } from './free-form/free-form-input';
+export { prepareFreeForm, type PreparedFreeForm } from './free-form/prepare-free-form';
+export {
+  freeFormAt,
+  solveFreeForm,
+  type FreeFormAnswer,
+  type FreeFormOptions,
+  type FreeFormSolution,
+  type StrengthRule,
+} from './free-form/solve-free-form';
+export {
+  createPenalisedWork,
+  solveAtStrength,
+  type ColumnMatrix,
+  type CurvePoint,
+  type PenalisedProblem,
+  type PenalisedWork,
+} from './free-form/penalised';
+export { differenceOperator } from './free-form/differences';
+export { strengthCurve, strengthGrid } from './free-form/strength-curve';
+export {
+  chooseStrength,
+  type StrengthChoice,
+  type StrengthChoices,
+} from './free-form/choose-strength';
+export { resolutionMatrix, type Resolution } from './free-form/resolution';

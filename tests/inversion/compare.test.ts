@@ -34,6 +34,20 @@ describe('comparing fits', () => {
     expect(rows[1]!.weight! / rows[0]!.weight! / Math.exp(delta / 2)).toBeCloseTo(1, 10);
   });
 
+  // Source: G. Schwarz, Ann. Stat. 6, 461 (1978): BIC = χ² + k ln n; R. E. Kass and A. E. Raftery, J. Am. Stat. Assoc. 90, 773
+  // (1995): odds of exp(−½ΔBIC). Worked by hand from χ², 3 and 4 parameters and 13 points.
+  it('weighs them by BIC', () => {
+    const { rows } = compareFits([
+      { label: 'sharp', answer: sharp },
+      { label: 'graded', answer: graded },
+    ]);
+    const delta = sharp.chiSquare - graded.chiSquare - Math.log(13);
+    expect(rows[0]!.deltaBic).toBeCloseTo(delta, 10);
+    expect(rows[1]!.deltaBic).toBe(0);
+    expect(rows[0]!.bicWeight! + rows[1]!.bicWeight!).toBeCloseTo(1, 12);
+    expect(rows[1]!.bicWeight! / rows[0]!.bicWeight! / Math.exp(delta / 2)).toBeCloseTo(1, 10);
+  });
+
   it('does not weigh fits of different points', () => {
     const fewer = answer({ points: points.map((p, i) => ({ ...p, enabled: i !== 3 })) });
     const comparison = compareFits([
@@ -43,6 +57,7 @@ describe('comparing fits', () => {
     expect(comparison.comparable).toBe(false);
     expect(comparison.reason).toContain('same points');
     expect(comparison.rows.map(({ weight }) => weight)).toEqual([null, null]);
+    expect(comparison.rows.map(({ bicWeight }) => bicWeight)).toEqual([null, null]);
   });
 
   it('counts a switched-off point as absent, whatever its value', () => {

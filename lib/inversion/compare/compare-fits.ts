@@ -9,6 +9,9 @@ export interface ComparisonRow {
   /** exp(−½ΔAICc) over its sum: the evidence for this fit among those listed. */
   weight: number | null;
   bic: number;
+  deltaBic: number | null;
+  /** exp(−½ΔBIC) over its sum: the posterior probability of this fit among those listed, all equally likely beforehand. */
+  bicWeight: number | null;
 }
 
 export interface Comparison {
@@ -20,31 +23,39 @@ export interface Comparison {
 
 /**
  * AICc differences and Akaike weights (Burnham and Anderson, Model Selection and Multimodel Inference, 2002, sections 2.4 and
- * 2.9) of fits to one scan. Fits that do not share their enabled points, values and σ are listed but not weighed.
+ * 2.9) of fits to one scan, and the same of BIC (Schwarz, Ann. Stat. 6, 461, 1978; as probabilities in Kass and Raftery, J. Am.
+ * Stat. Assoc. 90, 773, 1995). Fits that do not share their enabled points, values and σ are listed but not weighed.
  */
 export function compareFits(list: readonly { label: string; answer: FitAnswer }[]): Comparison {
   const reason = differenceOf(list.map(({ answer }) => answer));
   const comparable = reason === undefined;
-  const known = list.map(({ answer }) => answer.aicc).filter((aicc) => aicc !== null);
-  const best = Math.min(...known);
-  const total = known.reduce((sum, aicc) => sum + Math.exp(-(aicc - best) / 2), 0);
-  const rows = list.map(({ label, answer }) => {
+  const akaike = weigh(list.map(({ answer }) => (comparable ? answer.aicc : null)));
+  const schwarz = weigh(list.map(({ answer }) => (comparable ? answer.bic : null)));
+  const rows = list.map(({ label, answer }, index) => {
     const { chiSquare, freeParameters, aicc, bic } = answer;
-    const deltaAicc = comparable && aicc !== null ? aicc - best : null;
-    return {
-      label,
-      chiSquare,
-      freeParameters,
-      aicc,
-      deltaAicc,
-      weight: deltaAicc === null ? null : Math.exp(-deltaAicc / 2) / total,
-      bic,
-    };
+    const { delta: deltaAicc, weight } = akaike[index]!;
+    const { delta: deltaBic, weight: bicWeight } = schwarz[index]!;
+    return { label, chiSquare, freeParameters, aicc, deltaAicc, weight, bic, deltaBic, bicWeight };
   });
   return comparable ? { rows, comparable } : { rows, comparable, reason };
 }
 
-function differenceOf(answers: readonly FitAnswer[]): string | undefined {
+/** Δ_k = C_k − min C and w_k = exp(−½Δ_k)/Σ exp(−½Δ) over the criteria that exist. */
+function weigh(
+  criteria: readonly (number | null)[],
+): { delta: number | null; weight: number | null }[] {
+  const known = criteria.filter((value) => value !== null);
+  const best = Math.min(...known);
+  const total = known.reduce((sum, value) => sum + Math.exp(-(value - best) / 2), 0);
+  return criteria.map((value) =>
+    value === null
+      ? { delta: null, weight: null }
+      : { delta: value - best, weight: Math.exp(-(value - best) / 2) / total },
+  );
+}
+
+/** Why fits cannot be compared: their enabled points, values or σ differ; undefined where they can. */
+export function differenceOf(answers: readonly FitAnswer[]): string | undefined {
   const fingerprint = ({ residuals }: FitAnswer): string =>
     residuals
       .filter(({ enabled }) => enabled)
