@@ -111,10 +111,20 @@ function switchedOffWords(fit: Fit): string {
   );
 }
 
+/** Parameters of profiles that neither a sharp nor a graded edge has. */
+const OF_OTHER_PROFILES: readonly ParameterName[] = [
+  'layerThicknessNm',
+  'farEdgeWidthNm',
+  'surfacePotentialEv',
+  'bulkPerCm3',
+];
+
 /** A width is told only where two graded fits could differ in it; a cap level only where there is a cap. */
 function isTold(name: ParameterName, fits: readonly Fit[]): boolean {
   if (name === 'edgeWidthNm') return fits.some((fit) => fit.spec.profile === 'graded');
   if (name === 'levelCap') return fits.some((fit) => fit.spec.capThicknessNm > 0);
+  if (OF_OTHER_PROFILES.includes(name))
+    return fits.some((fit) => fit.spec.parameters[name] !== undefined);
   return true;
 }
 
@@ -122,6 +132,10 @@ export function settingLabel(name: ParameterName): string {
   const words: Record<ParameterName, string> = {
     edgeDepthNm: 'Edge depth',
     edgeWidthNm: 'Edge width (σ)',
+    layerThicknessNm: 'Layer thickness',
+    farEdgeWidthNm: 'Far edge width (σ)',
+    surfacePotentialEv: 'Band bending at the surface',
+    bulkPerCm3: 'Bulk concentration',
     levelTop: 'Level on the surface side',
     levelBulk: 'Level in the bulk',
     levelCap: 'Level in the cap',

@@ -8,6 +8,10 @@ import { PROFILE_KINDS } from './profile-kinds';
 const PARAMETER_WORDS: Record<ParameterName, string> = {
   edgeDepthNm: 'edge',
   edgeWidthNm: 'width',
+  layerThicknessNm: 'thickness',
+  farEdgeWidthNm: 'farWidth',
+  surfacePotentialEv: 'bending',
+  bulkPerCm3: 'bulkCarriers',
   levelTop: 'top',
   levelBulk: 'bulk',
   levelCap: 'capLevel',

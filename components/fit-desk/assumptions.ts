@@ -1,10 +1,5 @@
-import {
-  DEFAULT_RESAMPLES,
-  DEPTH_SCALE_PRIOR,
-  type ParameterName,
-  type ProfileKind,
-} from '@/lib/inversion/index';
-import type { FitSpec } from '@/lib/schemas/fit';
+import { DEFAULT_RESAMPLES, DEPTH_SCALE_PRIOR, type ParameterName } from '@/lib/inversion/index';
+import type { FitSpec, ProfileKind } from '@/lib/schemas/fit';
 import type { Sample } from '@/lib/schemas/sample';
 import type { Scan } from '@/lib/schemas/scan';
 

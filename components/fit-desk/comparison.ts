@@ -4,8 +4,8 @@ import {
   type CarrierProfile,
   type FitAnswer,
   type FitInput,
-  type ProfileKind,
 } from '@/lib/inversion/index';
+import type { ProfileKind } from '@/lib/schemas/fit';
 import type { EvidenceRow } from '@/components/charts/evidence-table';
 
 import { profileKind } from './profile-kinds';

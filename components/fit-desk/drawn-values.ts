@@ -48,10 +48,7 @@ export function valuesToDraw({
   );
 }
 
-function guessedValues(
-  points: readonly ScanPoint[],
-  deepestNm: number,
-): Record<ParameterName, number> {
+function guessedValues(points: readonly ScanPoint[], deepestNm: number): ParameterValues {
   const used = points.filter((point) => point.enabled).sort((a, b) => a.energyKeV - b.energyKeV);
   const [top, bulk] = [used[0]?.value ?? 0, used.at(-1)?.value ?? 0];
   return {

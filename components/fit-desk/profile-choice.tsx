@@ -1,4 +1,4 @@
-import type { ProfileKind } from '@/lib/inversion/index';
+import type { ProfileKind } from '@/lib/schemas/fit';
 
 import { PROFILE_KINDS } from './profile-kinds';
 

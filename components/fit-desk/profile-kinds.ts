@@ -1,4 +1,4 @@
-import type { ProfileKind } from '@/lib/inversion/index';
+import type { ProfileKind } from '@/lib/schemas/fit';
 
 /** The trial profiles that the desk offers; a new one is one entry here. */
 export const PROFILE_KINDS: readonly {

@@ -7,6 +7,10 @@ type Described = { observable: Fit['observable']; spec: Pick<Fit['spec'], 'polar
 export const PARAMETER_ORDER: readonly Named[] = [
   'edgeDepthNm',
   'edgeWidthNm',
+  'layerThicknessNm',
+  'farEdgeWidthNm',
+  'surfacePotentialEv',
+  'bulkPerCm3',
   'levelTop',
   'levelBulk',
   'levelCap',
@@ -20,6 +24,10 @@ export function parameterLabel(name: Named, fit: Described): string {
   const words: Record<Named, string> = {
     edgeDepthNm: 'Edge depth',
     edgeWidthNm: 'Edge width (σ)',
+    layerThicknessNm: 'Layer thickness',
+    farEdgeWidthNm: 'Far edge width (σ)',
+    surfacePotentialEv: 'Band bending at the surface',
+    bulkPerCm3: 'Bulk concentration',
     levelTop: `${level}, ${topIsPopulated ? 'populated' : 'depleted'} (surface side)`,
     levelBulk: `${level}, ${topIsPopulated ? 'depleted' : 'populated'} (bulk side)`,
     levelCap: `${level} in the cap`,
@@ -30,7 +38,9 @@ export function parameterLabel(name: Named, fit: Described): string {
 
 /** Unit of a parameter, with nothing for a pure number. */
 export function parameterUnit(name: Named, observable: Fit['observable']): string {
-  if (name === 'edgeDepthNm' || name === 'edgeWidthNm') return 'nm';
+  if (name.endsWith('Nm')) return 'nm';
+  if (name === 'surfacePotentialEv') return 'eV';
+  if (name === 'bulkPerCm3') return 'cm⁻³';
   if (name === 'depthScale') return '';
   return observable === 'rate' ? 'µs⁻¹' : '';
 }

@@ -5,6 +5,10 @@ import type { InvertReport } from './report';
 const LABELS: Record<ParameterName, readonly [label: string, unit: string]> = {
   edgeDepthNm: ['edge depth', 'nm'],
   edgeWidthNm: ['edge width (σ)', 'nm'],
+  layerThicknessNm: ['layer thickness', 'nm'],
+  farEdgeWidthNm: ['far edge width (σ)', 'nm'],
+  surfacePotentialEv: ['band bending at the surface', 'eV'],
+  bulkPerCm3: ['bulk concentration', 'cm⁻³'],
   levelTop: ['level at the surface', ''],
   levelBulk: ['level in the bulk', ''],
   levelCap: ['level in the cap', ''],

@@ -32,7 +32,7 @@ export interface ScanPoint {
   enabled: boolean;
 }
 
-export type ProfileKind = 'sharp' | 'graded';
+export type ProfileKind = 'sharp' | 'graded' | 'layer' | 'band-bending';
 
 /** depletion: few carriers on the surface side; accumulation: many. */
 export type Polarity = 'depletion' | 'accumulation';
@@ -47,11 +47,26 @@ export type Response =
       gammaSigmaCm3PerS: number | null;
       /** Λ₀ (µs⁻¹), the rate without carriers. */
       baselinePerUs: number;
+    }
+  | {
+      kind: 'saturating-fraction';
+      /** p_half (cm⁻³), the concentration at which half of the charged state is converted back, and its uncertainty. */
+      halfPerCm3: number;
+      halfSigmaPerCm3: number | null;
     };
 export type ResponseKind = Response['kind'];
 
 export type ParameterName =
-  'edgeDepthNm' | 'edgeWidthNm' | 'levelTop' | 'levelBulk' | 'levelCap' | 'depthScale';
+  | 'edgeDepthNm'
+  | 'edgeWidthNm'
+  | 'layerThicknessNm'
+  | 'farEdgeWidthNm'
+  | 'surfacePotentialEv'
+  | 'bulkPerCm3'
+  | 'levelTop'
+  | 'levelBulk'
+  | 'levelCap'
+  | 'depthScale';
 
 export interface GaussianPrior {
   mean: number;
@@ -74,10 +89,21 @@ export interface CarrierScale {
   topPerCm3: number | null;
 }
 
+/** What band bending needs to know of the semiconductor, at the temperature of the scan. */
+export interface SemiconductorBulk {
+  /** ε_r, static. */
+  relativePermittivity: number;
+  temperatureK: number;
+  /** n_i, for the minority carriers n_i²/N; null leaves them out. */
+  intrinsicPerCm3: number | null;
+}
+
 /** Everything a fit depends on, and nothing else. */
 export interface FitInput {
   observable: Observable;
   points: readonly ScanPoint[];
+  /** V: covariance of all points in their order, √V_ii their σ; left out or null where they are independent. */
+  covariance?: readonly (readonly number[])[] | null;
   stopping: StoppingSet;
   profile: ProfileKind;
   polarity: Polarity;
@@ -85,7 +111,12 @@ export interface FitInput {
   carriers: CarrierScale;
   /** Thickness of the cap layer in front of the semiconductor, nm; 0 for none. Depths of the profile count from below it. */
   capThicknessNm: number;
-  /** Settings by name; what is missing is free, except depthScale, which is then held at 1. */
+  /** For band bending only. */
+  semiconductor?: SemiconductorBulk | null;
+  /**
+   * Settings by name; what is missing is free, except depthScale, which is then held at 1, bulkPerCm3 at the bulk concentration
+   * and, for band bending and a rate, levelTop at the rate without carriers.
+   */
   parameters: Partial<Record<ParameterName, ParameterSetting>>;
 }
 

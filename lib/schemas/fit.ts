@@ -4,10 +4,16 @@ import { z } from 'zod';
 import { idSchema, momentSchema, optionalText, text } from './common';
 import { OBSERVABLES } from './scan';
 
+/** The trial profiles that can be saved; the library knows more. */
 export const PROFILE_KINDS = ['sharp', 'graded'] as const;
+export type ProfileKind = (typeof PROFILE_KINDS)[number];
 export const PARAMETER_NAMES = [
   'edgeDepthNm',
   'edgeWidthNm',
+  'layerThicknessNm',
+  'farEdgeWidthNm',
+  'surfacePotentialEv',
+  'bulkPerCm3',
   'levelTop',
   'levelBulk',
   'levelCap',

@@ -1,5 +1,5 @@
 import { resample } from '../uncertainty/resample';
-import { figure, parameterOf, type FitCheck } from './check-context';
+import { figure, locatorOf, locatorWords, type FitCheck } from './check-context';
 
 /** Few repeats: this looks for a fit that cannot find its own answer again, not for the last per cent of coverage. */
 const REPEATS = 24;
@@ -8,8 +8,8 @@ const SEED = 20_260_114;
 /** Closure: scans simulated from the fit and fitted again must give its edge back, with the scatter that its interval states. */
 export const checkClosure: FitCheck = (context) => {
   const { prepared, answer } = context;
-  const edge = parameterOf(context, 'edgeDepthNm')!;
-  const column = prepared.freeNames.indexOf('edgeDepthNm');
+  const edge = locatorOf(context);
+  const column = prepared.freeNames.indexOf(edge.name);
   const id = 'closure';
   if (column < 0) return null;
   const [lower, upper] = edge.interval68;
@@ -25,7 +25,10 @@ export const checkClosure: FitCheck = (context) => {
   const scatter = Math.sqrt(
     pulls.reduce((sum, pull) => sum + (pull - mean) ** 2, 0) / (REPEATS - 1),
   );
-  const seen = `in ${REPEATS} simulated scans the edge comes back ${figure(Math.abs(mean))} standard deviations ${mean < 0 ? 'shallower' : 'deeper'} on average, with ${figure(scatter)} times the scatter stated`;
+  const [less, more] =
+    edge.name === 'edgeDepthNm' ? ['shallower', 'deeper'] : ['smaller', 'larger'];
+  const way = mean < 0 ? less : more;
+  const seen = `in ${REPEATS} simulated scans the ${locatorWords(edge).what} comes back ${figure(Math.abs(mean))} standard deviations ${way} on average, with ${figure(scatter)} times the scatter stated`;
   // Three standard errors of the mean, and of the scatter (1/√(2(n − 1)) relative).
   const biased = Math.abs(mean) > (3 * Math.max(1, scatter)) / Math.sqrt(REPEATS);
   const misjudged = Math.abs(scatter - 1) > 3 / Math.sqrt(2 * (REPEATS - 1));

@@ -18,15 +18,31 @@ export function parameterOf(
   return answer.parameters.find((parameter) => parameter.name === name);
 }
 
+/** The parameter that says where the profile lies: the depth of its first edge, or how far the bands bend. */
+export function locatorOf({ answer }: CheckContext): FitParameter {
+  return answer.parameters[0]!;
+}
+
 /** Parameter names as words in a sentence. */
 export const IN_WORDS: Readonly<Record<ParameterName, string>> = {
   edgeDepthNm: 'the edge depth',
   edgeWidthNm: 'the edge width',
+  layerThicknessNm: 'the layer thickness',
+  farEdgeWidthNm: 'the width of the far edge',
+  surfacePotentialEv: 'the band bending at the surface',
+  bulkPerCm3: 'the bulk concentration',
   levelTop: 'the level above the edge',
   levelBulk: 'the level below the edge',
   levelCap: 'the level of the cap',
   depthScale: 'the depth scale',
 };
+
+/** What a sentence calls the locator, and its unit. */
+export function locatorWords({ name }: FitParameter): { what: string; unit: string } {
+  return name === 'surfacePotentialEv'
+    ? { what: 'band bending', unit: 'eV' }
+    : { what: 'edge', unit: 'nm' };
+}
 
 export const percent = (share: number): string => `${Number((100 * share).toPrecision(2))} %`;
 export const figure = (value: number): string => String(Number(value.toPrecision(3)));

@@ -1,12 +1,19 @@
-import { figure, parameterOf, percent, type FitCheck } from './check-context';
+import { figure, IN_WORDS, locatorOf, parameterOf, percent, type FitCheck } from './check-context';
 
 /** How much of the uncertainty of the edge is the assumed accuracy of the stopping calculation. */
 export const checkDepthScale: FitCheck = (context) => {
   const { answer, prepared } = context;
   const scale = parameterOf(context, 'depthScale')!;
-  const edge = parameterOf(context, 'edgeDepthNm')!;
+  const edge = locatorOf(context);
   const id = 'depth-scale';
   if (scale.held) {
+    if (edge.name !== 'edgeDepthNm') {
+      return {
+        id,
+        state: 'fine',
+        message: `The depth scale is held at ${figure(scale.value)}: an error of 3 % in the stopping calculation would move every depth by as much, which no interval includes.`,
+      };
+    }
     return {
       id,
       state: 'fine',
@@ -15,18 +22,18 @@ export const checkDepthScale: FitCheck = (context) => {
   }
   const { covariance } = answer;
   if (!covariance.ok) return null;
-  const [k, l] = [covariance.names.indexOf('edgeDepthNm'), covariance.names.indexOf('depthScale')];
+  const [k, l] = [covariance.names.indexOf(edge.name), covariance.names.indexOf('depthScale')];
   if (k < 0 || l < 0) return null;
   const share = covariance.correlation[k]![l]! ** 2;
   return share > 0.5
     ? {
         id,
         state: 'caution',
-        message: `The prior on the depth scale dominates: it makes ${percent(share)} of the variance of the edge depth, and longer runs will not narrow it.`,
+        message: `The prior on the depth scale dominates: it makes ${percent(share)} of the variance of ${IN_WORDS[edge.name]}, and longer runs will not narrow it.`,
       }
     : {
         id,
         state: 'fine',
-        message: `The prior on the depth scale makes ${percent(share)} of the variance of the edge depth.`,
+        message: `The prior on the depth scale makes ${percent(share)} of the variance of ${IN_WORDS[edge.name]}.`,
       };
 };

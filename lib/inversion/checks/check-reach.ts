@@ -1,9 +1,19 @@
 import { edgeInformationByEnergy } from '../uncertainty/edge-information-by-energy';
-import { figure, parameterOf, percent, type CheckContext, type FitCheck } from './check-context';
+import { valuesOf } from '../fit/theta-of';
+import type { Check } from '../types';
+import {
+  figure,
+  locatorOf,
+  parameterOf,
+  percent,
+  type CheckContext,
+  type FitCheck,
+} from './check-context';
 
 /** Whether the muons reach the edge, and which energies speak about it. */
 export const checkReach: FitCheck = (context) => {
-  const edge = parameterOf(context, 'edgeDepthNm')!;
+  const edge = parameterOf(context, 'edgeDepthNm');
+  if (!edge) return checkBendingReach(context);
   const { reachNm } = context.profile;
   const id = 'edge-reach';
   const at = `${figure(edge.value)} nm`;
@@ -35,6 +45,39 @@ export const checkReach: FitCheck = (context) => {
   }
   return { id, state: 'fine', message: `Edge is inside reach. ${sourceOf(context)}` };
 };
+
+/** Bent bands have no edge of their own: what counts is the depth where the carriers reach half of the bulk. */
+function checkBendingReach(context: CheckContext): Check {
+  const { prepared, answer, profile } = context;
+  const { trial } = prepared.problem.model;
+  const values = valuesOf(answer);
+  const [half] = trial.landmarks(trial.shape.map(({ name }) => values[name]!));
+  const bending = locatorOf(context);
+  const id = 'edge-reach';
+  const at = `the carriers reach half of the bulk at ${figure(half!.depthNm)} nm`;
+  if (half!.depthNm > profile.reachNm) {
+    return {
+      id,
+      state: 'problem',
+      message: `Beyond the reach of the scan: ${at}, where only one muon in twenty of the deepest energy stops below ${figure(profile.reachNm)} nm.`,
+    };
+  }
+  const [lower, upper] = bending.interval95;
+  if (!bending.held && (lower === null || upper === null)) {
+    const side =
+      lower === null && upper === null
+        ? 'any bending fits'
+        : lower === null
+          ? `less than ${figure(upper!)} eV`
+          : `more than ${figure(lower)} eV`;
+    return {
+      id,
+      state: 'caution',
+      message: `The scan bounds the band bending on one side only: ${side} (95 %).`,
+    };
+  }
+  return { id, state: 'fine', message: `Inside reach: ${at}. ${sourceOf(context)}` };
+}
 
 /** The three neighbouring energies that know most of the edge. */
 function sourceOf({ prepared, answer }: CheckContext): string {

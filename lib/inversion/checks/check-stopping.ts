@@ -1,11 +1,5 @@
-import {
-  figure,
-  listOf,
-  parameterOf,
-  percent,
-  type CheckContext,
-  type FitCheck,
-} from './check-context';
+import { valuesOf } from '../fit/theta-of';
+import { figure, listOf, percent, type CheckContext, type FitCheck } from './check-context';
 import type { StoppingProfile } from '../types';
 
 const LARGEST_LOSS = 0.02;
@@ -78,18 +72,24 @@ function lastBinShare({ edgesNm, mass }: StoppingProfile): number {
   return density(mass.length - 1) / peak;
 }
 
-/** Bins of the stopping profiles against the width of the edge: a coarse bin cannot show a fine edge. */
+/** Bins of the stopping profiles against the width of the edges: a coarse bin cannot show a fine edge. */
 export const checkBinWidth: FitCheck = (context) => {
-  const width = parameterOf(context, 'edgeWidthNm')?.value ?? 0;
-  if (width === 0) return null;
   const { prepared, answer } = context;
-  const scale = parameterOf(context, 'depthScale')?.value ?? 1;
-  const edge =
-    (answer.parameters.find(({ name }) => name === 'edgeDepthNm')!.value +
-      prepared.input.capThicknessNm) /
-    scale;
-  const widest =
-    scale * Math.max(...profilesInUse(context).map((profile) => binWidthAt(profile, edge)));
+  const { trial } = prepared.problem.model;
+  const values = valuesOf(answer);
+  const scale = values.depthScale ?? 1;
+  const graded = trial
+    .landmarks(trial.shape.map(({ name }) => values[name]!))
+    .filter(({ widthNm }) => widthNm > 0)
+    .map(({ depthNm, widthNm }) => {
+      const file = (depthNm + prepared.input.capThicknessNm) / scale;
+      const bins = profilesInUse(context).map((profile) => binWidthAt(profile, file));
+      return { widthNm, binNm: scale * Math.max(...bins) };
+    })
+    .sort((a, b) => b.binNm / b.widthNm - a.binNm / a.widthNm);
+  const [worst] = graded;
+  if (!worst) return null;
+  const { widthNm: width, binNm: widest } = worst;
   const id = 'bin-width';
   return widest > width / BINS_PER_WIDTH
     ? {

@@ -1,8 +1,7 @@
 import { InversionError } from '../errors';
 import { type BandBendingInput, reducedPotentials } from './band-bending-input';
 import { BOLTZMANN_EV_PER_K } from './constants';
-import { potentialTable, TAIL_BELOW, type PotentialTable } from './potential-table';
-import { quinticHermite } from './quintic-hermite';
+import { reducedCurve } from './reduced-curve';
 import { debyeLengthOf, surfaceCharge, type SurfaceCharge } from './surface-charge';
 
 /** Depths are nm below the semiconductor surface; a depth that is negative or not a number throws. */
@@ -55,67 +54,6 @@ export function bandBendingProfile(input: BandBendingInput): BandBendingProfile 
       return (input.bulkPerCm3 * (shareTo(rightNm) - shareTo(leftNm))) / (rightNm - leftNm);
     },
   };
-}
-
-interface ReducedCurve {
-  /** v at depth ξ. */
-  potential(depth: number): number;
-  /** ∫₀^ξ e^(−v) dξ. */
-  share(depth: number): number;
-}
-
-function reducedCurve(surface: number, fermi: number): ReducedCurve {
-  const decay = Math.sqrt(1 + Math.exp(-2 * fermi));
-  if (Math.abs(surface) <= TAIL_BELOW) return tail(surface, decay, 0, 0);
-  const table = potentialTable(surface, fermi);
-  const last = table.nodeCount - 1;
-  const sign = Math.sign(surface);
-  const end = table.depth[last]!;
-  const beyond = tail(sign * Math.exp(table.log[last]!), decay, end, table.share[last]!);
-  return {
-    potential: (depth) =>
-      depth >= end ? beyond.potential(depth) : sign * Math.exp(interpolate(table, depth, 'log')),
-    share: (depth) => (depth >= end ? beyond.share(depth) : interpolate(table, depth, 'share')),
-  };
-}
-
-/** v = v₀·e^(−√(1 + r)(ξ − ξ₀)) where |v| is small, and m = m₀ + (ξ − ξ₀) − ∫v. */
-function tail(v0: number, decay: number, from: number, share: number): ReducedCurve {
-  const potential = (depth: number): number => v0 * Math.exp(-decay * (depth - from));
-  return {
-    potential,
-    share: (depth) => share + (depth - from) + (v0 * Math.expm1(-decay * (depth - from))) / decay,
-  };
-}
-
-function interpolate(table: PotentialTable, depth: number, column: 'log' | 'share'): number {
-  const k = panelOf(table.depth, depth);
-  const width = table.depth[k + 1]! - table.depth[k]!;
-  const values = table[column];
-  const slopes = column === 'log' ? table.logSlope : table.shareSlope;
-  const curvatures = column === 'log' ? table.logCurvature : table.shareCurvature;
-  return quinticHermite(
-    (depth - table.depth[k]!) / width,
-    width,
-    values[k]!,
-    slopes[k]!,
-    curvatures[k]!,
-    values[k + 1]!,
-    slopes[k + 1]!,
-    curvatures[k + 1]!,
-  );
-}
-
-/** Panel that holds a depth between the first and the last node. */
-function panelOf(depths: Float64Array, depth: number): number {
-  let low = 0;
-  let high = depths.length - 1;
-  while (high - low > 1) {
-    const middle = (low + high) >> 1;
-    if (depths[middle]! <= depth) low = middle;
-    else high = middle;
-  }
-  return low;
 }
 
 function checkedDepth(depthNm: number): number {

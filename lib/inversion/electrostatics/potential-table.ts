@@ -1,3 +1,4 @@
+import { GAUSS_NODES, GAUSS_WEIGHTS } from '../statistics/gauss-legendre';
 import { majorityTerm, minorityTerm, reducedCharge, spaceChargeFunction } from './space-charge';
 
 /**
@@ -19,13 +20,6 @@ export interface PotentialTable {
 const WIDEST_PANEL = 0.125;
 /** Below this |v| the tail is an exponential to the last digit: the next term is of order v. */
 export const TAIL_BELOW = 1e-9;
-/** Gauss-Legendre on [−1, 1] with 5 points (Abramowitz and Stegun, table 25.4): the error of a panel is below 1e-15. */
-const NODES = [-0.906179845938664, -0.5384693101056831, 0, 0.5384693101056831, 0.906179845938664];
-const WEIGHTS = [
-  0.23692688505618908, 0.47862867049936647, 0.5688888888888889, 0.47862867049936647,
-  0.23692688505618908,
-];
-
 /**
  * Depth by quadrature of the first integral: ξ(v) = ∫ |v|/(√2 F(v)) d ln|v| from v up to v_s, whose integrand is smooth
  * from strong inversion to the exponential tail (Kingston and Neustadter 1955, section III). |v_s| must exceed TAIL_BELOW.
@@ -40,10 +34,10 @@ export function potentialTable(surface: number, fermi: number): PotentialTable {
     if (k > 0) {
       const middle = (logs[k - 1]! + logs[k]!) / 2;
       const half = (logs[k - 1]! - logs[k]!) / 2;
-      for (let g = 0; g < NODES.length; g++) {
-        const v = sign * Math.exp(middle + half * NODES[g]!);
+      for (let g = 0; g < GAUSS_NODES.length; g++) {
+        const v = sign * Math.exp(middle + half * GAUSS_NODES[g]!);
         const step =
-          (WEIGHTS[g]! * half * Math.abs(v)) / (Math.SQRT2 * spaceChargeFunction(v, fermi));
+          (GAUSS_WEIGHTS[g]! * half * Math.abs(v)) / (Math.SQRT2 * spaceChargeFunction(v, fermi));
         depth += step;
         share += step * Math.exp(-v);
       }

@@ -7,6 +7,7 @@ import type { FitInput } from '../types';
 /** @throws InversionError with one clear sentence for whatever a fit cannot start from. */
 export function checkInput(input: FitInput): void {
   checkPoints(input);
+  checkCovariance(input);
   checkResponse(input);
   checkCarriers(input);
   if (!(input.capThicknessNm >= 0 && Number.isFinite(input.capThicknessNm))) {
@@ -73,9 +74,10 @@ function checkResponse({ response, observable }: FitInput): void {
       'wrong-response',
       observable === 'rate'
         ? 'A scan of capture rates needs the capture-rate response.'
-        : 'A scan of fractions needs the two-level response.',
+        : 'A scan of fractions needs the two-level or the saturating response.',
     );
   }
+  if (response.kind === 'saturating-fraction') checkHalf(response);
   if (response.kind !== 'capture-rate') return;
   const { gammaCm3PerS, gammaSigmaCm3PerS, baselinePerUs } = response;
   if (!(gammaCm3PerS > 0 && Number.isFinite(gammaCm3PerS))) {
@@ -99,6 +101,57 @@ function checkResponse({ response, observable }: FitInput): void {
       `The rate without carriers cannot be ${baselinePerUs} µs⁻¹.`,
     );
   }
+}
+
+function checkHalf({
+  halfPerCm3,
+  halfSigmaPerCm3,
+}: Extract<FitInput['response'], { kind: 'saturating-fraction' }>): void {
+  if (!(halfPerCm3 > 0 && Number.isFinite(halfPerCm3))) {
+    throw new InversionError(
+      'bad-half-concentration',
+      `The concentration of half saturation must be a positive number of cm⁻³, not ${halfPerCm3}.`,
+    );
+  }
+  if (halfSigmaPerCm3 !== null && !(halfSigmaPerCm3 >= 0 && Number.isFinite(halfSigmaPerCm3))) {
+    throw new InversionError(
+      'bad-half-concentration',
+      `The uncertainty of the concentration of half saturation cannot be ${halfSigmaPerCm3} cm⁻³.`,
+    );
+  }
+}
+
+/** √V_ii and σ_i come from the same numbers and may differ by what a file rounds. */
+const SAME_SIGMA = 1e-3;
+
+function checkCovariance({ points, covariance }: FitInput): void {
+  if (!covariance) return;
+  const refuse = (message: string, detail?: Record<string, unknown>): never => {
+    throw new InversionError('bad-covariance', message, detail);
+  };
+  const size = points.length;
+  if (covariance.length !== size || covariance.some((row) => row.length !== size)) {
+    refuse(
+      `The covariance of ${size} points needs ${size} rows of ${size} numbers, not ${covariance.length} of ${covariance[0]?.length ?? 0}.`,
+    );
+  }
+  covariance.forEach((row, i) => {
+    row.forEach((value, j) => {
+      const scale = Math.sqrt(Math.abs(row[i]! * covariance[j]![j]!));
+      if (!Number.isFinite(value) || Math.abs(value - covariance[j]![i]!) > 1e-9 * scale) {
+        refuse(
+          `The covariance of points ${i + 1} and ${j + 1} is ${value} one way and ${covariance[j]![i]} the other; two equal finite numbers were expected.`,
+          { row: i, column: j },
+        );
+      }
+    });
+    if (!(Math.abs(Math.sqrt(row[i]!) / points[i]!.sigma - 1) <= SAME_SIGMA)) {
+      refuse(
+        `Point ${i + 1} of the energy scan has the uncertainty ${points[i]!.sigma}, but its variance in the covariance is ${row[i]}.`,
+        { row: i },
+      );
+    }
+  });
 }
 
 function checkCarriers({ carriers }: FitInput): void {

@@ -1,76 +1,15 @@
 import { foldStart } from '../fold/fold-edge';
+import { whiten } from '../linalg/whitener';
 import { solveBounded } from './solve-bounded';
 import type { Data, Model, Problem, Workspace } from './model';
 
-/**
- * Normal equations of the levels for given shares: the columns of the top, bulk and cap level are 1 − q − S, S and q,
- * each divided by σ; priors add one row each.
- */
-export function levelEquations(
-  model: Model,
-  data: Data,
-  shares: Float64Array,
-  sharesAt: number,
-  capShares: Float64Array,
-  gram: Float64Array,
-  moment: Float64Array,
-): void {
-  const { rowCount, levelCount, shapeCount, priorInverseSigma } = model;
-  const { y, inverseSigma, priorMean } = data;
-  let g00 = 0;
-  let g01 = 0;
-  let g11 = 0;
-  let g02 = 0;
-  let g12 = 0;
-  let g22 = 0;
-  let h0 = 0;
-  let h1 = 0;
-  let h2 = 0;
-  for (let i = 0; i < rowCount; i++) {
-    const inverse = inverseSigma[i]!;
-    const cap = levelCount > 2 ? capShares[i]! * inverse : 0;
-    const bulk = shares[sharesAt + i]! * inverse;
-    const top = inverse - cap - bulk;
-    const value = y[i]! * inverse;
-    g00 += top * top;
-    g01 += top * bulk;
-    g11 += bulk * bulk;
-    h0 += top * value;
-    h1 += bulk * value;
-    if (levelCount > 2) {
-      g02 += top * cap;
-      g12 += bulk * cap;
-      g22 += cap * cap;
-      h2 += cap * value;
-    }
-  }
-  const n = levelCount;
-  gram[0] = g00;
-  gram[1] = gram[n] = g01;
-  gram[n + 1] = g11;
-  moment[0] = h0;
-  moment[1] = h1;
-  if (n > 2) {
-    gram[2] = gram[6] = g02;
-    gram[5] = gram[7] = g12;
-    gram[8] = g22;
-    moment[2] = h2;
-  }
-  for (let k = 0; k < n; k++) {
-    const weight = priorInverseSigma[shapeCount + k]! ** 2;
-    gram[k * n + k] = gram[k * n + k]! + weight;
-    moment[k] = moment[k]! + weight * priorMean[shapeCount + k]!;
-  }
-}
-
-/** Weighted mean of the observations: the level that an undetermined level falls back to. */
-export function meanLevel({ y, inverseSigma }: Data): number {
+/** Level that an undetermined level falls back to: the mean of the observations, weighted by V⁻¹. */
+export function meanLevel({ unit }: Pick<Model, 'unit'>, { target }: Data): number {
   let sum = 0;
   let weights = 0;
-  for (let i = 0; i < y.length; i++) {
-    const weight = inverseSigma[i]! ** 2;
-    sum += weight * y[i]!;
-    weights += weight;
+  for (let i = 0; i < target.length; i++) {
+    sum += unit[i]! * target[i]!;
+    weights += unit[i]! * unit[i]!;
   }
   return sum / weights;
 }
@@ -81,6 +20,23 @@ export function foldAt(model: Model, work: Workspace, theta: Float64Array): void
   const scale = theta[scaleIndex]!;
   trial.fold(kernel, theta, capNm, scale, work.fold);
   if (capNm > 0) foldStart(kernel, capNm / scale, work.capShare, work.capByStart);
+  whitenColumns(model, work);
+}
+
+function whitenColumns({ rowCount, levelCount, unit, whitener }: Model, work: Workspace): void {
+  const { columns, fold, capShare } = work;
+  const bulkAt = rowCount;
+  for (let i = 0; i < rowCount; i++) columns[bulkAt + i] = fold.share[i]!;
+  whiten(whitener, columns, bulkAt);
+  const capAt = 2 * rowCount;
+  if (levelCount > 2) {
+    for (let i = 0; i < rowCount; i++) columns[capAt + i] = capShare[i]!;
+    whiten(whitener, columns, capAt);
+  }
+  for (let i = 0; i < rowCount; i++) {
+    const cap = levelCount > 2 ? columns[capAt + i]! : 0;
+    columns[i] = unit[i]! - cap - columns[bulkAt + i]!;
+  }
 }
 
 /** ŷ at the levels of θ, after foldAt. */
@@ -94,9 +50,30 @@ export function predictFromFold(model: Model, work: Workspace, theta: Float64Arr
   }
 }
 
+/** Normal equations of the levels after foldAt; a prior adds one row. */
+function levelEquations(
+  { rowCount, levelCount, shapeCount, priorInverseSigma }: Model,
+  { target, priorMean }: Data,
+  { columns, gram, moment }: Workspace,
+): void {
+  for (let k = 0; k < levelCount; k++) {
+    const weight = priorInverseSigma[shapeCount + k]! ** 2;
+    const kAt = k * rowCount;
+    let right = weight * priorMean[shapeCount + k]!;
+    for (let i = 0; i < rowCount; i++) right += columns[kAt + i]! * target[i]!;
+    moment[k] = right;
+    for (let l = 0; l <= k; l++) {
+      const lAt = l * rowCount;
+      let sum = k === l ? weight : 0;
+      for (let i = 0; i < rowCount; i++) sum += columns[kAt + i]! * columns[lAt + i]!;
+      gram[k * levelCount + l] = gram[l * levelCount + k] = sum;
+    }
+  }
+}
+
 /**
  * Φ at θ with the levels that are not held re-solved exactly within their bounds (separable least squares, Golub and
- * Pereyra 1973). Writes the levels into θ and fold, prediction and residual into the workspace.
+ * Pereyra 1973). Writes the levels into θ and fold and residual into the workspace.
  *
  * @param held 1 where a parameter keeps the value that θ carries.
  */
@@ -107,7 +84,7 @@ export function evaluate(
 ): number {
   foldAt(model, work, theta);
   const { levelCount, shapeCount } = model;
-  levelEquations(model, data, work.fold.share, 0, work.capShare, work.gram, work.moment);
+  levelEquations(model, data, work);
   for (let k = 0; k < levelCount; k++) {
     work.heldLevel[k] = held[shapeCount + k]!;
     work.levels[k] = theta[shapeCount + k]!;
@@ -124,35 +101,30 @@ export function evaluate(
     work.levels,
   );
   for (let k = 0; k < levelCount; k++) theta[shapeCount + k] = work.levels[k]!;
-  predictFromFold(model, work, theta);
-  return objectiveAt(model, data, work, theta);
+  return dataChiSquare(model, data, work, theta) + priorChiSquare(model, data, theta);
 }
 
-/** Data term of Φ: Σ ((y − ŷ)/σ)², leaving the reduced residuals in the workspace. */
+/** (y − ŷ)ᵀV⁻¹(y − ŷ) at the levels of θ after foldAt, leaving W·(y − ŷ) in the workspace. */
 export function dataChiSquare(
-  { rowCount }: Model,
-  { y, inverseSigma }: Data,
-  { predicted, residual }: Workspace,
+  { rowCount, shapeCount, levelCount }: Model,
+  { target }: Data,
+  { columns, residual }: Workspace,
+  theta: Float64Array,
 ): number {
+  const top = theta[shapeCount]!;
+  const bulk = theta[shapeCount + 1]!;
+  const cap = levelCount > 2 ? theta[shapeCount + 2]! : 0;
   let sum = 0;
   for (let i = 0; i < rowCount; i++) {
-    const r = (y[i]! - predicted[i]!) * inverseSigma[i]!;
+    let r = target[i]! - top * columns[i]! - bulk * columns[rowCount + i]!;
+    if (levelCount > 2) r -= cap * columns[2 * rowCount + i]!;
     residual[i] = r;
     sum += r * r;
   }
   return sum;
 }
 
-export function objectiveAt(
-  model: Model,
-  data: Data,
-  work: Workspace,
-  theta: Float64Array,
-): number {
-  return dataChiSquare(model, data, work) + priorChiSquare(model, data, theta);
-}
-
-export function priorChiSquare(
+function priorChiSquare(
   { size, priorInverseSigma }: Model,
   { priorMean }: Data,
   theta: Float64Array,
@@ -162,32 +134,29 @@ export function priorChiSquare(
   return sum;
 }
 
-/** Whitened Jacobian ∂ŷ/∂θ_k/σ of all parameters at θ, after foldAt. */
-export function fillJacobian({ model, data, work }: Problem, theta: Float64Array): void {
-  const { rowCount, shapeCount, levelCount, scaleIndex, capNm } = model;
-  const { inverseSigma } = data;
-  const { fold, capShare, capByStart, jacobian } = work;
+/** Whitened Jacobian W·∂ŷ/∂θ_k of all parameters at θ, after foldAt. */
+export function fillJacobian(
+  { model, work }: Pick<Problem, 'model' | 'work'>,
+  theta: Float64Array,
+): void {
+  const { rowCount, shapeCount, levelCount, scaleIndex, capNm, whitener } = model;
+  const { fold, capByStart, jacobian, columns } = work;
   const top = theta[shapeCount]!;
   const contrast = theta[shapeCount + 1]! - top;
   const capContrast = levelCount > 2 ? theta[shapeCount + 2]! - top : 0;
   const scale = theta[scaleIndex]!;
   for (let k = 0; k < shapeCount; k++) {
     const byShape = fold.byShape[k]!;
-    for (let i = 0; i < rowCount; i++)
-      jacobian[k * rowCount + i] = contrast * byShape[i]! * inverseSigma[i]!;
+    const at = k * rowCount;
+    for (let i = 0; i < rowCount; i++) jacobian[at + i] = contrast * byShape[i]!;
+    whiten(whitener, jacobian, at);
   }
-  const topAt = shapeCount * rowCount;
-  const bulkAt = topAt + rowCount;
-  const capAt = bulkAt + rowCount;
+  jacobian.set(columns, shapeCount * rowCount);
   const scaleAt = scaleIndex * rowCount;
   const startByScale = -capNm / (scale * scale);
   for (let i = 0; i < rowCount; i++) {
-    const inverse = inverseSigma[i]!;
-    const cap = capNm > 0 ? capShare[i]! : 0;
-    jacobian[topAt + i] = (1 - cap - fold.share[i]!) * inverse;
-    jacobian[bulkAt + i] = fold.share[i]! * inverse;
-    if (levelCount > 2) jacobian[capAt + i] = cap * inverse;
     const capPart = capNm > 0 ? capContrast * capByStart[i]! * startByScale : 0;
-    jacobian[scaleAt + i] = (contrast * fold.byScale[i]! + capPart) * inverse;
+    jacobian[scaleAt + i] = contrast * fold.byScale[i]! + capPart;
   }
+  whiten(whitener, jacobian, scaleAt);
 }

@@ -10,7 +10,7 @@ import type {
 } from '../types';
 import { covarianceAt } from '../uncertainty/covariance';
 import { reportParameters } from '../uncertainty/parameter-report';
-import { dataChiSquare, evaluate } from './evaluate';
+import { dataChiSquare, evaluate, predictFromFold } from './evaluate';
 import type { PreparedFit } from './prepared-fit';
 import { followMinimum, searchMinimum, type GlobalMinimum } from './search-minimum';
 
@@ -52,7 +52,11 @@ function unusable({ problem }: PreparedFit, minimum: GlobalMinimum): string | nu
   if (!Number.isFinite(minimum.chiSquare)) return 'χ² is not finite at any depth of the edge.';
   if (problem.model.held[0] || minimum.highestChiSquare - minimum.chiSquare >= DELTA_CHI_SQUARE_68)
     return null;
-  return 'The scan does not say where the edge is: χ² changes by less than 1 wherever the edge lies. It needs more contrast between the levels, more energies or smaller uncertainties.';
+  const [what, where] =
+    problem.model.trial.kind === 'band-bending'
+      ? ['how far the bands bend', 'however far they do']
+      : ['where the edge is', 'wherever the edge lies'];
+  return `The scan does not say ${what}: χ² changes by less than 1 ${where}. It needs more contrast between the levels, more energies or smaller uncertainties.`;
 }
 
 function answerAt(
@@ -70,21 +74,22 @@ function answerAt(
     status,
     parameters,
     chiSquare,
-    dataChiSquare: dataChiSquare(problem.model, problem.data, problem.work),
+    dataChiSquare: dataChiSquare(problem.model, problem.data, problem.work, minimum.theta),
     degreesOfFreedom: n - k,
     pValue: n > k ? chiSquareUpperTail(chiSquare, n - k) : null,
     freeParameters: k,
     aicc: n > k + 1 ? chiSquare + 2 * k + (2 * k * (k + 1)) / (n - k - 1) : null,
     bic: chiSquare + k * Math.log(n),
     covariance,
-    residuals: residualsOf(prepared),
+    residuals: residualsOf(prepared, minimum.theta),
     evidence: { folds, starts, iterations, predictedReduction },
   };
 }
 
-/** Residuals in the order of the scan, from the prediction in the workspace; a point without a stopping profile has none. */
-function residualsOf({ input, profiles, problem }: PreparedFit): Residual[] {
+/** Residuals in the order of the scan, from the fold in the workspace; a point without a stopping profile has none. */
+function residualsOf({ input, profiles, problem }: PreparedFit, theta: Float64Array): Residual[] {
   const { model, work } = problem;
+  predictFromFold(model, work, theta);
   const rowOfPoint = new Map(Array.from(model.pointOfRow, (point, row) => [point, row]));
   return input.points.flatMap(({ energyKeV, value, sigma, enabled }, index) => {
     const row = rowOfPoint.get(index);

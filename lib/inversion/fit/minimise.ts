@@ -1,11 +1,19 @@
+import type { EdgeParameters } from '../profile/trial-profile';
+import { widthsOf } from '../profile/trial-profile';
 import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
 import { OPENED_WIDTHS } from './widths';
 import { refine, type RefineOptions, type RefineResult, type RefineScratch } from './refine';
 
-/** Index of the edge whose borders χ² has kinks at. */
-const EDGE = 0;
+/** Two steps are minimised in turn, each with the other at rest, at most this often. */
+const MOST_SWEEPS = 8;
+
+export interface MinimiseScratch {
+  refine: RefineScratch;
+  inner: Float64Array;
+  innerHeld: Uint8Array;
+}
 
 /**
  * Local minimum of Φ over everything not held, θ improved in place. Where the trial profile is smooth, refine alone does it.
@@ -19,16 +27,16 @@ export function minimise(
   scratch: MinimiseScratch,
   options: RefineOptions,
 ): RefineResult {
-  const { kinked, widths } = problem.model.trial;
+  const { trial } = problem.model;
   const result = refine(problem, theta, held, scratch.refine, options);
-  if (kinked) return minimiseStep(problem, theta, held, scratch, options, result);
-  if (!widths.some((k) => theta[k] === 0 && !held[k])) return result;
+  if (trial.kinked) return minimiseSteps(problem, theta, held, scratch, options, result);
+  if (!trial.edges.some(({ width }) => width !== null && theta[width] === 0)) return result;
   const opened = leaveZeroWidth(problem, theta, held, scratch, options, result);
-  return opened ?? minimiseStep(problem, theta, held, scratch, options, result);
+  return opened ?? minimiseSteps(problem, theta, held, scratch, options, result);
 }
 
-/** Brent's minimiser over the edge within two bins of where refine stopped; widths stay, the rest follows. */
-function minimiseStep(
+/** Brent's minimiser over each step within two bins of where refine stopped; zero widths stay, the rest follows. */
+function minimiseSteps(
   problem: Problem,
   theta: Float64Array,
   held: Uint8Array,
@@ -36,38 +44,77 @@ function minimiseStep(
   options: RefineOptions,
   result: RefineResult,
 ): RefineResult {
-  const { model } = problem;
-  if (held[EDGE]) {
-    evaluate(problem, theta, held);
-    return result;
-  }
-  const { inner, innerHeld } = scratch;
-  innerHeld.set(held);
-  innerHeld[EDGE] = 1;
-  for (const k of model.trial.widths) innerHeld[k] = 1;
-  inner.set(theta);
-  const linear = held[model.scaleIndex] === 1;
-  const at = (edgeNm: number): number => {
-    inner[EDGE] = edgeNm;
-    return linear
-      ? evaluate(problem, inner, innerHeld)
-      : refine(problem, inner, innerHeld, scratch.refine, options).chiSquare;
-  };
-  const span = 2 * binWidthAt(problem, theta);
-  const best = minimiseOnLine(
-    at,
-    Math.max(model.lower[EDGE]!, theta[EDGE]! - span),
-    theta[EDGE]!,
-    Math.min(model.upper[EDGE]!, theta[EDGE]! + span),
-    Math.min(1e-5, Math.max(1e-9, options.tolerance)) * model.upper[EDGE]!,
+  const { edges } = problem.model.trial;
+  const steps = edges.filter(
+    (edge) => isStep(edge, theta) && !held[edge.position[edge.position.length - 1]!],
   );
   let { chiSquare } = result;
-  if (best.value < chiSquare) {
-    chiSquare = at(best.x);
-    theta.set(inner);
+  for (let sweep = 0; sweep < MOST_SWEEPS; sweep++) {
+    const before = chiSquare;
+    for (const step of steps)
+      chiSquare = minimiseStep(problem, theta, held, scratch, options, step, chiSquare);
+    if (steps.length < 2 || before - chiSquare <= options.tolerance * (1 + chiSquare)) break;
   }
   evaluate(problem, theta, held);
+  if (steps.length === 0) return result;
   return { chiSquare, iterations: result.iterations, converged: true, predictedReduction: 0 };
+}
+
+function isStep({ width }: EdgeParameters, theta: Float64Array): boolean {
+  return width === null || theta[width] === 0;
+}
+
+function minimiseStep(
+  problem: Problem,
+  theta: Float64Array,
+  held: Uint8Array,
+  { refine: refineScratch, inner, innerHeld }: MinimiseScratch,
+  options: RefineOptions,
+  step: EdgeParameters,
+  chiSquare: number,
+): number {
+  const { model } = problem;
+  const { edges } = model.trial;
+  const moved = step.position[step.position.length - 1]!;
+  // An edge that is placed from this one stays where it is and takes the move back, unless it is held.
+  const follower =
+    edges.find((edge) => edge !== step && edge.position.includes(moved))?.position.at(-1) ?? -1;
+  const counter = follower >= 0 && !held[follower] ? follower : -1;
+  innerHeld.set(held);
+  for (const edge of edges) {
+    if (!isStep(edge, theta)) continue;
+    innerHeld[edge.position[edge.position.length - 1]!] = 1;
+    if (edge.width !== null) innerHeld[edge.width] = 1;
+  }
+  innerHeld[moved] = 1;
+  inner.set(theta);
+  let linear = true;
+  for (let k = 0; k < model.size; k++) {
+    const level = k >= model.shapeCount && k < model.scaleIndex;
+    if (!level && !innerHeld[k]) linear = false;
+  }
+  const place = theta[moved]!;
+  const followed = counter < 0 ? 0 : theta[counter]!;
+  const at = (value: number): number => {
+    inner[moved] = value;
+    if (counter >= 0) inner[counter] = followed - (value - place);
+    return linear
+      ? evaluate(problem, inner, innerHeld)
+      : refine(problem, inner, innerHeld, refineScratch, options).chiSquare;
+  };
+  const span = 2 * binWidthAt(problem, theta, step);
+  const highest = counter < 0 ? Infinity : place + followed - model.lower[counter]!;
+  const best = minimiseOnLine(
+    at,
+    Math.max(model.lower[moved]!, place - span),
+    place,
+    Math.min(model.upper[moved]!, place + span, highest),
+    Math.min(1e-5, Math.max(1e-9, options.tolerance)) * model.upper[moved]!,
+  );
+  if (!(best.value < chiSquare)) return chiSquare;
+  const reached = at(best.x);
+  theta.set(inner);
+  return reached;
 }
 
 /**
@@ -87,7 +134,7 @@ function leaveZeroWidth(
   let lowest = result.chiSquare;
   let width = -1;
   let opened = 0;
-  for (const k of trial.widths) {
+  for (const k of widthsOf(trial)) {
     if (held[k] || theta[k]! > 0) continue;
     for (const share of OPENED_WIDTHS) {
       inner.set(theta);
@@ -105,16 +152,11 @@ function leaveZeroWidth(
   return { ...followed, iterations: followed.iterations + result.iterations };
 }
 
-export interface MinimiseScratch {
-  refine: RefineScratch;
-  inner: Float64Array;
-  innerHeld: Uint8Array;
-}
-
-/** Widest bin round the edge, in depths of the profile. */
-function binWidthAt({ model }: Problem, theta: Float64Array): number {
+/** Widest bin round an edge, in depths of the profile. */
+function binWidthAt({ model }: Problem, theta: Float64Array, { position }: EdgeParameters): number {
   const scale = theta[model.scaleIndex]!;
-  const u = (theta[EDGE]! + model.capNm) / scale;
+  const depth = position.reduce((sum, k) => sum + theta[k]!, 0);
+  const u = (depth + model.capNm) / scale;
   let widest = 0;
   for (const { edgesNm } of model.kernel.groups) {
     let j = 1;

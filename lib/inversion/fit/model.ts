@@ -1,5 +1,6 @@
 import type { ShareFold, TrialProfile } from '../profile/trial-profile';
 import type { Kernel } from '../fold/kernel';
+import type { Whitener } from '../linalg/whitener';
 import type { ParameterName } from '../types';
 
 /**
@@ -31,24 +32,33 @@ export interface Model {
   neutral: Float64Array;
   /** 1/σ of each prior; 0 for none. */
   priorInverseSigma: Float64Array;
+  /** W with WᵀW = V⁻¹: everything that Φ is made of is folded first and whitened then. */
+  whitener: Whitener;
+  /** W·1: what a scan of ones becomes. */
+  unit: Float64Array;
   grid: SearchGrid;
 }
 
-/** What a resample changes and nothing else: values, 1/σ (0 for a point left out) and the means of the priors. */
+/** What a resample changes and nothing else: the whitened values W·y and the means of the priors. */
 export interface Data {
-  y: Float64Array;
-  inverseSigma: Float64Array;
+  target: Float64Array;
   priorMean: Float64Array;
 }
 
-/** Folds of the search nodes at the neutral depth scale: they depend on no datum, so every resample shares them. */
+/**
+ * Whitened folds of the search nodes at the neutral depth scale and the normal matrices of their levels: they depend on no
+ * datum, so every resample shares them. The nodes are all combinations of the axes, the first parameter changing fastest.
+ */
 export interface SearchGrid {
   nodeCount: number;
-  shapes: Float64Array;
+  /** Values tried of each shape parameter, ascending. */
+  axes: readonly Float64Array[];
+  /** W·S, row-major by node. */
   shares: Float64Array;
-  capShares: Float64Array;
-  /** Nodes per line of the lattice, slowest first; [n] for a sharp edge, [widths, depths] for a graded one. */
-  lattice: readonly [number, number];
+  /** W·q. */
+  capShare: Float64Array;
+  /** Normal matrix of the levels with their priors, levels² numbers by node. */
+  grams: Float64Array;
 }
 
 /** Scratch of one thread: allocated once, written by every evaluation. */
@@ -56,10 +66,13 @@ export interface Workspace {
   fold: ShareFold;
   capShare: Float64Array;
   capByStart: Float64Array;
+  /** W times the columns of the levels, 1 − q − S, S and q: level-major, columns[l·rows + i]. */
+  columns: Float64Array;
+  /** ŷ, not whitened. */
   predicted: Float64Array;
-  /** (y − ŷ)/σ */
+  /** W·(y − ŷ) */
   residual: Float64Array;
-  /** Whitened Jacobian ∂ŷ/∂θ_k /σ, parameter-major: jacobian[k·rows + i]. */
+  /** Whitened Jacobian W·∂ŷ/∂θ_k, parameter-major: jacobian[k·rows + i]. */
   jacobian: Float64Array;
   gram: Float64Array;
   moment: Float64Array;

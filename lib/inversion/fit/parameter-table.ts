@@ -1,29 +1,18 @@
 import { DEPTH_SCALE_PRIOR } from '../constants';
 import { InversionError } from '../errors';
 import { RESPONSES } from '../response/responses';
-import type { TrialProfile } from '../profile/trial-profile';
+import type { ShapeParameter, TrialProfile } from '../profile/trial-profile';
 import type { FitInput, GaussianPrior, ParameterName, ParameterSetting } from '../types';
 
 /** Depth scales beyond a factor of two are not an error of a stopping calculation but a wrong layer or a wrong unit. */
 const DEPTH_SCALE_BOUNDS = [0.5, 2] as const;
 
-/**
- * Whether the lower and upper bound are the natural end of a parameter, so that an interval ends there. An edge at the surface
- * or past the last bin is no edge at all: there an interval stays open.
- */
-export const CLOSED: Readonly<Record<ParameterName, readonly [boolean, boolean]>> = {
-  edgeDepthNm: [false, false],
-  edgeWidthNm: [true, false],
-  levelTop: [true, true],
-  levelBulk: [true, true],
-  levelCap: [true, true],
-  depthScale: [false, false],
-};
-
 export interface ParameterRow {
   name: ParameterName;
   lower: number;
   upper: number;
+  /** Whether a bound is the natural end of the parameter, so that an interval ends there and is not open. */
+  closed: readonly [boolean, boolean];
   held: boolean;
   /** Held value, or a neutral one. */
   neutral: number;
@@ -37,42 +26,55 @@ export function depthScaleSetting({ parameters }: FitInput): ParameterSetting {
 }
 
 /** One row per parameter of the trial profile: shape, levels, depth scale. */
-export function parameterTable(
-  input: FitInput,
-  trial: TrialProfile,
-  deepestNm: number,
-): ParameterRow[] {
+export function parameterTable(input: FitInput, trial: TrialProfile): ParameterRow[] {
   const response = RESPONSES[input.response.kind];
-  const levels = response.levelBounds(input.response);
-  const rows: ParameterRow[] = trial.shapeNames.map((name) => row(input, name, 0, deepestNm, 0));
+  const [lower, upper] = response.levelBounds(input.response);
+  const level = { lower, upper, closed: [true, true], given: null } as const;
+  const [capLower, capUpper] = response.capBounds;
+  const settings = { ...input.parameters, depthScale: depthScaleSetting(input) };
+  const rows = trial.shape.map((parameter) => row(settings, parameter, parameter.given ?? 0));
   rows.push(
-    row(input, 'levelTop', levels[0], levels[1], 0),
-    row(input, 'levelBulk', levels[0], levels[1], 0),
+    row(settings, { ...level, name: 'levelTop', given: carrierFreeLevel(input) }, 0),
+    row(settings, { ...level, name: 'levelBulk' }, 0),
   );
   if (input.capThicknessNm > 0)
-    rows.push(row(input, 'levelCap', response.capBounds[0], response.capBounds[1], 0));
-  const scale = {
-    ...input,
-    parameters: { ...input.parameters, depthScale: depthScaleSetting(input) },
-  };
-  rows.push(row(scale, 'depthScale', ...DEPTH_SCALE_BOUNDS, 1));
+    rows.push(row(settings, { ...level, name: 'levelCap', lower: capLower, upper: capUpper }, 0));
+  const [smallest, largest] = DEPTH_SCALE_BOUNDS;
+  rows.push(
+    row(
+      settings,
+      { name: 'depthScale', lower: smallest, upper: largest, closed: [false, false], given: null },
+      1,
+    ),
+  );
   return rows;
 }
 
+/** Bent bands leave no carriers at s = 0, where a rate is therefore known; null where the level is for the data to say. */
+function carrierFreeLevel({ profile, response }: FitInput): number | null {
+  return profile === 'band-bending' && response.kind === 'capture-rate'
+    ? response.baselinePerUs
+    : null;
+}
+
 function row(
-  { parameters }: FitInput,
-  name: ParameterName,
-  lower: number,
-  upper: number,
+  parameters: FitInput['parameters'],
+  { name, lower, upper, closed, given }: ShapeParameter,
   neutral: number,
 ): ParameterRow {
-  const setting = parameters[name];
-  if (!setting) return { name, lower, upper, held: false, neutral, prior: null };
+  const setting = parameters[name] ?? { held: given !== null, value: given, prior: null };
   checkSetting(name, setting, lower, upper);
-  if (setting.held) return { name, lower, upper, held: true, neutral: setting.value!, prior: null };
-  const { prior } = setting;
+  const { held, prior } = setting;
   const start = prior ? Math.min(Math.max(prior.mean, lower), upper) : neutral;
-  return { name, lower, upper, held: false, neutral: start, prior };
+  return {
+    name,
+    lower,
+    upper,
+    closed,
+    held,
+    neutral: held ? setting.value! : start,
+    prior: held ? null : prior,
+  };
 }
 
 function checkSetting(

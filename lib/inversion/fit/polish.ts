@@ -1,4 +1,4 @@
-import { evaluate, fillJacobian, foldAt, predictFromFold } from './evaluate';
+import { evaluate, fillJacobian, foldAt } from './evaluate';
 import { leastSquares, type LeastSquaresResult } from './least-squares';
 import type { LeastSquaresProblem } from './least-squares-problem';
 import type { Problem } from './model';
@@ -36,7 +36,7 @@ function whitened(
   free: readonly number[],
 ): LeastSquaresProblem {
   const { model, data, work } = problem;
-  const { rowCount, priorInverseSigma } = model;
+  const { rowCount, shapeCount, levelCount, priorInverseSigma } = model;
   const priors = free.filter((k) => priorInverseSigma[k]! > 0);
   const rows = rowCount + priors.length;
   const full = Float64Array.from(theta);
@@ -49,16 +49,17 @@ function whitened(
   return {
     size: free.length,
     rows,
-    target: [
-      ...Array.from(data.y, (value, i) => value * data.inverseSigma[i]!),
-      ...priors.map((k) => data.priorMean[k]! * priorInverseSigma[k]!),
-    ],
+    target: [...data.target, ...priors.map((k) => data.priorMean[k]! * priorInverseSigma[k]!)],
     lower: free.map((k) => model.lower[k]!),
     upper: free.map((k) => model.upper[k]!),
     predict(values, into) {
       foldPoint(values);
-      predictFromFold(model, work, full);
-      for (let i = 0; i < rowCount; i++) into[i] = work.predicted[i]! * data.inverseSigma[i]!;
+      for (let i = 0; i < rowCount; i++) {
+        let value = 0;
+        for (let l = 0; l < levelCount; l++)
+          value += full[shapeCount + l]! * work.columns[l * rowCount + i]!;
+        into[i] = value;
+      }
       priors.forEach((k, p) => {
         into[rowCount + p] = full[k]! * priorInverseSigma[k]!;
       });

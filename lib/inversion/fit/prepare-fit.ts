@@ -1,12 +1,15 @@
 import { InversionError } from '../errors';
 import { compileKernel } from '../fold/kernel';
-import { TRIAL_PROFILES } from '../profile/trial-profiles';
+import { correlatedWhitener, diagonalWhitener, whiten, type Whitener } from '../linalg/whitener';
+import type { TrialProfile } from '../profile/trial-profile';
+import { trialProfileOf } from '../profile/trial-profiles';
+import { RESPONSES } from '../response/responses';
 import { stoppingProfileAt } from '../stopping/stopping-profile-at';
 import type { FitInput, ScanPoint, StoppingProfile, StoppingSet } from '../types';
 import { checkInput } from './check-input';
 import { meanLevel } from './evaluate';
 import type { Data, Model } from './model';
-import { CLOSED, depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
+import { depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
 import type { PreparedFit } from './prepared-fit';
 import { createRefineScratch } from './refine';
 import { buildSearchGrid } from './search-grid';
@@ -40,7 +43,6 @@ export function prepareFit(input: FitInput): PreparedFit {
 /** prepareFit without the count of points: a template for simulation has none to fit. */
 export function compileInput(input: FitInput): PreparedFit {
   checkInput(input);
-  const trial = TRIAL_PROFILES[input.profile];
   const profiles = input.points.map((point) => profileOf(input.stopping, point));
   const enabledCount = input.points.filter((point) => point.enabled).length;
   if (enabledCount === 0)
@@ -55,9 +57,10 @@ export function compileInput(input: FitInput): PreparedFit {
       `No muon passes the cap of ${input.capThicknessNm} nm at the energies in use.`,
     );
   }
-  const table = parameterTable(input, trial, deepestNm);
-  const model = compileModel(input, table, profiles, rows, deepestNm);
-  const data = compileData(input, table, rows);
+  const trial = trialProfileOf(input, deepestNm);
+  const table = parameterTable(input, trial);
+  const model = compileModel(input, trial, table, profiles, rows, deepestNm);
+  const data = compileData(input, table, model);
   const free = table.filter((row) => !row.held);
   const size = table.length;
   return {
@@ -68,7 +71,7 @@ export function compileInput(input: FitInput): PreparedFit {
     deepestNm,
     priorCount: free.filter((row) => row.prior !== null).length,
     enabledCount,
-    problem: { model, data, work: createWorkspace(model), fallback: meanLevel(data) },
+    problem: { model, data, work: createWorkspace(model), fallback: meanLevel(model, data) },
     scratch: {
       refine: createRefineScratch(size),
       inner: new Float64Array(size),
@@ -115,23 +118,46 @@ function deepestStop(
   return deepest;
 }
 
+/** W of the rows of the model, which are not in the order of the points. */
+export function whitenerOf(
+  { points, covariance }: Pick<FitInput, 'points' | 'covariance'>,
+  rows: ArrayLike<number>,
+): Whitener {
+  const order = Array.from(rows);
+  const enabled = order.map((index) => points[index]!.enabled);
+  return covariance
+    ? correlatedWhitener(
+        order.map((a) => order.map((b) => covariance[a]![b]!)),
+        enabled,
+      )
+    : diagonalWhitener(
+        order.map((index) => points[index]!.sigma),
+        enabled,
+      );
+}
+
 function compileModel(
   input: FitInput,
+  trial: TrialProfile,
   table: readonly ParameterRow[],
   profiles: readonly (StoppingProfile | null)[],
   rows: Int32Array,
   deepestNm: number,
 ): Model {
-  const trial = TRIAL_PROFILES[input.profile];
   const kernel = compileKernel(Array.from(rows, (index) => profiles[index]!));
-  const shapeCount = trial.shapeNames.length;
-  const shapeHeld = (k: number): number | null =>
-    k < shapeCount && table[k]!.held ? table[k]!.neutral : null;
+  const shapeCount = trial.shape.length;
+  const seen = RESPONSES[input.response.kind].seen?.(trial, input) ?? trial;
+  const whitener = whitenerOf(input, rows);
+  const unit = new Float64Array(rows.length).fill(1);
+  whiten(whitener, unit);
+  const priorInverseSigma = Float64Array.from(table, (row) =>
+    row.prior ? 1 / row.prior.sigma : 0,
+  );
   return {
     rowCount: rows.length,
     pointOfRow: rows,
     kernel,
-    trial,
+    trial: seen,
     capNm: input.capThicknessNm,
     names: table.map((row) => row.name),
     size: table.length,
@@ -140,30 +166,45 @@ function compileModel(
     scaleIndex: table.length - 1,
     lower: Float64Array.from(table, (row) => row.lower),
     upper: Float64Array.from(table, (row) => row.upper),
-    closedLower: Uint8Array.from(table, (row) => (CLOSED[row.name][0] ? 1 : 0)),
-    closedUpper: Uint8Array.from(table, (row) => (CLOSED[row.name][1] ? 1 : 0)),
+    closedLower: Uint8Array.from(table, (row) => (row.closed[0] ? 1 : 0)),
+    closedUpper: Uint8Array.from(table, (row) => (row.closed[1] ? 1 : 0)),
     held: Uint8Array.from(table, (row) => (row.held ? 1 : 0)),
     neutral: Float64Array.from(table, (row) => row.neutral),
-    priorInverseSigma: Float64Array.from(table, (row) => (row.prior ? 1 / row.prior.sigma : 0)),
+    priorInverseSigma,
+    whitener,
+    unit,
     grid: buildSearchGrid({
       kernel,
-      trial,
+      trial: seen,
       capNm: input.capThicknessNm,
       scale: table[table.length - 1]!.neutral,
-      heldDepthNm: shapeHeld(0),
-      heldWidthNm: shapeHeld(1),
+      heldShape: table.slice(0, shapeCount).map((row) => (row.held ? row.neutral : null)),
       deepestNm,
-      enabled: Uint8Array.from(rows, (index) => (input.points[index]!.enabled ? 1 : 0)),
+      whitener,
+      unit,
+      levelPriors: priorInverseSigma.subarray(shapeCount, table.length - 1),
     }),
   };
 }
 
-function compileData({ points }: FitInput, table: readonly ParameterRow[], rows: Int32Array): Data {
+function compileData(
+  input: FitInput,
+  table: readonly ParameterRow[],
+  { pointOfRow, whitener }: Model,
+): Data {
   return {
-    y: Float64Array.from(rows, (index) => points[index]!.value),
-    inverseSigma: Float64Array.from(rows, (index) =>
-      points[index]!.enabled ? 1 / points[index]!.sigma : 0,
-    ),
+    target: whitenedValues(input, pointOfRow, whitener),
     priorMean: Float64Array.from(table, (row) => row.prior?.mean ?? 0),
   };
+}
+
+/** W·y, in the rows of the model. */
+export function whitenedValues(
+  { points }: Pick<FitInput, 'points'>,
+  pointOfRow: Int32Array,
+  whitener: Whitener,
+): Float64Array {
+  const target = Float64Array.from(pointOfRow, (index) => points[index]!.value);
+  whiten(whitener, target);
+  return target;
 }

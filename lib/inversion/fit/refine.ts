@@ -1,4 +1,5 @@
 import { evaluate, fillJacobian } from './evaluate';
+import { widthsOf } from '../profile/trial-profile';
 import type { Problem } from './model';
 import {
   createNormalEquations,
@@ -56,7 +57,7 @@ export function refine(
 ): RefineResult {
   const { normal, trial, active } = scratch;
   const { lower, upper, size, shapeCount, levelCount } = problem.model;
-  const { widths } = problem.model.trial;
+  const widths = widthsOf(problem.model.trial);
   let chiSquare = evaluate(problem, theta, held);
   let damping = FIRST_DAMPING;
   let iterations = 0;

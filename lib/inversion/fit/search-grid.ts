@@ -1,18 +1,13 @@
 import { coarsenKernel } from '../fold/coarsen-kernel';
 import { foldStart } from '../fold/fold-edge';
 import type { Kernel } from '../fold/kernel';
+import { whiten, type Whitener } from '../linalg/whitener';
 import type { TrialProfile } from '../profile/trial-profile';
 import type { SearchGrid } from './model';
 import { createShareFold } from './workspace';
 
-/** Depth nodes of a graded edge; an edge moves the fold on the scale of the straggling, so tens of nodes find every valley. */
-const GRADED_DEPTHS = 28;
-/** Widths tried, as shares of the depth range: a step, then log-spaced. */
-const WIDTH_SHARES = [0, 0.012, 0.035, 0.09, 0.22, 0.5];
-/** A sharp edge has one shape parameter only and cheap folds: the lattice may be fine. */
-const SHARP_DEPTHS = 192;
-/** Bins of the stopping profiles that a graded edge is searched with. A sharp edge takes no more time on the bins of the file. */
-const GRADED_BINS = 80;
+/** Bins of the stopping profiles that a smooth profile is searched with. A sharp edge takes no more time on the bins of the file. */
+const COARSE_BINS = 80;
 
 export interface GridInput {
   kernel: Kernel;
@@ -20,54 +15,98 @@ export interface GridInput {
   capNm: number;
   /** Neutral depth scale. */
   scale: number;
-  /** Held depth and width, or null. */
-  heldDepthNm: number | null;
-  heldWidthNm: number | null;
+  /** Held value of each shape parameter, or null. */
+  heldShape: readonly (number | null)[];
   deepestNm: number;
-  /** Rows that are used: they say where the stops are. */
-  enabled: Uint8Array;
+  whitener: Whitener;
+  unit: Float64Array;
+  /** 1/σ of the priors of the levels. */
+  levelPriors: Float64Array;
 }
 
-/** Folds on the search lattice. Nodes lie denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
+/** Whitened folds and normal matrices of the levels on the search lattice. */
 export function buildSearchGrid(input: GridInput): SearchGrid {
-  const { trial, capNm, scale } = input;
-  const kernel = trial.kinked ? input.kernel : coarsenKernel(input.kernel, GRADED_BINS);
-  const depths =
-    input.heldDepthNm === null
-      ? blendedDepths(input, trial.kinked ? SHARP_DEPTHS : GRADED_DEPTHS)
-      : [input.heldDepthNm];
-  const widths = trial.shapeNames.length < 2 ? [0] : searchWidths(input);
-  const shapeCount = trial.shapeNames.length;
-  const nodeCount = widths.length * depths.length;
-  const shapes = new Float64Array(nodeCount * shapeCount);
-  const shares = new Float64Array(nodeCount * kernel.rowCount);
-  const capShares = new Float64Array(kernel.rowCount);
-  if (capNm > 0)
-    foldStart(input.kernel, capNm / scale, capShares, new Float64Array(kernel.rowCount));
-  const fold = createShareFold({ rowCount: kernel.rowCount, kernel, shapeCount });
-  fold.edge.derivatives = false;
-  let node = 0;
-  for (const width of widths) {
-    for (const depth of depths) {
-      const shape = shapes.subarray(node * shapeCount, (node + 1) * shapeCount);
-      shape[0] = depth;
-      if (shapeCount > 1) shape[1] = width;
-      trial.fold(kernel, shape, capNm, scale, fold);
-      shares.set(fold.share, node * kernel.rowCount);
-      node++;
-    }
+  const { trial, capNm, scale, whitener } = input;
+  const { rowCount } = input.kernel;
+  const kernel = trial.kinked ? input.kernel : coarsenKernel(input.kernel, COARSE_BINS);
+  const axes = trial
+    .searchAxes({
+      deepestNm: input.deepestNm,
+      depths: (count) => blendedDepths(input, count),
+    })
+    .map((axis, k) => {
+      const held = input.heldShape[k] ?? null;
+      return held === null ? axis : Float64Array.of(held);
+    });
+  const nodeCount = axes.reduce((product, axis) => product * axis.length, 1);
+  const shares = new Float64Array(nodeCount * rowCount);
+  const capShare = new Float64Array(rowCount);
+  if (capNm > 0) foldStart(input.kernel, capNm / scale, capShare, new Float64Array(rowCount));
+  whiten(whitener, capShare);
+  const fold = createShareFold({ rowCount, kernel, shapeCount: axes.length });
+  fold.derivatives = false;
+  const shape = new Float64Array(axes.length);
+  const levelCount = input.levelPriors.length;
+  const grams = new Float64Array(nodeCount * levelCount * levelCount);
+  for (let node = 0; node < nodeCount; node++) {
+    shapeOfNode(axes, node, shape);
+    trial.fold(kernel, shape, capNm, scale, fold);
+    shares.set(fold.share, node * rowCount);
+    whiten(whitener, shares, node * rowCount);
+    fillGram(input, shares, node, capShare, grams);
   }
-  return { nodeCount, shapes, shares, capShares, lattice: [widths.length, depths.length] };
+  return { nodeCount, axes, shares, capShare, grams };
 }
 
-function searchWidths({ heldWidthNm, deepestNm }: GridInput): number[] {
-  return heldWidthNm === null ? WIDTH_SHARES.map((share) => share * deepestNm) : [heldWidthNm];
+/** Values of the shape at a node, the first parameter changing fastest. */
+export function shapeOfNode(
+  axes: readonly Float64Array[],
+  node: number,
+  shape: Float64Array,
+): void {
+  let rest = node;
+  for (let k = 0; k < axes.length; k++) {
+    const axis = axes[k]!;
+    const place = rest % axis.length;
+    shape[k] = axis[place]!;
+    rest = (rest - place) / axis.length;
+  }
 }
 
+/** Gram matrix of the columns 1 − q − S, S and q, and the priors. */
+function fillGram(
+  { unit, levelPriors }: GridInput,
+  shares: Float64Array,
+  node: number,
+  capShare: Float64Array,
+  grams: Float64Array,
+): void {
+  const n = levelPriors.length;
+  const rowCount = unit.length;
+  const at = node * n * n;
+  for (let i = 0; i < rowCount; i++) {
+    const bulk = shares[node * rowCount + i]!;
+    const cap = n > 2 ? capShare[i]! : 0;
+    const top = unit[i]! - cap - bulk;
+    grams[at] = grams[at]! + top * top;
+    grams[at + 1] = grams[at + 1]! + top * bulk;
+    grams[at + n + 1] = grams[at + n + 1]! + bulk * bulk;
+    if (n < 3) continue;
+    grams[at + 2] = grams[at + 2]! + top * cap;
+    grams[at + 5] = grams[at + 5]! + bulk * cap;
+    grams[at + 8] = grams[at + 8]! + cap * cap;
+  }
+  for (let k = 0; k < n; k++) {
+    grams[at + k * n + k] = grams[at + k * n + k]! + levelPriors[k]! ** 2;
+    for (let l = 0; l < k; l++) grams[at + k * n + l] = grams[at + l * n + k]!;
+  }
+}
+
+/** Depths denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
 function blendedDepths(
-  { kernel, capNm, scale, deepestNm, enabled }: GridInput,
+  { kernel, capNm, scale, deepestNm, whitener }: GridInput,
   count: number,
-): number[] {
+): Float64Array {
   const fine = 128;
   const blend = new Float64Array(fine + 1);
   const share = new Float64Array(kernel.rowCount);
@@ -77,19 +116,17 @@ function blendedDepths(
     let sum = 0;
     let used = 0;
     for (let i = 0; i < share.length; i++) {
-      if (!enabled[i]) continue;
+      if (whitener.inverseSigma[i] === 0) continue;
       sum += share[i]!;
       used++;
     }
     blend[k] = sum / used + k / fine;
   }
-  const depths: number[] = [];
   let k = 0;
-  for (let node = 0; node < count; node++) {
+  return Float64Array.from({ length: count }, (_, node) => {
     const goal = blend[0]! + ((blend[fine]! - blend[0]!) * node) / (count - 1);
     while (k < fine - 1 && blend[k + 1]! < goal) k++;
     const t = Math.min(1, Math.max(0, (goal - blend[k]!) / (blend[k + 1]! - blend[k]!)));
-    depths.push((deepestNm * (k + t)) / fine);
-  }
-  return depths;
+    return (deepestNm * (k + t)) / fine;
+  });
 }

@@ -5,9 +5,8 @@ import { polish } from './polish';
 import type { RefineResult } from './refine';
 import { localMinima, scanGrid, thetaOfNode } from './search';
 import { openWidths } from './widths';
+import { widthsOf } from '../profile/trial-profile';
 
-/** Valleys of the coarse search that are followed to their bottom. */
-const STARTS = 3;
 /** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
 const VALLEY = { maxIterations: 60, tolerance: 1e-5 };
 const POLISH_TOLERANCE = 1e-8;
@@ -21,7 +20,7 @@ export interface GlobalMinimum {
   starts: number;
   iterations: number;
   predictedReduction: number;
-  /** Largest χ² over the depths of the lattice, each at its best width: how much the edge matters at all. */
+  /** Largest χ² over the first shape parameter on the lattice, each at the best of the others: how much it matters at all. */
   highestChiSquare: number;
 }
 
@@ -34,7 +33,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   const { grid, held, neutral, size } = model;
   const chiSquares = new Float64Array(grid.nodeCount);
   scanGrid(problem, neutral, held, chiSquares);
-  const nodes = localMinima(grid.lattice, chiSquares).slice(0, STARTS);
+  const nodes = localMinima(grid.axes, chiSquares).slice(0, model.trial.starts);
   let best = Infinity;
   let iterations = 0;
   const theta = new Float64Array(size);
@@ -52,7 +51,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };
   if (!model.trial.kinked)
     evidence.iterations += polish(problem, theta, POLISH_TOLERANCE).iterations;
-  return finish(problem, scratch, theta, evidence, highestOverDepths(grid.lattice, chiSquares));
+  return finish(problem, scratch, theta, evidence, highestOverDepths(grid.axes, chiSquares));
 }
 
 /** The minimum below a point that lies lower than the one known. */
@@ -116,7 +115,7 @@ function closeWidths(
 ): number {
   const { model } = problem;
   let lowest = chiSquare;
-  for (const k of model.trial.widths) {
+  for (const k of widthsOf(model.trial)) {
     if (model.held[k] || theta[k] === 0 || theta[k]! > NEARLY_SHARP * model.upper[k]!) continue;
     const step = Float64Array.from(theta);
     step[k] = 0;
@@ -130,16 +129,11 @@ function closeWidths(
   return lowest;
 }
 
-function highestOverDepths(
-  [lines, perLine]: readonly [number, number],
-  chiSquares: Float64Array,
-): number {
-  let highest = -Infinity;
-  for (let k = 0; k < perLine; k++) {
-    let lowest = Infinity;
-    for (let line = 0; line < lines; line++)
-      lowest = Math.min(lowest, chiSquares[line * perLine + k]!);
-    highest = Math.max(highest, lowest);
-  }
-  return highest;
+function highestOverDepths([depths]: readonly Float64Array[], chiSquares: Float64Array): number {
+  const lowest = new Float64Array(depths!.length).fill(Infinity);
+  chiSquares.forEach((chiSquare, node) => {
+    const k = node % lowest.length;
+    lowest[k] = Math.min(lowest[k]!, chiSquare);
+  });
+  return lowest.reduce((a, b) => Math.max(a, b), -Infinity);
 }

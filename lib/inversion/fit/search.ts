@@ -1,28 +1,46 @@
-import { levelEquations } from './evaluate';
-import type { Problem } from './model';
+import type { Model, Problem } from './model';
+import { shapeOfNode } from './search-grid';
 import { solveBounded } from './solve-bounded';
 
-/** χ² at every node, levels solved exactly, θ's priors on the nonlinear parameters included. Written to chiSquares. */
+/** χ² at every node, levels solved exactly, the priors of the shape included. Written to chiSquares. */
 export function scanGrid(
   { model, data, work, fallback }: Problem,
   neutral: Float64Array,
   held: Uint8Array,
   chiSquares: Float64Array,
-): number {
-  const { grid, rowCount, shapeCount, levelCount, scaleIndex, priorInverseSigma } = model;
+): void {
+  const { grid, rowCount, shapeCount, levelCount, scaleIndex, priorInverseSigma, unit } = model;
   const { gram, moment, levels, heldLevel } = work;
+  const { target, priorMean } = data;
+  const { shares, capShare, grams } = grid;
   let constant = 0;
-  for (let i = 0; i < rowCount; i++) constant += (data.y[i]! * data.inverseSigma[i]!) ** 2;
+  let unitMoment = 0;
+  let capMoment = 0;
+  for (let i = 0; i < rowCount; i++) {
+    constant += target[i]! * target[i]!;
+    unitMoment += unit[i]! * target[i]!;
+    capMoment += capShare[i]! * target[i]!;
+  }
   for (let k = shapeCount; k < model.size; k++) {
-    const value = k === scaleIndex ? data.priorMean[k]! - neutral[k]! : data.priorMean[k]!;
+    const value = k === scaleIndex ? priorMean[k]! - neutral[k]! : priorMean[k]!;
     constant += (value * priorInverseSigma[k]!) ** 2;
   }
   for (let k = 0; k < levelCount; k++) heldLevel[k] = held[shapeCount + k]!;
-  let best = 0;
+  const size = levelCount * levelCount;
   for (let node = 0; node < grid.nodeCount; node++) {
-    levelEquations(model, data, grid.shares, node * rowCount, grid.capShares, gram, moment);
-    for (let k = 0; k < levelCount; k++) levels[k] = neutral[shapeCount + k]!;
-    let chiSquare =
+    const at = node * rowCount;
+    let bulkMoment = 0;
+    for (let i = 0; i < rowCount; i++) bulkMoment += shares[at + i]! * target[i]!;
+    moment[0] = unitMoment - bulkMoment - (levelCount > 2 ? capMoment : 0);
+    moment[1] = bulkMoment;
+    if (levelCount > 2) moment[2] = capMoment;
+    for (let k = 0; k < size; k++) gram[k] = grams[node * size + k]!;
+    for (let k = 0; k < levelCount; k++) {
+      levels[k] = neutral[shapeCount + k]!;
+      const weight = priorInverseSigma[shapeCount + k]! ** 2;
+      moment[k] = moment[k]! + weight * priorMean[shapeCount + k]!;
+    }
+    chiSquares[node] =
       constant +
       solveBounded(
         levelCount,
@@ -35,78 +53,96 @@ export function scanGrid(
         fallback,
         levels,
       );
-    for (let k = 0; k < shapeCount; k++) {
-      const weight = priorInverseSigma[k]!;
-      if (weight > 0)
-        chiSquare += ((grid.shapes[node * shapeCount + k]! - data.priorMean[k]!) * weight) ** 2;
-    }
-    chiSquares[node] = chiSquare;
-    if (chiSquare < chiSquares[best]!) best = node;
   }
-  return best;
+  addShapePriors(model, priorMean, chiSquares);
 }
 
-/** Local minima of the lattice (no better neighbour among eight), best first. */
-export function localMinima(
-  lattice: readonly [number, number],
+function addShapePriors(
+  { grid, shapeCount, priorInverseSigma }: Model,
+  priorMean: Float64Array,
   chiSquares: Float64Array,
-): number[] {
-  const [lines, perLine] = lattice;
-  const minima: number[] = [];
-  for (let line = 0; line < lines; line++) {
-    for (let k = 0; k < perLine; k++) {
-      if (isLocalMinimum(lines, perLine, line, k, chiSquares)) minima.push(line * perLine + k);
+): void {
+  let stride = 1;
+  for (let k = 0; k < shapeCount; k++) {
+    const axis = grid.axes[k]!;
+    const weight = priorInverseSigma[k]!;
+    if (weight > 0) {
+      for (let node = 0; node < grid.nodeCount; node++) {
+        const value = axis[Math.floor(node / stride) % axis.length]!;
+        chiSquares[node] = chiSquares[node]! + ((value - priorMean[k]!) * weight) ** 2;
+      }
     }
+    stride *= axis.length;
+  }
+}
+
+/** Local minima of the lattice (no better neighbour, diagonal ones included), best first. */
+export function localMinima(axes: readonly Float64Array[], chiSquares: Float64Array): number[] {
+  const minima: number[] = [];
+  for (let node = 0; node < chiSquares.length; node++) {
+    if (isLowest(axes, chiSquares, node)) minima.push(node);
   }
   return minima.sort((a, b) => chiSquares[a]! - chiSquares[b]!);
 }
 
-function isLocalMinimum(
-  lines: number,
-  perLine: number,
-  line: number,
-  k: number,
+function isLowest(axes: readonly Float64Array[], chiSquares: Float64Array, node: number): boolean {
+  return (
+    // Neighbours along one axis rule most nodes out before all of them are looked at.
+    noneBelow(axes, chiSquares, node, node, 0, 1, true) &&
+    noneBelow(axes, chiSquares, node, node, 0, 1, false)
+  );
+}
+
+/** Whether no neighbour of a node lies lower, over the axes from k on; along one axis at a time, or diagonally as well. */
+function noneBelow(
+  axes: readonly Float64Array[],
   chiSquares: Float64Array,
+  node: number,
+  from: number,
+  k: number,
+  stride: number,
+  straight: boolean,
 ): boolean {
-  const here = chiSquares[line * perLine + k]!;
-  for (let l = Math.max(0, line - 1); l <= Math.min(lines - 1, line + 1); l++) {
-    for (let j = Math.max(0, k - 1); j <= Math.min(perLine - 1, k + 1); j++) {
-      const there = chiSquares[l * perLine + j]!;
-      // A plateau counts once, at its first node.
-      if (there < here || (there === here && l * perLine + j < line * perLine + k)) return false;
-    }
+  if (k === axes.length) return !isBelow(chiSquares, from, node);
+  const length = axes[k]!.length;
+  const place = Math.floor(node / stride) % length;
+  const next = stride * length;
+  if (!noneBelow(axes, chiSquares, node, from, k + 1, next, straight)) return false;
+  if (straight && from !== node) return true;
+  if (place > 0 && !noneBelow(axes, chiSquares, node, from - stride, k + 1, next, straight))
+    return false;
+  return (
+    place === length - 1 || noneBelow(axes, chiSquares, node, from + stride, k + 1, next, straight)
+  );
+}
+
+/** A plateau counts once, at its first node. */
+function isBelow(chiSquares: Float64Array, other: number, node: number): boolean {
+  const there = chiSquares[other]!;
+  const here = chiSquares[node]!;
+  return there < here || (there === here && other < node);
+}
+
+/** Whether θ lies between the lattice neighbours of a node, so that the node belongs to the valley that θ is the bottom of. */
+export function inValleyOf({ grid }: Model, node: number, theta: Float64Array): boolean {
+  let stride = 1;
+  for (let k = 0; k < grid.axes.length; k++) {
+    const axis = grid.axes[k]!;
+    const place = Math.floor(node / stride) % axis.length;
+    if (place > 0 && theta[k]! < axis[place - 1]!) return false;
+    if (place < axis.length - 1 && theta[k]! > axis[place + 1]!) return false;
+    stride *= axis.length;
   }
   return true;
 }
 
-/** Whether θ lies between the lattice neighbours of a node, so that the node belongs to the valley that θ is the bottom of. */
-export function inValleyOf(
-  { grid, shapeCount }: Problem['model'],
-  node: number,
-  theta: Float64Array,
-): boolean {
-  const [lines, perLine] = grid.lattice;
-  const line = Math.floor(node / perLine);
-  const k = node % perLine;
-  const at = (l: number, j: number, parameter: number): number =>
-    grid.shapes[(l * perLine + j) * shapeCount + parameter]!;
-  const depthFits =
-    (k === 0 || theta[0]! >= at(line, k - 1, 0)) &&
-    (k === perLine - 1 || theta[0]! <= at(line, k + 1, 0));
-  if (shapeCount < 2 || !depthFits) return depthFits;
-  return (
-    (line === 0 || theta[1]! >= at(line - 1, k, 1)) &&
-    (line === lines - 1 || theta[1]! <= at(line + 1, k, 1))
-  );
-}
-
 /** Shape of a node into θ, everything else neutral. */
 export function thetaOfNode(
-  { grid, shapeCount }: Problem['model'],
+  { grid }: Model,
   node: number,
   neutral: Float64Array,
   theta: Float64Array,
 ): void {
   theta.set(neutral);
-  for (let k = 0; k < shapeCount; k++) theta[k] = grid.shapes[node * shapeCount + k]!;
+  shapeOfNode(grid.axes, node, theta);
 }

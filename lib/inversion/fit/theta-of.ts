@@ -1,11 +1,18 @@
 import { InversionError } from '../errors';
-import type { FitAnswer, ParameterValues } from '../types';
+import type { FitAnswer, ParameterName, ParameterValues } from '../types';
 import type { PreparedFit } from './prepared-fit';
+
+const LENGTHS: readonly ParameterName[] = [
+  'edgeDepthNm',
+  'edgeWidthNm',
+  'layerThicknessNm',
+  'farEdgeWidthNm',
+];
 
 /**
  * Values by name as the parameter vector of a fit; a depth scale left out is the held or prior one, a width left out is 0.
  *
- * @throws InversionError for a missing or non-finite value, a negative width, or a depth scale ≤ 0.
+ * @throws InversionError for a missing or non-finite value, a negative length, a depth scale ≤ 0, or bands bent beyond their bounds.
  */
 export function thetaOf({ problem }: PreparedFit, values: ParameterValues): Float64Array {
   const { model } = problem;
@@ -19,10 +26,11 @@ export function thetaOf({ problem }: PreparedFit, values: ParameterValues): Floa
         { name },
       );
     }
+    const bounded = name === 'surfacePotentialEv' || name === 'bulkPerCm3';
     if (
-      (name === 'edgeWidthNm' && value < 0) ||
-      (name === 'edgeDepthNm' && value < 0) ||
-      (name === 'depthScale' && value <= 0)
+      (LENGTHS.includes(name) && value < 0) ||
+      (name === 'depthScale' && value <= 0) ||
+      (bounded && !(value >= model.lower[k]! && value <= model.upper[k]!))
     ) {
       throw new InversionError('bad-value', `${name} cannot be ${value}.`, { name });
     }

@@ -1,3 +1,4 @@
+import { createCumulativeScratch } from '../fold/fold-cumulative';
 import { createEdgeFold, createFoldScratch } from '../fold/fold-edge';
 import type { ShareFold } from '../profile/trial-profile';
 import type { Model, Workspace } from './model';
@@ -15,6 +16,8 @@ export function createShareFold({
     byScale: new Float64Array(rowCount),
     scratch: createFoldScratch(kernel),
     edge: createEdgeFold(rowCount),
+    cumulative: createCumulativeScratch(kernel, shapeCount),
+    derivatives: true,
   };
 }
 
@@ -24,6 +27,7 @@ export function createWorkspace(model: Shape): Workspace {
     fold: createShareFold(model),
     capShare: new Float64Array(rowCount),
     capByStart: new Float64Array(rowCount),
+    columns: new Float64Array(levelCount * rowCount),
     predicted: new Float64Array(rowCount),
     residual: new Float64Array(rowCount),
     jacobian: new Float64Array(size * rowCount),

@@ -5,6 +5,7 @@ import { thetaOf } from '../fit/theta-of';
 import { createWorkspace } from '../fit/workspace';
 import { stoppingProfileAt } from '../stopping/stopping-profile-at';
 import type { ParameterValues } from '../types';
+import { unweighted } from '../fit/sensitivity';
 import { compileKernel } from './kernel';
 
 /**
@@ -34,7 +35,7 @@ function compileCurve(
   const kernel = compileKernel(
     energiesKeV.map((energy) => stoppingProfileAt(input.stopping, energy)),
   );
-  const model: Model = { ...problem.model, kernel, rowCount: energiesKeV.length };
+  const model: Model = { ...problem.model, ...unweighted(kernel) };
   const work = createWorkspace(model);
   return (theta) => {
     foldAt(model, work, theta);

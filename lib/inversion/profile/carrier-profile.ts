@@ -6,7 +6,7 @@ import { RESPONSES } from '../response/responses';
 import type { CarrierProfile, FitAnswer, Flag } from '../types';
 import { defaultDepthGrid } from './default-depth-grid';
 import { floorOf } from './floor';
-import { profileValue } from './profile-value';
+import { carriersAt, profileValue } from './profile-value';
 import { reachOf } from './reach';
 
 /**
@@ -32,7 +32,11 @@ export function carrierProfile(
   const floor = floorOf(prepared, values);
   const value = profileValue(prepared, values);
   return {
-    unit: RESPONSES[input.response.kind].unit(input.response, input.carriers, input.polarity),
+    unit: RESPONSES[input.response.kind].unit(
+      input.response,
+      carriersAt(input, values),
+      input.polarity,
+    ),
     bands: shown?.kind ?? null,
     points: Array.from(depthsNm, (depthNm, k) => ({
       depthNm,

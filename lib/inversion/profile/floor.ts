@@ -3,6 +3,7 @@ import type { PreparedFit } from '../fit/prepared-fit';
 import { thetaOf } from '../fit/theta-of';
 import { RESPONSES } from '../response/responses';
 import type { ParameterValues } from '../types';
+import { carriersAt } from './profile-value';
 
 /**
  * Smallest uniform change of the profile value on its poor side that moves at least one enabled point by its σ:
@@ -11,7 +12,7 @@ import type { ParameterValues } from '../types';
  */
 export function floorOf(prepared: PreparedFit, values: ParameterValues): number | null {
   const { input, problem } = prepared;
-  const { model, work, data } = problem;
+  const { model, work } = problem;
   foldAt(model, work, thetaOf(prepared, values));
   let smallest = Infinity;
   for (let row = 0; row < model.rowCount; row++) {
@@ -20,13 +21,13 @@ export function floorOf(prepared: PreparedFit, values: ParameterValues): number 
       input.polarity === 'depletion'
         ? 1 - populated - (model.capNm > 0 ? work.capShare[row]! : 0)
         : populated;
-    const inverse = data.inverseSigma[row]!;
+    const inverse = model.whitener.inverseSigma[row]!;
     if (poor > 1e-12 && inverse > 0) smallest = Math.min(smallest, 1 / (inverse * poor));
   }
   const floor = RESPONSES[input.response.kind].valueOfChange(
     smallest,
     values.levelBulk! - values.levelTop!,
-    input,
+    { ...input, carriers: carriersAt(input, values) },
   );
   return Number.isFinite(floor) ? floor : null;
 }

@@ -1,3 +1,4 @@
+import type { TrialProfile } from '../profile/trial-profile';
 import type { CarrierScale, FitInput, Polarity, ProfileUnit, Response } from '../types';
 
 /** Concentration (or share) as a linear function of the populated share: value = offset + slope·s. */
@@ -7,7 +8,8 @@ export interface ConcentrationLine {
 }
 
 /**
- * How an observable follows from the carriers. Both responses here are linear in s, so the levels are linear parameters.
+ * How an observable follows from the carriers: ŷ = top + (bulk − top)·g(s), so the levels are linear parameters. g is s itself
+ * unless the response bends it.
  * A new one is one file that exports this and one line in responses.ts.
  */
 export interface ResponseModel {
@@ -15,6 +17,8 @@ export interface ResponseModel {
   /** Lowest and highest level that means anything. */
   levelBounds(response: Response): readonly [number, number];
   capBounds: readonly [number, number];
+  /** The trial profile with g(s) for its fold; left out where g(s) = s. */
+  seen?(trial: TrialProfile, input: FitInput): TrialProfile;
   unit(response: Response, carriers: CarrierScale, polarity: Polarity): ProfileUnit;
   /** Profile value at levels (top, bulk). */
   line(

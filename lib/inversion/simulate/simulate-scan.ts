@@ -1,6 +1,8 @@
 import { InversionError } from '../errors';
 import { compileInput } from '../fit/prepare-fit';
+import type { PreparedFit } from '../fit/prepared-fit';
 import { foldScan } from '../fold/fold-scan';
+import { unwhiten } from '../linalg/whitener';
 import { normalStream } from '../statistics/random';
 import type { FitInput, ParameterValues, ScanPoint } from '../types';
 
@@ -14,7 +16,8 @@ export interface Simulation {
 }
 
 /**
- * The scan that a trial profile would give, with seeded Gaussian noise of the stated σ.
+ * The scan that a trial profile would give, with seeded Gaussian noise of the stated σ, or of the covariance of the template
+ * where it has one and no σ are stated.
  *
  * @throws InversionError for a template that cannot be folded, or σ that are not positive or not one per point.
  */
@@ -33,9 +36,22 @@ export function simulateScan({ input, values, sigmas, seed }: Simulation): ScanP
         ? sigmas
         : sigmas[index]!;
   const template = points.map((point, index) => ({ ...point, value: 0, sigma: sigmaOf(index) }));
-  const expected = foldScan(compileInput({ ...input, points: template }), values);
-  return template.map((point, index) => ({
-    ...point,
-    value: expected[index]! + point.sigma * normalStream(seed, index)(),
-  }));
+  const covariance = sigmas === undefined ? (input.covariance ?? null) : null;
+  const prepared = compileInput({ ...input, points: template, covariance });
+  const expected = foldScan(prepared, values);
+  const noise = Float64Array.from(points, (_, index) => normalStream(seed, index)());
+  if (covariance) correlate(prepared, noise);
+  else template.forEach(({ sigma }, index) => (noise[index] = noise[index]! * sigma));
+  return template.map((point, index) => ({ ...point, value: expected[index]! + noise[index]! }));
+}
+
+/** Unit noise of the points as noise of covariance V; a point out of use keeps its own σ. */
+function correlate({ problem, input }: PreparedFit, noise: Float64Array): void {
+  const { pointOfRow, whitener } = problem.model;
+  const rows = Float64Array.from(pointOfRow, (index) => noise[index]!);
+  unwhiten(whitener, rows);
+  input.points.forEach(({ sigma }, index) => (noise[index] = noise[index]! * sigma));
+  pointOfRow.forEach((index, row) => {
+    if (whitener.inverseSigma[row]! > 0) noise[index] = rows[row]!;
+  });
 }

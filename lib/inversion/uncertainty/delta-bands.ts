@@ -1,4 +1,4 @@
-import { profileValue } from '../profile/profile-value';
+import { carriersAt, profileValue } from '../profile/profile-value';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { valuesOf } from '../fit/theta-of';
 import { RESPONSES } from '../response/responses';
@@ -30,7 +30,8 @@ export function bandsByDelta(
     return a === b ? 1 : k < 0 || l < 0 ? 0 : covariance.correlation[k]![l]!;
   };
   const rho = free.map(({ name }) => free.map((other) => correlation(name, other.name)));
-  const { response, carriers, polarity } = prepared.input;
+  const { response, polarity } = prepared.input;
+  const carriers = carriersAt(prepared.input, valuesOf(answer));
   const ceiling =
     RESPONSES[response.kind].unit(response, carriers, polarity) === 'populated share'
       ? 1

@@ -5,8 +5,9 @@ import { thetaOf, valuesOf } from '../fit/theta-of';
 import type { FitAnswer } from '../types';
 
 /**
- * Share of each point in what the scan says of the edge depth: the whitened derivative ∂ŷ/∂W/σ with the part that the other
- * free parameters could explain projected out, squared, over its sum. In the order of the scan; 0 where switched off. All 0
+ * Share of each point in what the scan says of the edge depth (or the band bending): the whitened derivative ∂ŷ/∂W/σ with the part that the other
+ * free parameters could explain projected out, squared, over its sum. Correlated points are whitened in ascending energy, so each
+ * counts with what those below it do not say already. In the order of the scan; 0 where switched off. All 0
  * when the edge cannot be told from the other parameters.
  */
 export function edgeInformationByEnergy(prepared: PreparedFit, answer: FitAnswer): number[] {

@@ -1,29 +1,15 @@
-import { InversionError } from '../errors';
-import { evaluate, foldAt, meanLevel, predictFromFold } from '../fit/evaluate';
-import { minimise } from '../fit/minimise';
-import type { Problem } from '../fit/model';
 import type { PreparedFit } from '../fit/prepared-fit';
-import { inValleyOf, localMinima, scanGrid, thetaOfNode } from '../fit/search';
-import { openWidths } from '../fit/widths';
+import { createRefit, expectedRows, observe, refit } from '../fit/refit';
 import { thetaOf, valuesOf } from '../fit/theta-of';
+import { checkBlock, type SeededBlock } from '../simulate/check-block';
+import { noiseOf } from '../simulate/draw-noise';
 import { normalStream } from '../statistics/random';
 import type { FitAnswer } from '../types';
 
-/** Another valley of the search is followed when its node lies less than this above the bottom found. */
-const LOOK_AGAIN = 4;
-
-export interface ResampleBlock {
-  seed: number;
-  /** Number of the first row, and how many rows. */
-  first: number;
-  count: number;
-}
-
-/** What Φ may still fall by, relative: a thousandth of a σ in any parameter. */
-const TOLERANCE = 1e-7;
+export type ResampleBlock = SeededBlock;
 
 /**
- * Parametric bootstrap: for each row new observations ŷ + σ·N(0, 1) and new prior means θ̂ + σ_prior·N(0, 1) are drawn and
+ * Parametric bootstrap: for each row new observations ŷ + N(0, V) and new prior means θ̂ + σ_prior·N(0, 1) are drawn and
  * the fit is made again, by the same global search. Row r depends only on (seed, first + r).
  *
  * @returns row-major count × free parameters, in the order of prepared.freeNames.
@@ -32,75 +18,33 @@ const TOLERANCE = 1e-7;
 export function resample(
   prepared: PreparedFit,
   answer: FitAnswer,
-  { seed, first, count }: ResampleBlock,
+  block: ResampleBlock,
 ): Float64Array {
-  for (const [name, value] of Object.entries({ seed, first, count })) {
-    if (!(Number.isSafeInteger(value) && value >= 0)) {
-      throw new InversionError(
-        'bad-block',
-        `A block of resamples needs a whole ${name} of 0 or more, not ${value}.`,
-      );
-    }
-  }
-  const { problem, scratch } = prepared;
-  const { model } = problem;
-  const best = thetaOf(prepared, valuesOf(answer));
-  foldAt(model, problem.work, best);
-  predictFromFold(model, problem.work, best);
-  const predicted = Float64Array.from(problem.work.predicted);
-  const drawn: Problem = {
-    ...problem,
-    data: {
-      ...problem.data,
-      y: Float64Array.from(problem.data.y),
-      priorMean: Float64Array.from(problem.data.priorMean),
-    },
-  };
+  checkBlock(block);
+  const { model } = prepared.problem;
+  const values = valuesOf(answer);
+  const best = thetaOf(prepared, values);
+  const expected = expectedRows(prepared, values);
+  const again = createRefit(prepared);
+  const noise = noiseOf(prepared);
+  const observed = new Float64Array(model.rowCount);
+  const priorMean = Float64Array.from(prepared.problem.data.priorMean);
   const free = Array.from(model.names.keys()).filter((k) => !model.held[k]);
-  const rows = new Float64Array(count * free.length);
-  const chiSquares = new Float64Array(model.grid.nodeCount);
+  const rows = new Float64Array(block.count * free.length);
   const theta = new Float64Array(model.size);
-  const other = new Float64Array(model.size);
-  const options = { maxIterations: 60, tolerance: TOLERANCE };
-  for (let r = 0; r < count; r++) {
-    draw(drawn, problem, predicted, best, normalStream(seed, first + r));
-    theta.set(best);
-    openWidths(model, theta, model.held);
-    let chiSquare = minimise(drawn, theta, model.held, scratch, options).chiSquare;
-    scanGrid(drawn, model.neutral, model.held, chiSquares);
-    for (const node of localMinima(model.grid.lattice, chiSquares).slice(0, 2)) {
-      if (chiSquares[node]! > chiSquare + LOOK_AGAIN) break;
-      if (chiSquares[node]! >= chiSquare && inValleyOf(model, node, theta)) continue;
-      thetaOfNode(model, node, model.neutral, other);
-      openWidths(model, other, model.held);
-      const next = minimise(drawn, other, model.held, scratch, options).chiSquare;
-      if (next < chiSquare) {
-        chiSquare = next;
-        theta.set(other);
-      }
+  for (let r = 0; r < block.count; r++) {
+    const normal = normalStream(block.seed, block.first + r);
+    noise(normal, observed);
+    for (let i = 0; i < observed.length; i++) observed[i] = observed[i]! + expected[i]!;
+    for (let k = 0; k < model.size; k++) {
+      const inverse = model.priorInverseSigma[k]!;
+      if (inverse > 0) priorMean[k] = best[k]! + normal() / inverse;
     }
-    free.forEach((k, column) => {
-      rows[r * free.length + column] = theta[k]!;
-    });
+    observe(again, observed, priorMean);
+    theta.set(best);
+    refit(again, theta);
+    for (let column = 0; column < free.length; column++)
+      rows[r * free.length + column] = theta[free[column]!]!;
   }
-  evaluate(problem, best, model.held);
   return rows;
-}
-
-function draw(
-  drawn: Problem,
-  { data, model }: Problem,
-  predicted: Float64Array,
-  best: Float64Array,
-  normal: () => number,
-): void {
-  for (let i = 0; i < model.rowCount; i++) {
-    const inverse = data.inverseSigma[i]!;
-    if (inverse > 0) drawn.data.y[i] = predicted[i]! + normal() / inverse;
-  }
-  for (let k = 0; k < model.size; k++) {
-    const inverse = model.priorInverseSigma[k]!;
-    if (inverse > 0) drawn.data.priorMean[k] = best[k]! + normal() / inverse;
-  }
-  drawn.fallback = meanLevel(drawn.data);
 }

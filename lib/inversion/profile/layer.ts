@@ -1,0 +1,140 @@
+import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
+import { depthParameter, extentParameter, widthAxis } from './edge-parameters';
+import { normalDensity, normalIntegral, normalShare, normalStretch } from './normal-share';
+import type { Stretch, TrialProfile } from './trial-profile';
+
+const DEPTHS = 20;
+const THICKNESS_SHARES = [0.03, 0.06, 0.1, 0.15, 0.22, 0.3, 0.4, 0.55, 0.75];
+const WIDTH_SHARES = [0, 0.04, 0.15];
+
+/** W₁, w₁, W₂, w₂ and the limits between which s > 0. */
+interface Edges {
+  near: number;
+  nearWidth: number;
+  far: number;
+  farWidth: number;
+  from: number;
+  to: number;
+}
+
+const edges: Edges = { near: 0, nearWidth: 0, far: 0, farWidth: 0, from: 0, to: 0 };
+
+function readEdges(shape: ArrayLike<number>): Edges {
+  const near = (edges.near = shape[0]!);
+  const w = (edges.nearWidth = shape[1]!);
+  const far = (edges.far = near + shape[2]!);
+  const v = (edges.farWidth = shape[3]!);
+  // Φ₁ = Φ₂ at one depth where the widths differ; a step limits s by itself.
+  const crossing = (near * v - far * w) / (v - w);
+  edges.from = w === 0 ? near : v > w ? Math.max(0, crossing) : 0;
+  edges.to = v === 0 ? far : w > v ? crossing : Infinity;
+  return edges;
+}
+
+/**
+ * Layer: s(x) = max(0, Φ((x − W₁)/w₁) − Φ((x − W₂)/w₂)), W₂ = W₁ + thickness; rises at W₁ and falls again at W₂ (a quantum well,
+ * a buried channel). A width of 0 makes that edge a step. The difference would go below zero on one side where the widths
+ * differ; there is no layer there. Its integral is G₁ − G₂ between the limits of the layer, so the fold is exact.
+ */
+export function layer(deepestNm: number): TrialProfile {
+  return {
+    kind: 'layer',
+    shape: [
+      depthParameter('edgeDepthNm', deepestNm),
+      extentParameter('edgeWidthNm', deepestNm),
+      extentParameter('layerThicknessNm', deepestNm),
+      extentParameter('farEdgeWidthNm', deepestNm),
+    ],
+    edges: [
+      { position: [0], width: 1 },
+      { position: [0, 2], width: 3 },
+    ],
+    kinked: false,
+    share(depthNm, shape) {
+      const { near, nearWidth, far, farWidth } = readEdges(shape);
+      return Math.max(
+        0,
+        normalShare(depthNm - near, nearWidth) - normalShare(depthNm - far, farWidth),
+      );
+    },
+    slopes: layerSlopes,
+    stretches,
+    landmarks: (shape) => [
+      { depthNm: shape[0]!, widthNm: shape[1]! },
+      { depthNm: shape[0]! + shape[2]!, widthNm: shape[3]! },
+    ],
+    searchAxes: ({ depths }) => [
+      depths(DEPTHS),
+      widthAxis(WIDTH_SHARES, deepestNm),
+      widthAxis(THICKNESS_SHARES, deepestNm),
+      widthAxis(WIDTH_SHARES, deepestNm),
+    ],
+    starts: 6,
+    fold(kernel, shape, capNm, scale, out) {
+      foldCumulative(kernel, capNm, scale, out, (scratch, first, count, derivatives) =>
+        cumulate(shape, scratch, first, count, derivatives),
+      );
+    },
+  };
+}
+
+function layerSlopes(depthNm: number, shape: ArrayLike<number>, slopes: Float64Array): void {
+  const { near, nearWidth, far, farWidth, from, to } = readEdges(shape);
+  slopes.fill(0);
+  if (depthNm < from || depthNm > to) return;
+  slopes[0] = normalShare(depthNm - near, nearWidth) - normalShare(depthNm - far, farWidth);
+  const rise = nearWidth > 0 ? normalDensity(depthNm - near, nearWidth) / nearWidth : 0;
+  const fall = farWidth > 0 ? normalDensity(depthNm - far, farWidth) / farWidth : 0;
+  slopes[1] = fall - rise;
+  slopes[2] = nearWidth > 0 ? (-rise * (depthNm - near)) / nearWidth : 0;
+  slopes[3] = fall;
+  slopes[4] = farWidth > 0 ? (fall * (depthNm - far)) / farWidth : 0;
+}
+
+function stretches(shape: ArrayLike<number>): Stretch[] {
+  const { near, nearWidth, far, farWidth, from, to } = readEdges(shape);
+  const list: Stretch[] = [];
+  if (nearWidth > 0) list.push(normalStretch(near, nearWidth));
+  if (farWidth > 0) list.push(normalStretch(far, farWidth));
+  // The limits are kinks of s: a stretch of no length cuts there.
+  for (const limit of [from, to]) {
+    if (limit > 0 && limit < Infinity) list.push({ fromNm: limit, toNm: limit, stepNm: Infinity });
+  }
+  return list.sort((a, b) => a.fromNm - b.fromNm);
+}
+
+/** M(x) = F(min(x, to)) − F(from), F = G₁ − G₂; ∂G/∂W = −Φ and ∂G/∂w = φ. Where a limit is a step it moves with its edge. */
+function cumulate(
+  shape: ArrayLike<number>,
+  { depthsNm, integral, share, byShape }: CumulativeScratch,
+  first: number,
+  count: number,
+  derivatives: boolean,
+): void {
+  const { near, nearWidth, far, farWidth, from, to } = readEdges(shape);
+  const integralTo = (x: number): number =>
+    normalIntegral(x - near, nearWidth) - normalIntegral(x - far, farWidth);
+  const farShare = (x: number): number => (farWidth === 0 ? 0 : normalShare(x - far, farWidth));
+  const begin = integralTo(from);
+  const nearBegin = normalShare(from - near, nearWidth);
+  const farBegin = farShare(from);
+  const nearPush = nearWidth === 0 ? 1 - farBegin : 0;
+  const nearDensity = normalDensity(from - near, nearWidth);
+  const farDensity = normalDensity(from - far, farWidth);
+  for (let j = first; j < count; j++) {
+    const x = Math.min(depthsNm[j]!, to);
+    const inside = x > from;
+    integral[j] = inside ? integralTo(x) - begin : 0;
+    if (!derivatives) continue;
+    const nearHere = normalShare(x - near, nearWidth);
+    const farHere = farShare(x);
+    share[j] = inside && depthsNm[j]! < to ? nearHere - farHere : 0;
+    const byNear = inside ? nearBegin - nearHere - nearPush : 0;
+    const farPush = farWidth === 0 && depthsNm[j]! >= to ? nearHere : 0;
+    const byFar = inside ? farHere - farBegin + farPush : 0;
+    byShape[0]![j] = byNear + byFar;
+    byShape[1]![j] = inside ? normalDensity(x - near, nearWidth) - nearDensity : 0;
+    byShape[2]![j] = byFar;
+    byShape[3]![j] = inside ? farDensity - normalDensity(x - far, farWidth) : 0;
+  }
+}

@@ -1,0 +1,41 @@
+import { NORMAL_REACH, normalInto } from '../statistics/normal-table';
+import type { Stretch } from './trial-profile';
+
+const cdf = new Float64Array(1);
+const pdf = new Float64Array(1);
+
+/** Φ(distance/width); a step where the width is zero. */
+export function normalShare(distanceNm: number, widthNm: number): number {
+  if (widthNm === 0) return distanceNm < 0 ? 0 : 1;
+  normalInto(distanceNm / widthNm, cdf, pdf, 0);
+  return cdf[0]!;
+}
+
+/** ∫ Φ((x − W)/w) dx up to a distance x − W from the edge: G = (x − W)Φ(t) + wφ(t). */
+export function normalIntegral(distanceNm: number, widthNm: number): number {
+  if (widthNm === 0) return Math.max(0, distanceNm);
+  const t = distanceNm / widthNm;
+  if (t >= NORMAL_REACH) return distanceNm;
+  if (t <= -NORMAL_REACH) return 0;
+  normalInto(t, cdf, pdf, 0);
+  return distanceNm * cdf[0]! + widthNm * pdf[0]!;
+}
+
+/** φ((x − W)/w); 0 for a step. */
+export function normalDensity(distanceNm: number, widthNm: number): number {
+  if (widthNm === 0) return 0;
+  normalInto(distanceNm / widthNm, cdf, pdf, 0);
+  return pdf[0]!;
+}
+
+/**
+ * A quarter of the width is fine enough for five-point quadrature of a function of Φ to 1e-11: the nearest singularity of
+ * 1/(1 + KΦ(t)) lies 0.8 off the real axis for K up to 1e4.
+ */
+export function normalStretch(edgeNm: number, widthNm: number): Stretch {
+  return {
+    fromNm: edgeNm - NORMAL_REACH * widthNm,
+    toNm: edgeNm + NORMAL_REACH * widthNm,
+    stepNm: widthNm / 4,
+  };
+}
