@@ -32,7 +32,7 @@ export function likelihoodRatioStatistics(
   );
 }
 
-/** Observations by row of the model, and the means of the priors by name. */
+/** Whitened observations by row of the model, the same for two fits of one scan, and the means of the priors by name. */
 interface DrawnScan {
   rows: Float64Array;
   priorMeans: ParameterValues;
@@ -57,7 +57,7 @@ function scanDrawer({ richer }: NestedFits, truth: Truth): (normal: () => number
 }
 
 /** Fits the simpler and then, from its minimum, the richer: so the richer one is never left higher by its search. */
-export function pairFitter({ simpler, richer }: NestedFits): (scan: DrawnScan) => number {
+function pairFitter({ simpler, richer }: NestedFits): (scan: DrawnScan) => number {
   const simple = modelFitter(simpler.prepared);
   const rich = modelFitter(richer.prepared);
   const simplerBest = thetaOf(simpler.prepared, valuesOf(simpler.answer));

@@ -1,11 +1,6 @@
 import type { PreparedFit } from '../fit/prepared-fit';
 import type { FitAnswer, ParameterName } from '../types';
-import {
-  candidatesOf,
-  type Candidate,
-  type CandidateInput,
-  type SensitivityAt,
-} from './candidates';
+import { candidatesOf, type Candidate, type CandidateInput } from './candidates';
 import { checkHours } from './one-hour-sigma';
 import {
   planTarget,
@@ -51,18 +46,15 @@ export function bestNextEnergy(
   prepared: PreparedFit,
   answer: FitAnswer,
   input: NextEnergyInput,
-  sensitivityAt: SensitivityAt,
 ): NextEnergyOutcome {
   checkHours(input.hours);
   const outcome = planTarget(prepared, answer, input.target);
   if (!outcome.ok) return outcome;
   const { target } = outcome;
-  const candidates = candidatesOf(prepared, answer, target, input, sensitivityAt).map(
-    (candidate) => ({
-      energyKeV: candidate.energyKeV,
-      ...predictedIntervals(prepared, target, sigmaAfter(target, candidate, input.hours)),
-    }),
-  );
+  const candidates = candidatesOf(prepared, answer, target, input).map((candidate) => ({
+    energyKeV: candidate.energyKeV,
+    ...predictedIntervals(prepared, target, sigmaAfter(target, candidate, input.hours)),
+  }));
   return {
     ok: true,
     target: target.name,

@@ -3,12 +3,7 @@ import type { PreparedFit } from '../fit/prepared-fit';
 import type { FitAnswer, ParameterName } from '../types';
 import { sigmaAfter } from './best-next-energy';
 import { designState, optimalDesign, whitenDesign, type DesignProblem } from './c-optimal';
-import {
-  candidatesOf,
-  type Candidate,
-  type CandidateInput,
-  type SensitivityAt,
-} from './candidates';
+import { candidatesOf, type Candidate, type CandidateInput } from './candidates';
 import { checkHours } from './one-hour-sigma';
 import {
   planTarget,
@@ -82,7 +77,6 @@ export function bestSplit(
   prepared: PreparedFit,
   answer: FitAnswer,
   input: SplitInput,
-  sensitivityAt: SensitivityAt,
 ): SplitOutcome {
   const { hours } = input;
   checkHours(hours);
@@ -90,7 +84,7 @@ export function bestSplit(
   const outcome = planTarget(prepared, answer, input.target);
   if (!outcome.ok) return outcome;
   const { target } = outcome;
-  const candidates = candidatesOf(prepared, answer, target, input, sensitivityAt);
+  const candidates = candidatesOf(prepared, answer, target, input);
   const problem = designOf(target, candidates);
   const plan = (split: Float64Array, among: readonly Candidate[], variance: number): Plan => ({
     ...predictedIntervals(prepared, target, Math.sqrt(variance)),
@@ -98,7 +92,7 @@ export function bestSplit(
   });
   const optimal = optimalDesign(problem, hours);
   const whole = steps === null ? null : wholeSteps(problem, optimal.hours, input.stepHours!, steps);
-  const again = repeatScan(prepared, answer, target, input.oneHourSigma, hours, sensitivityAt);
+  const again = repeatScan(prepared, answer, target, input.oneHourSigma, hours);
   const repeated = designState(whitenDesign(designOf(target, again.candidates)), again.hours);
   return {
     ok: true,

@@ -1,15 +1,9 @@
 import { InversionError } from '../errors';
 import type { PreparedFit } from '../fit/prepared-fit';
+import { sensitivityAt } from '../fit/sensitivity';
 import type { FitAnswer, StoppingSet } from '../types';
 import { oneHourSigmaAt, type OneHourSigma } from './one-hour-sigma';
 import type { PlanTarget } from './plan-target';
-
-/** ∂ŷ/∂θ unwhitened, row-major energies × prepared.parameterNames. */
-export type SensitivityAt = (
-  prepared: PreparedFit,
-  answer: FitAnswer,
-  energiesKeV: readonly number[],
-) => Float64Array;
 
 /** An energy that more time could be spent at. One hour there adds a·aᵀ to the information. */
 export interface Candidate {
@@ -31,7 +25,6 @@ export function candidatesOf(
   answer: FitAnswer,
   { columns }: PlanTarget,
   { energiesKeV, oneHourSigma }: CandidateInput,
-  sensitivityAt: SensitivityAt,
 ): Candidate[] {
   const energies = energiesKeV ?? defaultEnergies(prepared.input.stopping);
   if (energies.length === 0)

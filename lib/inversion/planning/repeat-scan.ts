@@ -1,6 +1,6 @@
 import type { PreparedFit } from '../fit/prepared-fit';
 import type { FitAnswer } from '../types';
-import { candidatesOf, type Candidate, type SensitivityAt } from './candidates';
+import { candidatesOf, type Candidate } from './candidates';
 import type { OneHourSigma } from './one-hour-sigma';
 import type { PlanTarget } from './plan-target';
 
@@ -20,17 +20,10 @@ export function repeatScan(
   target: PlanTarget,
   oneHourSigma: OneHourSigma,
   hours: number,
-  sensitivityAt: SensitivityAt,
 ): RepeatedScan {
   const points = prepared.input.points.filter(({ enabled }) => enabled);
   const energiesKeV = points.map(({ energyKeV }) => energyKeV);
-  const candidates = candidatesOf(
-    prepared,
-    answer,
-    target,
-    { energiesKeV, oneHourSigma },
-    sensitivityAt,
-  );
+  const candidates = candidatesOf(prepared, answer, target, { energiesKeV, oneHourSigma });
   const taken = candidates.map(
     ({ oneHourSigma: sigma }, index) => (sigma / points[index]!.sigma) ** 2,
   );

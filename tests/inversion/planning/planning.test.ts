@@ -27,7 +27,6 @@ import {
   rateInput,
   SHARED_SET,
 } from '../support/scans';
-import { finiteDifferences } from './finite-differences';
 
 const truth = { edgeDepthNm: 75, edgeWidthNm: 25, levelTop: 0.74, levelBulk: 0.32 };
 
@@ -82,12 +81,12 @@ describe('the best next energy', () => {
     (_, template, values) => {
       const now = noiseFree(template, values);
       const energiesKeV = [2.5, 7, 11, 13, 21];
-      const outcome = bestNextEnergy(
-        now.prepared,
-        now.answer,
-        { target: 'edgeDepthNm', hours: 3, oneHourSigma: 0.006, energiesKeV },
-        finiteDifferences,
-      );
+      const outcome = bestNextEnergy(now.prepared, now.answer, {
+        target: 'edgeDepthNm',
+        hours: 3,
+        oneHourSigma: 0.006,
+        energiesKeV,
+      });
       if (!outcome.ok) throw new Error(outcome.reason);
       expect(outcome.present.sigma).toBe(sigmaOf(now, 'edgeDepthNm'));
       for (const { energyKeV, sigma } of outcome.candidates) {
@@ -101,12 +100,11 @@ describe('the best next energy', () => {
   // Source: value ± σ and ± 1.96 σ; a width cannot be negative, so an interval ends at 0.
   it('gives intervals that end where the parameter does', () => {
     const narrow = noiseFree(fractionInput({}, 0.008), { ...truth, edgeWidthNm: 9 });
-    const outcome = bestNextEnergy(
-      narrow.prepared,
-      narrow.answer,
-      { target: 'edgeWidthNm', hours: 0.001, oneHourSigma: 0.01 },
-      finiteDifferences,
-    );
+    const outcome = bestNextEnergy(narrow.prepared, narrow.answer, {
+      target: 'edgeWidthNm',
+      hours: 0.001,
+      oneHourSigma: 0.01,
+    });
     if (!outcome.ok) throw new Error(outcome.reason);
     const { value, best } = outcome;
     expect(best.interval68[0]).toBeCloseTo(value - best.sigma, 10);
@@ -116,22 +114,22 @@ describe('the best next energy', () => {
   it('tries every energy of the stopping set when none are named, and never one outside', () => {
     const { prepared, answer } = noiseFree(fractionInput({}, 0.004), truth);
     const input = { target: 'edgeDepthNm', hours: 1, oneHourSigma: 0.004 } as const;
-    const outcome = bestNextEnergy(prepared, answer, input, finiteDifferences);
+    const outcome = bestNextEnergy(prepared, answer, input);
     if (!outcome.ok) throw new Error(outcome.reason);
     const energies = outcome.candidates.map(({ energyKeV }) => energyKeV);
     expect(energies).toEqual([...energies].sort((a, b) => a - b));
     expect([energies[0], energies.at(-1)]).toEqual([2, 22]);
     for (const { energyKeV } of SHARED_SET.profiles) expect(energies).toContain(energyKeV);
-    expect(() =>
-      bestNextEnergy(prepared, answer, { ...input, energiesKeV: [30] }, finiteDifferences),
-    ).toThrow(expect.objectContaining({ code: 'energy-outside-stopping-set' }));
+    expect(() => bestNextEnergy(prepared, answer, { ...input, energiesKeV: [30] })).toThrow(
+      expect.objectContaining({ code: 'energy-outside-stopping-set' }),
+    );
   });
 
   it('says why nothing can be planned', () => {
     const reasonOf = ({ prepared, answer }: Fitted, target: ParameterName): string => {
       const input = { target, hours: 1, oneHourSigma: 0.004 };
-      const next = bestNextEnergy(prepared, answer, input, finiteDifferences);
-      const split = bestSplit(prepared, answer, input, finiteDifferences);
+      const next = bestNextEnergy(prepared, answer, input);
+      const split = bestSplit(prepared, answer, input);
       if (next.ok || split.ok) throw new Error('A plan was made.');
       expect(split.reason).toBe(next.reason);
       return next.reason;
@@ -159,7 +157,7 @@ describe('the best next energy', () => {
     const { prepared, answer } = noiseFree(fractionInput({}, 0.004), truth);
     const input = { target: 'edgeDepthNm' as const, hours: 1, oneHourSigma: 0.004 };
     const refused = (change: Partial<Parameters<typeof bestSplit>[2]>, code: string): void => {
-      const call = () => bestSplit(prepared, answer, { ...input, ...change }, finiteDifferences);
+      const call = () => bestSplit(prepared, answer, { ...input, ...change });
       expect(call).toThrow(expect.objectContaining({ code }));
     };
     refused({ hours: 0 }, 'bad-hours');
@@ -177,12 +175,12 @@ describe('the best split of some hours', () => {
     'is certified and beats the single energy and the repeated scan: %s',
     (_, template, values) => {
       const { prepared, answer } = noiseFree(template, values);
-      const outcome = bestSplit(
-        prepared,
-        answer,
-        { target: 'edgeDepthNm', hours: 8, oneHourSigma: 0.005, stepHours: 0.5 },
-        finiteDifferences,
-      );
+      const outcome = bestSplit(prepared, answer, {
+        target: 'edgeDepthNm',
+        hours: 8,
+        oneHourSigma: 0.005,
+        stepHours: 0.5,
+      });
       if (!outcome.ok) throw new Error(outcome.reason);
       const { present, best, wholeSteps, single, repeat } = outcome;
       expect(best.split.reduce((sum, { hours }) => sum + hours, 0)).toBeCloseTo(8, 5);
@@ -206,12 +204,11 @@ describe('the best split of some hours', () => {
     template.points = template.points.map((p, i) => ({ ...p, sigma: 0.003 + 0.0003 * i }));
     const { prepared, answer } = noiseFree(template, truth);
     const hours = template.points.reduce((sum, { sigma }) => sum + (0.005 / sigma) ** 2, 0);
-    const outcome = bestSplit(
-      prepared,
-      answer,
-      { target: 'edgeDepthNm', hours, oneHourSigma: 0.005 },
-      finiteDifferences,
-    );
+    const outcome = bestSplit(prepared, answer, {
+      target: 'edgeDepthNm',
+      hours,
+      oneHourSigma: 0.005,
+    });
     if (!outcome.ok) throw new Error(outcome.reason);
     expect(outcome.repeat.sigma / outcome.present.sigma).toBeCloseTo(Math.SQRT1_2, 5);
     outcome.repeat.split.forEach(({ energyKeV, hours: at }, i) => {
@@ -228,12 +225,7 @@ describe('the best split of some hours', () => {
     const input = { target: 'edgeDepthNm' as const, hours: 12, oneHourSigma };
     // Energies apart from those of the scan: a scan holds an energy once.
     const energiesKeV = [2.5, 3.5, 4.5, 5.5, 7, 9, 11, 13, 15, 17, 19, 21];
-    const outcome = bestSplit(
-      now.prepared,
-      now.answer,
-      { ...input, energiesKeV },
-      finiteDifferences,
-    );
+    const outcome = bestSplit(now.prepared, now.answer, { ...input, energiesKeV });
     if (!outcome.ok) throw new Error(outcome.reason);
     expect(outcome.best.sigma).toBeLessThan(0.98 * outcome.present.sigma);
     const scan = {
