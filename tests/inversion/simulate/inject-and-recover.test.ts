@@ -34,6 +34,17 @@ describe('injecting and recovering', () => {
       ),
       { edgeDepthNm: 60, levelBulk: 2 },
     ],
+    [
+      'graded, fraction, full covariance',
+      {
+        ...graded,
+        // Half of each variance is an error of the level that all points share.
+        covariance: graded.points.map((_, i) =>
+          graded.points.map((__, j) => 0.006 ** 2 * (i === j ? 1 : 0.5)),
+        ),
+      },
+      truth,
+    ],
   ])('finds the truth again, with the scatter and coverage stated: %s', (_, input, values) => {
     const { scans, withoutMinimum, parameters } = report({ input, values });
     expect([scans, withoutMinimum]).toEqual([SCANS, 0]);
