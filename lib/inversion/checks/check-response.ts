@@ -20,8 +20,9 @@ export const checkContrast: FitCheck = (context) => {
 
 /** A capture rate says on which side the carriers are; it must agree with the polarity assumed. */
 export const checkPolarity: FitCheck = (context) => {
-  const { response, polarity } = context.prepared.input;
-  if (response.kind !== 'capture-rate') return null;
+  const { response, polarity, profile } = context.prepared.input;
+  // Bent bands follow the polarity by themselves.
+  if (response.kind !== 'capture-rate' || profile === 'band-bending') return null;
   const top = parameterOf(context, 'levelTop')!.value;
   const bulk = parameterOf(context, 'levelBulk')!.value;
   const id = 'polarity';

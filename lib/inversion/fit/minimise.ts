@@ -64,6 +64,11 @@ function isStep({ width }: EdgeParameters, theta: Float64Array): boolean {
   return width === null || theta[width] === 0;
 }
 
+/** Φ is a parabola at its bottom: a line is meant to the square root of what Φ may still fall by, as a share of the range. */
+function lineTolerance({ tolerance }: RefineOptions): number {
+  return Math.min(1e-5, Math.max(1e-9, 0.03 * Math.sqrt(tolerance)));
+}
+
 function minimiseStep(
   problem: Problem,
   theta: Float64Array,
@@ -109,7 +114,7 @@ function minimiseStep(
     Math.max(model.lower[moved]!, place - span),
     place,
     Math.min(model.upper[moved]!, place + span, highest),
-    Math.min(1e-5, Math.max(1e-9, options.tolerance)) * model.upper[moved]!,
+    lineTolerance(options) * model.upper[moved]!,
   );
   if (!(best.value < chiSquare)) return chiSquare;
   const reached = at(best.x);

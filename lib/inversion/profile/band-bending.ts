@@ -27,6 +27,9 @@ interface BulkCurve {
   lengthNm: number;
   fermi: number;
   curve: ReducedCurve;
+  /** The surface asked for last and the depth on the curve where it lies: a fold asks thousands of times for one. */
+  surface: number;
+  origin: number;
 }
 
 /**
@@ -63,6 +66,8 @@ export function bandBending(deepestNm: number, input: FitInput): TrialProfile {
       lengthNm: debyeOf(bulkPerCm3, bulk),
       fermi,
       curve: reducedCurve(sign * largest, fermi),
+      surface: NaN,
+      origin: NaN,
     };
     if (curves.length === 3) curves.shift();
     curves.push(made);
@@ -195,14 +200,18 @@ function debyeOf(
 }
 
 /** v at a depth below a surface with v_s; where that is next to nothing the curve is a plain exponential. */
-function potentialOf(
-  { lengthNm, fermi, curve }: BulkCurve,
-  surface: number,
-  depthNm: number,
-): number {
-  const depth = depthNm / lengthNm;
-  if (Math.abs(surface) <= TAIL_BELOW) return surface * Math.exp(-decayOf(fermi) * depth);
-  return curve.potential(curve.depthOf(surface) + depth);
+function potentialOf(bulk: BulkCurve, surface: number, depthNm: number): number {
+  const depth = depthNm / bulk.lengthNm;
+  if (Math.abs(surface) <= TAIL_BELOW) return surface * Math.exp(-decayOf(bulk.fermi) * depth);
+  return bulk.curve.potential(originOf(bulk, surface) + depth);
+}
+
+function originOf(bulk: BulkCurve, surface: number): number {
+  if (bulk.surface !== surface) {
+    bulk.surface = surface;
+    bulk.origin = bulk.curve.depthOf(surface);
+  }
+  return bulk.origin;
 }
 
 function decayOf(fermi: number): number {

@@ -1,6 +1,7 @@
 import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
 import { depthParameter, extentParameter, widthAxis } from './edge-parameters';
-import { normalDensity, normalIntegral, normalShare, normalStretch } from './normal-share';
+import { normalInto } from '../statistics/normal-table';
+import { normalDensity, normalShare, normalStretch } from './normal-share';
 import type { Stretch, TrialProfile } from './trial-profile';
 
 const DEPTHS = 20;
@@ -103,7 +104,30 @@ function stretches(shape: ArrayLike<number>): Stretch[] {
   return list.sort((a, b) => a.fromNm - b.fromNm);
 }
 
-/** M(x) = F(min(x, to)) − F(from), F = G₁ − G₂; ∂G/∂W = −Φ and ∂G/∂w = φ. Where a limit is a step it moves with its edge. */
+const NEAR = 0;
+const FAR = 1;
+const cdf = new Float64Array(2);
+const pdf = new Float64Array(2);
+
+/** Φ and φ of both edges at a depth; φ = 0 at a step. A far step counts from beyond it: the limit of the layer lies there. */
+function normalsAt(x: number, { near, nearWidth, far, farWidth }: Edges): void {
+  normalInto(
+    nearWidth > 0 ? (x - near) / nearWidth : x < near ? -Infinity : Infinity,
+    cdf,
+    pdf,
+    NEAR,
+  );
+  normalInto(farWidth > 0 ? (x - far) / farWidth : -Infinity, cdf, pdf, FAR);
+}
+
+/** F(x) = G₁ − G₂ from the normals there, G = (x − W)Φ + wφ. */
+function integralFrom(x: number, { near, nearWidth, far, farWidth }: Edges): number {
+  return (
+    (x - near) * cdf[NEAR]! + nearWidth * pdf[NEAR]! - (x - far) * cdf[FAR]! - farWidth * pdf[FAR]!
+  );
+}
+
+/** M(x) = F(min(x, to)) − F(from); ∂G/∂W = −Φ and ∂G/∂w = φ. Where a limit is a step it moves with its edge. */
 function cumulate(
   shape: ArrayLike<number>,
   { depthsNm, integral, share, byShape }: CumulativeScratch,
@@ -111,30 +135,37 @@ function cumulate(
   count: number,
   derivatives: boolean,
 ): void {
-  const { near, nearWidth, far, farWidth, from, to } = readEdges(shape);
-  const integralTo = (x: number): number =>
-    normalIntegral(x - near, nearWidth) - normalIntegral(x - far, farWidth);
-  const farShare = (x: number): number => (farWidth === 0 ? 0 : normalShare(x - far, farWidth));
-  const begin = integralTo(from);
-  const nearBegin = normalShare(from - near, nearWidth);
-  const farBegin = farShare(from);
-  const nearPush = nearWidth === 0 ? 1 - farBegin : 0;
-  const nearDensity = normalDensity(from - near, nearWidth);
-  const farDensity = normalDensity(from - far, farWidth);
+  const edge = readEdges(shape);
+  const { from, to } = edge;
+  normalsAt(from, edge);
+  const begin = integralFrom(from, edge);
+  const nearBegin = cdf[NEAR]!;
+  const farBegin = cdf[FAR]!;
+  const nearDensity = pdf[NEAR]!;
+  const farDensity = pdf[FAR]!;
+  const nearPush = edge.nearWidth === 0 ? 1 - farBegin : 0;
+  const [byEdge, byWidth, byThickness, byFarWidth] = byShape as [
+    Float64Array,
+    Float64Array,
+    Float64Array,
+    Float64Array,
+  ];
   for (let j = first; j < count; j++) {
-    const x = Math.min(depthsNm[j]!, to);
-    const inside = x > from;
-    integral[j] = inside ? integralTo(x) - begin : 0;
+    const depth = depthsNm[j]!;
+    if (depth <= from) {
+      integral[j] = share[j] = byEdge[j] = byWidth[j] = byThickness[j] = byFarWidth[j] = 0;
+      continue;
+    }
+    const x = Math.min(depth, to);
+    normalsAt(x, edge);
+    integral[j] = integralFrom(x, edge) - begin;
     if (!derivatives) continue;
-    const nearHere = normalShare(x - near, nearWidth);
-    const farHere = farShare(x);
-    share[j] = inside && depthsNm[j]! < to ? nearHere - farHere : 0;
-    const byNear = inside ? nearBegin - nearHere - nearPush : 0;
-    const farPush = farWidth === 0 && depthsNm[j]! >= to ? nearHere : 0;
-    const byFar = inside ? farHere - farBegin + farPush : 0;
-    byShape[0]![j] = byNear + byFar;
-    byShape[1]![j] = inside ? normalDensity(x - near, nearWidth) - nearDensity : 0;
-    byShape[2]![j] = byFar;
-    byShape[3]![j] = inside ? farDensity - normalDensity(x - far, farWidth) : 0;
+    share[j] = depth < to ? cdf[NEAR]! - cdf[FAR]! : 0;
+    const farPush = edge.farWidth === 0 && depth >= to ? cdf[NEAR]! : 0;
+    const byFar = cdf[FAR]! - farBegin + farPush;
+    byEdge[j] = nearBegin - cdf[NEAR]! - nearPush + byFar;
+    byWidth[j] = pdf[NEAR]! - nearDensity;
+    byThickness[j] = byFar;
+    byFarWidth[j] = farDensity - pdf[FAR]!;
   }
 }

@@ -11,16 +11,6 @@ export function normalShare(distanceNm: number, widthNm: number): number {
   return cdf[0]!;
 }
 
-/** ∫ Φ((x − W)/w) dx up to a distance x − W from the edge: G = (x − W)Φ(t) + wφ(t). */
-export function normalIntegral(distanceNm: number, widthNm: number): number {
-  if (widthNm === 0) return Math.max(0, distanceNm);
-  const t = distanceNm / widthNm;
-  if (t >= NORMAL_REACH) return distanceNm;
-  if (t <= -NORMAL_REACH) return 0;
-  normalInto(t, cdf, pdf, 0);
-  return distanceNm * cdf[0]! + widthNm * pdf[0]!;
-}
-
 /** φ((x − W)/w); 0 for a step. */
 export function normalDensity(distanceNm: number, widthNm: number): number {
   if (widthNm === 0) return 0;

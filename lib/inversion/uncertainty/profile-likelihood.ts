@@ -1,6 +1,7 @@
 import { DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95 } from '../constants';
 import { minimise, type MinimiseScratch } from '../fit/minimise';
-import type { Problem } from '../fit/model';
+import type { Model, Problem } from '../fit/model';
+import { openWidths } from '../fit/widths';
 import type { Covariance, Interval } from '../types';
 
 export interface ProfileIntervals {
@@ -22,10 +23,14 @@ export interface MinimumPoint {
  * thousandth of a quarter per cent of the half-width.
  */
 const TARGET_TOLERANCE = 5e-3;
-const INNER = { maxIterations: 40, tolerance: 1e-7 };
+const INNER = { maxIterations: 200, tolerance: 1e-7 };
 /** A fall of Φ by more than this is a new minimum, less is rounding. */
 const NEW_MINIMUM = 1e-4;
 const MOST_STEPS = 40;
+/** With more shape parameters a valley bends: each point is also reached from the minimum itself, and the lower one counts. */
+const TWO_SHAPES = 2;
+/** A first step further than this share of the range would leave the valley of a poorly known parameter. */
+const FIRST_SHARE = 1 / 8;
 
 /**
  * Profile-likelihood intervals of parameter k: the values at which Φ, minimised over all other parameters within their
@@ -100,25 +105,45 @@ function createLine(
   held[k] = 1;
   const point = Float64Array.from(theta);
   const slopes = slopesAlong(problem, covariance, k);
+  const afresh = model.shapeCount > TWO_SHAPES ? new Float64Array(model.size) : null;
   const line: Line = {
     step: firstStep(problem, theta, covariance, k),
     better: null,
     rise(x) {
-      const shift = x - point[k]!;
-      for (let l = 0; l < model.size; l++) {
-        if (held[l] || slopes[l] === 0) continue;
-        point[l] = Math.min(
-          Math.max(point[l]! + slopes[l]! * shift, model.lower[l]!),
-          model.upper[l]!,
-        );
+      moveTo(model, point, held, slopes, k, x);
+      let rise = minimise(problem, point, held, scratch, INNER).chiSquare - chiSquare;
+      if (afresh) {
+        afresh.set(theta);
+        moveTo(model, afresh, held, slopes, k, x);
+        openWidths(model, afresh, held);
+        const other = minimise(problem, afresh, held, scratch, INNER).chiSquare - chiSquare;
+        if (other < rise) {
+          rise = other;
+          point.set(afresh);
+        }
       }
-      point[k] = x;
-      const rise = minimise(problem, point, held, scratch, INNER).chiSquare - chiSquare;
       if (rise < -NEW_MINIMUM * (1 + chiSquare)) line.better = Float64Array.from(point);
       return Math.max(0, rise);
     },
   };
   return line;
+}
+
+/** θ_k to x and the others along the valley, within their bounds. */
+function moveTo(
+  { size, lower, upper }: Model,
+  point: Float64Array,
+  held: Uint8Array,
+  slopes: Float64Array,
+  k: number,
+  x: number,
+): void {
+  const shift = x - point[k]!;
+  for (let l = 0; l < size; l++) {
+    if (held[l] || slopes[l] === 0) continue;
+    point[l] = Math.min(Math.max(point[l]! + slopes[l]! * shift, lower[l]!), upper[l]!);
+  }
+  point[k] = x;
 }
 
 /** dθ_l/dθ_k along the valley of Φ: C_lk/C_kk. */
@@ -146,7 +171,7 @@ function firstStep(
     : Math.max(1, 2 * Math.abs(theta[k]!));
   if (covariance.ok) {
     const at = covariance.names.indexOf(model.names[k]!);
-    if (at >= 0) return Math.min(Math.sqrt(covariance.matrix[at]![at]!), span / 2);
+    if (at >= 0) return Math.min(Math.sqrt(covariance.matrix[at]![at]!), span * FIRST_SHARE);
   }
   return span / 20;
 }
