@@ -149,3 +149,11 @@ export {
   type StrengthChoices,
 } from './free-form/choose-strength';
 export { resolutionMatrix, type Resolution } from './free-form/resolution';
+export { resampleFreeForm } from './free-form/resample-free-form';
+export { freeFormBands, type FreeFormBands } from './free-form/free-form-bands';
+export {
+  freeFormDepths,
+  freeFormProfile,
+  type FreeFormPoint,
+  type FreeFormProfile,
+} from './free-form/free-form-profile';

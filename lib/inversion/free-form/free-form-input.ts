@@ -51,7 +51,6 @@ export function checkFreeFormInput(input: FreeFormInput): void {
   if (!input.points.some(({ enabled }) => enabled))
     throw new InversionError('empty-scan', 'Every point of the energy scan is switched off.');
   checkKnots(input);
-  checkCovariance(input);
 }
 
 function checkKnots({ knotsNm, knotCount, difference }: FreeFormInput): void {
@@ -80,27 +79,4 @@ export function checkReference(reference: readonly number[], knots: number): voi
     'bad-reference',
     `The reference of the penalty needs one finite number for each of the ${knots} knots.`,
   );
-}
-
-function checkCovariance({ covariance, points }: FreeFormInput): void {
-  if (!covariance) return;
-  const size = points.length;
-  const square = covariance.length === size && covariance.every((row) => row.length === size);
-  if (!square || !covariance.every((row) => row.every((value) => Number.isFinite(value)))) {
-    throw new InversionError(
-      'bad-covariance',
-      `The covariance of ${size} points is a table of ${size} rows of ${size} finite numbers.`,
-    );
-  }
-  for (let i = 0; i < size; i++) {
-    for (let j = 0; j <= i; j++) {
-      const scale = Math.sqrt(covariance[i]![i]! * covariance[j]![j]!);
-      if (!(Math.abs(covariance[i]![j]! - covariance[j]![i]!) <= 1e-9 * scale)) {
-        throw new InversionError(
-          'bad-covariance',
-          'The covariance of the points needs positive variances and must be symmetric.',
-        );
-      }
-    }
-  }
 }

@@ -47,7 +47,7 @@ export interface FreeFormOptions {
  * Free-form profile: min (y − Ku)ᵀV⁻¹(y − Ku) + µ‖L(u − u₀)‖² with u ≥ 0, or u monotonic and ≥ 0, over a curve of strengths µ, with the three
  * rules that choose one. Where the discrepancy principle finds none, cross-validation chooses.
  *
- * @throws InversionError 'bad-strength' for a strength that is not positive and finite.
+ * @throws InversionError 'bad-strength' for a strength that is not positive and finite, 'too-few-strengths' for a curve of fewer than three.
  */
 export function solveFreeForm(
   prepared: PreparedFreeForm,
@@ -55,7 +55,14 @@ export function solveFreeForm(
 ): FreeFormAnswer {
   const { problem, work, dataCount } = prepared;
   const strengths = options.strengths ?? strengthGrid(problem, dataCount);
+  if (strengths.length < 3) {
+    throw new InversionError(
+      'too-few-strengths',
+      `A curve over the strength of the penalty needs at least three points, not ${strengths.length}.`,
+    );
+  }
   Array.from(strengths).forEach(checkStrength);
+  if (typeof options.strength === 'number') checkStrength(options.strength);
   const curve = strengthCurve(problem, work, Float64Array.from(strengths).sort().reverse());
   const choices = chooseStrength(problem, work, curve);
   const { strength, chosenBy } = chosen(options.strength ?? 'discrepancy', choices);
