@@ -21,6 +21,14 @@ export interface NestedFits {
 export function checkNested({ simpler, richer }: NestedFits): void {
   const difference = differenceOf([simpler.answer, richer.answer]);
   if (difference) throw new InversionError('not-nested', difference);
+  // W·y: the same values under another covariance are other data.
+  const other = richer.prepared.problem.data.target;
+  if (!simpler.prepared.problem.data.target.every((value, row) => value === other[row])) {
+    throw new InversionError(
+      'not-nested',
+      'The fits do not use the same covariance of the points, so their χ² cannot be compared.',
+    );
+  }
   simpler.prepared.parameterNames.forEach((name) => {
     const reason = whyNotNested(simpler.prepared, richer.prepared, name);
     if (reason) throw new InversionError('not-nested', reason, { name });

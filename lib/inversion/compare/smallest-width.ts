@@ -44,7 +44,7 @@ export interface SmallestWidth {
  * the likelihood ratio (Asimov data; G. Cowan, K. Cranmer, E. Gross and O. Vitells, Eur. Phys. J. C 71, 1554, 2011). The test
  * rejects at T > 2.706, half the tail of χ²₁ (Self and Liang, J. Am. Stat. Assoc. 82, 605, 1987), so the power is
  * Φ(√T_A − √2.706), and 80 % is reached at √T_A = 1.645 + 0.842. T_A grows like w⁴ at small widths: a width adds in squares to
- * the straggling.
+ * the straggling. Widths far beyond the stops are no edge any more and are told less well again: `powers` shows it.
  *
  * @param answer a sharp or a graded fit; its own width is not used. A prior on the width is left out.
  * @throws InversionError 'wrong-fit' for another trial profile.

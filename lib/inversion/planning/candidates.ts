@@ -19,7 +19,7 @@ export interface CandidateInput {
   oneHourSigma: OneHourSigma;
 }
 
-/** @throws InversionError for energies that are none, twice the same, or outside the stopping set, or for bad σ₁. */
+/** @throws InversionError for an empty list, energies outside the stopping set, or bad σ₁. */
 export function candidatesOf(
   prepared: PreparedFit,
   answer: FitAnswer,

@@ -8,7 +8,10 @@ export interface PlanTarget {
   value: number;
   /** Its σ by the present covariance. */
   sigma: number;
-  /** Present covariance of the free parameters that are not at a bound: priors and the full V of the points are in it. */
+  /**
+   * Present covariance of the free parameters that are not at a bound: priors and the full V of the points are in it. A parameter at
+   * its bound counts as known.
+   */
   covariance: readonly (readonly number[])[];
   /** Place of the target in the covariance. */
   index: number;

@@ -12,7 +12,10 @@ import { noiseOf } from './draw-noise';
 export interface Injection {
   /** Energies, σ or covariance, settings and priors; the values of the points are not read. */
   input: FitInput;
-  /** The truth: any values, or those of a fit (`valuesOf`). A parameter with a prior is drawn from its prior instead. */
+  /**
+   * The truth: any values, or those of a fit (`valuesOf`). A parameter with a prior is drawn from its prior instead; a held one left
+   * out has its held value.
+   */
   values: ParameterValues;
   /** Scatter of the simulated points over what they state; 1 when left out. 2 plays points whose σ are stated half too small. */
   noiseFactor?: number;

@@ -166,6 +166,7 @@ describe('the bootstrap likelihood ratio', () => {
     refused(fits.simpler, fits.richer);
     refused(other({ parameters: { levelTop: heldAt(0.74) } }));
     refused(other({ parameters: { levelTop: freeWith(0.74, 0.01) } }));
+    refused(other({ covariance: correlated.covariance! }));
     refused(other({ points: fits.richer.prepared.input.points.slice(1) }));
     expect(() => likelihoodRatioTest(fits, [])).toThrow(
       expect.objectContaining({ code: 'no-resamples' }),

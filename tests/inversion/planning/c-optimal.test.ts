@@ -83,8 +83,12 @@ describe('the c-optimal split', () => {
   it('adds up, is certified, and its variance is what the split gives', () => {
     fc.assert(
       fc.property(problems, ({ seed, size, count, hours }) => {
-        const problem = problemOf(seed, size, count);
+        const once = problemOf(seed, size, count);
+        // Every energy twice, and once the other way round: slopes that are equal from the start.
+        const vectors = once.vectors.flatMap((vector) => [vector, vector, vector.map((x) => -x)]);
+        const problem = { ...once, vectors };
         const design = optimalDesign(problem, hours);
+        expect(design.variance / optimalDesign(once, hours).variance).toBeCloseTo(1, 8);
         expect(design.hours.every((t) => t >= 0)).toBe(true);
         expect(design.hours.reduce((a, b) => a + b, 0) / hours).toBeCloseTo(1, 10);
         expect(design.gap).toBeLessThanOrEqual(1e-9 * design.variance);
