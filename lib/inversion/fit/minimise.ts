@@ -1,5 +1,4 @@
 import type { EdgeParameters } from '../profile/trial-profile';
-import { widthsOf } from '../profile/trial-profile';
 import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
@@ -66,7 +65,7 @@ function isStep({ width }: EdgeParameters, theta: Float64Array): boolean {
 
 /** Φ is a parabola at its bottom: a line is meant to the square root of what Φ may still fall by, as a share of the range. */
 function lineTolerance({ tolerance }: RefineOptions): number {
-  return Math.min(1e-5, Math.max(1e-9, 0.03 * Math.sqrt(tolerance)));
+  return Math.min(1e-5, Math.max(1e-9, 0.003 * Math.sqrt(tolerance)));
 }
 
 function minimiseStep(
@@ -135,11 +134,11 @@ function leaveZeroWidth(
   options: RefineOptions,
   result: RefineResult,
 ): RefineResult | null {
-  const { trial, upper } = problem.model;
+  const { widths, upper } = problem.model;
   let lowest = result.chiSquare;
   let width = -1;
   let opened = 0;
-  for (const k of widthsOf(trial)) {
+  for (const k of widths) {
     if (held[k] || theta[k]! > 0) continue;
     for (const share of OPENED_WIDTHS) {
       inner.set(theta);

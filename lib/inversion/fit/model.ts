@@ -19,6 +19,8 @@ export interface Model {
   names: readonly ParameterName[];
   size: number;
   shapeCount: number;
+  /** Which shape parameters are widths: zero makes a step. */
+  widths: readonly number[];
   levelCount: number;
   /** Index of the depth scale, which is the last. */
   scaleIndex: number;

@@ -162,6 +162,7 @@ function compileModel(
     names: table.map((row) => row.name),
     size: table.length,
     shapeCount,
+    widths: trial.edges.flatMap(({ width }) => width ?? []),
     levelCount: table.length - shapeCount - 1,
     scaleIndex: table.length - 1,
     lower: Float64Array.from(table, (row) => row.lower),

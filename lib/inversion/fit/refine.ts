@@ -1,5 +1,4 @@
 import { evaluate, fillJacobian } from './evaluate';
-import { widthsOf } from '../profile/trial-profile';
 import type { Problem } from './model';
 import {
   createNormalEquations,
@@ -20,6 +19,11 @@ export interface RefineOptions {
   maxIterations: number;
   /** Converged when the undamped step promises less than this times 1 + Φ. */
   tolerance: number;
+  /**
+   * Takes the last step, whose promise ended the search, unseen: θ and Φ are then right to the next order, but the workspace
+   * still holds the fold before it.
+   */
+  takeLastStep?: boolean;
 }
 
 export interface RefineScratch {
@@ -56,8 +60,7 @@ export function refine(
   options: RefineOptions,
 ): RefineResult {
   const { normal, trial, active } = scratch;
-  const { lower, upper, size, shapeCount, levelCount } = problem.model;
-  const widths = widthsOf(problem.model.trial);
+  const { shapeCount, levelCount } = problem.model;
   let chiSquare = evaluate(problem, theta, held);
   let damping = FIRST_DAMPING;
   let iterations = 0;
@@ -76,18 +79,15 @@ export function refine(
       if (damping > FIRST_DAMPING)
         predictedReduction = solveStep(normal, active, 0, shapeCount, shapeCount + levelCount);
       if (predictedReduction <= options.tolerance * (1 + chiSquare)) {
+        if (options.takeLastStep) {
+          stepFrom(problem, theta, active, normal.step, trial);
+          theta.set(trial);
+          chiSquare -= predictedReduction;
+        }
         return { chiSquare, iterations, predictedReduction, converged: true };
       }
     }
-    for (let k = 0; k < size; k++) {
-      trial[k] = active[k]
-        ? theta[k]!
-        : Math.min(Math.max(theta[k]! + normal.step[k]!, lower[k]!), upper[k]!);
-    }
-    for (const k of widths) {
-      // Φ is even in a width: a step past zero says little of where the minimum is, so it stops short of it.
-      if (trial[k] === 0 && theta[k]! > SMALLEST_SHARE * upper[k]!) trial[k] = theta[k]! / 5;
-    }
+    stepFrom(problem, theta, active, normal.step, trial);
     const next = evaluate(problem, trial, held);
     if (next < chiSquare) {
       const gain = (chiSquare - next) / predictedReduction;
@@ -103,6 +103,26 @@ export function refine(
   // The fold in the workspace may belong to a refused step.
   evaluate(problem, theta, held);
   return { chiSquare, iterations, predictedReduction, converged: false };
+}
+
+/** θ + step within the bounds, into trial. */
+function stepFrom(
+  { model }: Problem,
+  theta: Float64Array,
+  active: Uint8Array,
+  step: Float64Array,
+  trial: Float64Array,
+): void {
+  const { size, lower, upper } = model;
+  for (let k = 0; k < size; k++) {
+    trial[k] = active[k]
+      ? theta[k]!
+      : Math.min(Math.max(theta[k]! + step[k]!, lower[k]!), upper[k]!);
+  }
+  for (const k of model.widths) {
+    // Φ is even in a width: a step past zero says little of where the minimum is, so it stops short of it.
+    if (trial[k] === 0 && theta[k]! > SMALLEST_SHARE * upper[k]!) trial[k] = theta[k]! / 5;
+  }
 }
 
 /** Marks what may not move: held parameters, and those at a bound whose gradient points outward. */

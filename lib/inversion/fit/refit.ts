@@ -1,15 +1,15 @@
-import type { ParameterValues } from '../types';
-import { dataChiSquare, evaluate, foldAt, meanLevel } from './evaluate';
+import type { FitAnswer, ParameterValues } from '../types';
+import { dataChiSquare, fillJacobian, foldAt, meanLevel } from './evaluate';
 import { minimise } from './minimise';
 import type { PreparedFit } from './prepared-fit';
 import { inValleyOf, localMinima, scanGrid, thetaOfNode } from './search';
-import { thetaOf } from './theta-of';
+import { thetaOf, valuesOf } from './theta-of';
 import { openWidths } from './widths';
 
 /** Another valley of the search is followed when its node lies less than this above the bottom found. */
 const LOOK_AGAIN = 4;
-/** What Φ may still fall by, relative to 1 + Φ: a thousandth of a σ in any parameter. */
-const OPTIONS = { maxIterations: 60, tolerance: 1e-7 };
+/** The step left over, a few hundredths of a σ at most, is taken unseen: what remains is a thousandth. */
+const OPTIONS = { maxIterations: 60, tolerance: 1e-5, takeLastStep: true };
 
 /**
  * A prepared fit whose observations may be redrawn. The model, its search lattice and all scratch are those of the original:
@@ -58,6 +58,47 @@ export function observe(
 }
 
 /**
+ * Where the minimum moves to first order when the observations and prior means change: θ̂ + (J̃ᵀJ̃ + P)⁻¹(J̃ᵀ·Δ(W·y) + P·Δm) over the
+ * free parameters inside their bounds, J̃ = W·∂ŷ/∂θ and P the priors. A start that needs no fold.
+ *
+ * @returns a function that writes θ; null where the covariance does not exist.
+ */
+export function linearStart(
+  { prepared }: Refit,
+  { covariance, ...answer }: FitAnswer,
+): ((rows: ArrayLike<number>, priorMean: ArrayLike<number>, theta: Float64Array) => void) | null {
+  if (!covariance.ok) return null;
+  const { model, work } = prepared.problem;
+  const home = thetaOf(prepared, valuesOf(answer));
+  const expected = expectedRows(prepared, valuesOf(answer));
+  fillJacobian(prepared.problem, home);
+  const inside = covariance.names.map((name) => model.names.indexOf(name));
+  const { rowCount, size, priorInverseSigma, lower, upper } = model;
+  const gain = new Float64Array(size * (rowCount + size));
+  inside.forEach((k, a) =>
+    inside.forEach((l, b) => {
+      const entry = covariance.matrix[a]![b]!;
+      const at = k * (rowCount + size);
+      for (let i = 0; i < rowCount; i++)
+        gain[at + i] = gain[at + i]! + entry * work.jacobian[l * rowCount + i]!;
+      gain[at + rowCount + l] = entry * priorInverseSigma[l]! ** 2;
+    }),
+  );
+  return (rows, priorMean, theta) => {
+    for (let k = 0; k < size; k++) {
+      const at = k * (rowCount + size);
+      let value = home[k]!;
+      for (let i = 0; i < rowCount; i++) value += gain[at + i]! * (rows[i]! - expected[i]!);
+      for (let l = 0; l < size; l++) {
+        if (priorInverseSigma[l]! > 0)
+          value += gain[at + rowCount + l]! * (priorMean[l]! - home[l]!);
+      }
+      theta[k] = Math.min(Math.max(value, lower[k]!), upper[k]!);
+    }
+  };
+}
+
+/**
  * Global minimum of Φ for the observations taken last: from θ as handed in, and from the best two valleys of the whole
  * lattice where they may lie lower. θ is improved in place.
  *
@@ -81,6 +122,5 @@ export function refit(
     chiSquare = next;
     theta.set(other);
   }
-  evaluate(problem, theta, model.held);
   return chiSquare;
 }

@@ -7,7 +7,7 @@ import type { SearchGrid } from './model';
 import { createShareFold } from './workspace';
 
 /** Bins of the stopping profiles that a smooth profile is searched with. A sharp edge takes no more time on the bins of the file. */
-const COARSE_BINS = 80;
+const COARSE_BINS = 56;
 
 export interface GridInput {
   kernel: Kernel;

@@ -5,7 +5,6 @@ import { polish } from './polish';
 import type { RefineResult } from './refine';
 import { localMinima, scanGrid, thetaOfNode } from './search';
 import { openWidths } from './widths';
-import { widthsOf } from '../profile/trial-profile';
 
 /** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
 const VALLEY = { maxIterations: 60, tolerance: 1e-5 };
@@ -115,14 +114,14 @@ function closeWidths(
 ): number {
   const { model } = problem;
   let lowest = chiSquare;
-  for (const k of widthsOf(model.trial)) {
+  for (const k of model.widths) {
     if (model.held[k] || theta[k] === 0 || theta[k]! > NEARLY_SHARP * model.upper[k]!) continue;
     const step = Float64Array.from(theta);
     step[k] = 0;
     const held = Uint8Array.from(model.held);
     held[k] = 1;
     const { chiSquare: stepChiSquare } = minimise(problem, step, held, scratch, FINAL);
-    if (stepChiSquare > lowest) continue;
+    if (stepChiSquare > lowest + ROUNDING * (1 + lowest)) continue;
     theta.set(step);
     lowest = stepChiSquare;
   }

@@ -85,15 +85,19 @@ export function localMinima(axes: readonly Float64Array[], chiSquares: Float64Ar
   return minima.sort((a, b) => chiSquares[a]! - chiSquares[b]!);
 }
 
+/** Neighbours along one axis rule most nodes out before the diagonal ones are looked at. */
 function isLowest(axes: readonly Float64Array[], chiSquares: Float64Array, node: number): boolean {
-  return (
-    // Neighbours along one axis rule most nodes out before all of them are looked at.
-    noneBelow(axes, chiSquares, node, node, 0, 1, true) &&
-    noneBelow(axes, chiSquares, node, node, 0, 1, false)
-  );
+  let stride = 1;
+  for (const { length } of axes) {
+    const place = Math.floor(node / stride) % length;
+    if (place > 0 && isBelow(chiSquares, node - stride, node)) return false;
+    if (place < length - 1 && isBelow(chiSquares, node + stride, node)) return false;
+    stride *= length;
+  }
+  return noneBelow(axes, chiSquares, node, node, 0, 1);
 }
 
-/** Whether no neighbour of a node lies lower, over the axes from k on; along one axis at a time, or diagonally as well. */
+/** Whether no neighbour of a node lies lower, diagonal ones included: those reached from `from` over the axes from k on. */
 function noneBelow(
   axes: readonly Float64Array[],
   chiSquares: Float64Array,
@@ -101,18 +105,15 @@ function noneBelow(
   from: number,
   k: number,
   stride: number,
-  straight: boolean,
 ): boolean {
   if (k === axes.length) return !isBelow(chiSquares, from, node);
-  const length = axes[k]!.length;
+  const { length } = axes[k]!;
   const place = Math.floor(node / stride) % length;
   const next = stride * length;
-  if (!noneBelow(axes, chiSquares, node, from, k + 1, next, straight)) return false;
-  if (straight && from !== node) return true;
-  if (place > 0 && !noneBelow(axes, chiSquares, node, from - stride, k + 1, next, straight))
-    return false;
   return (
-    place === length - 1 || noneBelow(axes, chiSquares, node, from + stride, k + 1, next, straight)
+    noneBelow(axes, chiSquares, node, from, k + 1, next) &&
+    (place === 0 || noneBelow(axes, chiSquares, node, from - stride, k + 1, next)) &&
+    (place === length - 1 || noneBelow(axes, chiSquares, node, from + stride, k + 1, next))
   );
 }
 

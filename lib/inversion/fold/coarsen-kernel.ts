@@ -1,4 +1,4 @@
-import type { Kernel, KernelGroup } from './kernel';
+import { jumpRanges, type Kernel, type KernelGroup } from './kernel';
 
 /**
  * The same stopping profiles on fewer, wider bins: for a search that only has to find the right valley. Bins are merged in
@@ -37,11 +37,13 @@ function coarsenGroup(group: KernelGroup, mostBins: number): KernelGroup {
       jump[at + k] = before - density[at + k]!;
     }
   }
+  const coarseEdges = Float64Array.from(kept, (j) => edgesNm[j]!);
   return {
-    edgesNm: Float64Array.from(kept, (j) => edgesNm[j]!),
+    edgesNm: coarseEdges,
     rows,
     density,
     jump,
     tail: coarseTail,
+    ...jumpRanges(coarseEdges, jump),
   };
 }

@@ -63,7 +63,7 @@ export function foldCumulative(
 }
 
 function sumGroup(
-  { edgesNm, rows, jump }: KernelGroup,
+  { edgesNm, rows, jump, firstJump, endJump }: KernelGroup,
   first: number,
   scale: number,
   { share, byShape, byScale, derivatives, cumulative }: ShareFold,
@@ -72,13 +72,15 @@ function sumGroup(
   for (let r = 0; r < rows.length; r++) {
     const at = r * count;
     const row = rows[r]!;
-    const sum = dot(jump, at, cumulative.integral, first, count) / scale;
+    const begin = Math.max(first, firstJump[r]!);
+    const end = endJump[r]!;
+    const sum = dot(jump, at, cumulative.integral, begin, end) / scale;
     share[row] = sum;
     if (!derivatives) continue;
     for (let k = 0; k < byShape.length; k++)
-      byShape[k]![row] = dot(jump, at, cumulative.byShape[k]!, first, count) / scale;
+      byShape[k]![row] = dot(jump, at, cumulative.byShape[k]!, begin, end) / scale;
     let stretched = 0;
-    for (let j = first; j < count; j++)
+    for (let j = begin; j < end; j++)
       stretched += jump[at + j]! * cumulative.share[j]! * edgesNm[j]!;
     byScale[row] = (stretched - sum) / scale;
   }
@@ -89,9 +91,9 @@ function dot(
   at: number,
   column: Float64Array,
   first: number,
-  count: number,
+  end: number,
 ): number {
   let sum = 0;
-  for (let j = first; j < count; j++) sum += jump[at + j]! * column[j]!;
+  for (let j = first; j < end; j++) sum += jump[at + j]! * column[j]!;
   return sum;
 }

@@ -93,7 +93,7 @@ function fillEdgeTerms(
 
 /** Σ_j jump_j (G_j, Φ_j, φ_j) over the edges near the edge, two rows at a time: each term is then loaded once for both. */
 function sumPairs(
-  { edgesNm, rows, jump }: KernelGroup,
+  { edgesNm, rows, jump, firstJump, endJump }: KernelGroup,
   from: number,
   to: number,
   { g, cdf, pdf }: FoldScratch,
@@ -102,15 +102,18 @@ function sumPairs(
   const edgeCount = edgesNm.length;
   for (let r = 0; r < rows.length; r += 2) {
     const paired = r + 1 < rows.length;
+    const other = paired ? r + 1 : r;
     const first = r * edgeCount;
-    const second = paired ? first + edgeCount : first;
+    const second = other * edgeCount;
+    const begin = Math.max(from, Math.min(firstJump[r]!, firstJump[other]!));
+    const end = Math.min(to, Math.max(endJump[r]!, endJump[other]!));
     let share0 = 0;
     let cdf0 = 0;
     let pdf0 = 0;
     let share1 = 0;
     let cdf1 = 0;
     let pdf1 = 0;
-    for (let j = from; j < to; j++) {
+    for (let j = begin; j < end; j++) {
       const d0 = jump[first + j]!;
       const d1 = jump[second + j]!;
       const gj = g[j]!;
@@ -130,7 +133,7 @@ function sumPairs(
 
 /** Σ_j jump_j G_j alone. */
 function sumShares(
-  { edgesNm, rows, jump }: KernelGroup,
+  { edgesNm, rows, jump, firstJump, endJump }: KernelGroup,
   from: number,
   to: number,
   { g }: FoldScratch,
@@ -139,11 +142,14 @@ function sumShares(
   const edgeCount = edgesNm.length;
   for (let r = 0; r < rows.length; r += 2) {
     const paired = r + 1 < rows.length;
+    const other = paired ? r + 1 : r;
     const first = r * edgeCount;
-    const second = paired ? first + edgeCount : first;
+    const second = other * edgeCount;
+    const begin = Math.max(from, Math.min(firstJump[r]!, firstJump[other]!));
+    const end = Math.min(to, Math.max(endJump[r]!, endJump[other]!));
     let share0 = 0;
     let share1 = 0;
-    for (let j = from; j < to; j++) {
+    for (let j = begin; j < end; j++) {
       const gj = g[j]!;
       share0 += jump[first + j]! * gj;
       share1 += jump[second + j]! * gj;

@@ -13,6 +13,9 @@ export interface KernelGroup {
   density: Float64Array;
   jump: Float64Array;
   tail: Float64Array;
+  /** Edges from firstJump[r] to before endJump[r] hold all jumps of row r that a share can show. */
+  firstJump: Int32Array;
+  endJump: Int32Array;
 }
 
 export interface Kernel {
@@ -61,7 +64,39 @@ function compileGroup(
       jump[at + j] = (j === 0 ? 0 : density[at + j - 1]!) - density[at + j]!;
     for (let j = edgeCount - 2; j >= 0; j--) tail[at + j] = tail[at + j + 1]! + mass[j]!;
   });
-  return { edgesNm, rows: Int32Array.from(rows), density, jump, tail };
+  return {
+    edgesNm,
+    rows: Int32Array.from(rows),
+    density,
+    jump,
+    tail,
+    ...jumpRanges(edgesNm, jump),
+  };
+}
+
+/** A jump of less than this share per range, summed over as many edges as there may be, is below the last bit of a share. */
+const SMALLEST_JUMP = 1e-20;
+
+/** Muons stop over a part of the bins only: the rest of the jumps is zero, or as good as. */
+export function jumpRanges(
+  edgesNm: Float64Array,
+  jump: Float64Array,
+): Pick<KernelGroup, 'firstJump' | 'endJump'> {
+  const edgeCount = edgesNm.length;
+  const rowCount = jump.length / edgeCount;
+  const smallest = SMALLEST_JUMP / (edgesNm[edgeCount - 1]! - edgesNm[0]!);
+  const firstJump = new Int32Array(rowCount);
+  const endJump = new Int32Array(rowCount);
+  for (let r = 0; r < rowCount; r++) {
+    const at = r * edgeCount;
+    let first = 0;
+    let end = edgeCount;
+    while (first < end && Math.abs(jump[at + first]!) < smallest) first++;
+    while (end > first && Math.abs(jump[at + end - 1]!) < smallest) end--;
+    firstJump[r] = first;
+    endJump[r] = end;
+  }
+  return { firstJump, endJump };
 }
 
 /** Index of the first edge that lies at or beyond xNm; the number of edges when none does. */

@@ -5,8 +5,8 @@ import { normalShare, normalStretch } from './normal-share';
 import type { TrialProfile } from './trial-profile';
 
 /** An edge moves the fold on the scale of the straggling, so tens of nodes find every valley. */
-const DEPTHS = 28;
-const WIDTH_SHARES = [0, 0.012, 0.035, 0.09, 0.22, 0.5];
+const DEPTHS = 24;
+const WIDTH_SHARES = [0, 0.02, 0.065, 0.18, 0.45];
 
 const cdf = new Float64Array(1);
 const pdf = new Float64Array(1);

@@ -80,8 +80,3 @@ export interface SearchRange {
   /** This many depths, denser where more muons stop. */
   depths(count: number): Float64Array;
 }
-
-/** Which shape parameters are widths. */
-export function widthsOf({ edges }: Pick<TrialProfile, 'edges'>): number[] {
-  return edges.flatMap(({ width }) => width ?? []);
-}

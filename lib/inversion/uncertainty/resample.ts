@@ -1,5 +1,5 @@
 import type { PreparedFit } from '../fit/prepared-fit';
-import { createRefit, expectedRows, observe, refit } from '../fit/refit';
+import { createRefit, expectedRows, linearStart, observe, refit } from '../fit/refit';
 import { thetaOf, valuesOf } from '../fit/theta-of';
 import { checkBlock, type SeededBlock } from '../simulate/check-block';
 import { noiseOf } from '../simulate/draw-noise';
@@ -26,6 +26,7 @@ export function resample(
   const best = thetaOf(prepared, values);
   const expected = expectedRows(prepared, values);
   const again = createRefit(prepared);
+  const start = linearStart(again, answer);
   const noise = noiseOf(prepared);
   const observed = new Float64Array(model.rowCount);
   const priorMean = Float64Array.from(prepared.problem.data.priorMean);
@@ -42,6 +43,7 @@ export function resample(
     }
     observe(again, observed, priorMean);
     theta.set(best);
+    start?.(observed, priorMean, theta);
     refit(again, theta);
     for (let column = 0; column < free.length; column++)
       rows[r * free.length + column] = theta[free[column]!]!;
