@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import fc from 'fast-check';
 import { inverse, Matrix } from 'ml-matrix';
 import { describe, expect, it } from 'vitest';
@@ -78,6 +79,21 @@ describe('the c-optimal split', () => {
       expect(design.hours[k]! / hours).toBeCloseTo(share, 6),
     );
     expect(design.variance * hours).toBeCloseTo(variance, 6);
+  });
+
+  // Source: SciPy's SLSQP from eight random splits each (tests/reference/c_optimal.py). Tolerance: 1e-7 of the variance, where SLSQP
+  // stops; and never above it by more than the certificate of 1e-9.
+  it('is the one that SciPy finds', () => {
+    const { problems: cases } = JSON.parse(
+      readFileSync('fixtures/reference/planning/c-optimal.json', 'utf8'),
+    ) as { problems: (DesignProblem & { hours: number; variance: number })[] };
+    expect(cases).toHaveLength(6);
+    for (const { vectors, hours, variance, ...rest } of cases) {
+      const problem = { ...rest, vectors: vectors.map((vector) => Float64Array.from(vector)) };
+      const found = optimalDesign(problem, hours).variance;
+      expect(found / variance).toBeLessThan(1 + 1e-9);
+      expect(found / variance).toBeGreaterThan(1 - 1e-7);
+    }
   });
 
   it('adds up, is certified, and its variance is what the split gives', () => {

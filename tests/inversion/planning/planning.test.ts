@@ -76,18 +76,20 @@ const sigmaOf = ({ answer }: Fitted, name: ParameterName): number =>
   answer.parameters.find((parameter) => parameter.name === name)!.sigma!;
 
 const plain = fractionInput({}, 0.004);
-const templates: [string, FitInput, ParameterValues][] = [
-  ['levels free', plain, truth],
+const templates: [string, FitInput, ParameterValues, ParameterName][] = [
+  ['levels free', plain, truth, 'edgeDepthNm'],
   [
     'depth scale free, prior on a level',
     fractionInput({ parameters: { depthScale: free, levelBulk: freeWith(0.32, 0.01) } }, 0.004),
     { ...truth, depthScale: 1 },
+    'edgeDepthNm',
   ],
   [
     'sharp, rate',
     rateInput({ profile: 'sharp' }, 0.05),
     // Apart from the bin borders, where ∂ŷ/∂W jumps.
     { edgeDepthNm: 60.5, levelTop: 0.1, levelBulk: 2 },
+    'edgeDepthNm',
   ],
   [
     'full covariance',
@@ -98,6 +100,7 @@ const templates: [string, FitInput, ParameterValues][] = [
       ),
     },
     truth,
+    'edgeWidthNm',
   ],
   [
     'layer',
@@ -113,6 +116,18 @@ const templates: [string, FitInput, ParameterValues][] = [
       levelTop: 0.74,
       levelBulk: 0.32,
     },
+    'layerThicknessNm',
+  ],
+  [
+    'band bending, rate',
+    rateInput({
+      profile: 'band-bending',
+      // Germanium at 200 K.
+      semiconductor: { relativePermittivity: 16.2, temperatureK: 200, intrinsicPerCm3: 1e10 },
+      carriers: { bulkPerCm3: 2e15, bulkSigmaPerCm3: null, topPerCm3: null },
+    }),
+    { surfacePotentialEv: 0.09, bulkPerCm3: 2e15, levelTop: 0.01, levelBulk: 2 },
+    'surfacePotentialEv',
   ],
 ];
 
@@ -121,20 +136,20 @@ describe('the best next energy', () => {
   // for the finite differences and the last digits of the minimum.
   it.each(templates)(
     'predicts the σ that a fit with the new point has: %s',
-    (_, template, values) => {
+    (_, template, values, target) => {
       const now = noiseFree(template, values);
       const energiesKeV = [2.5, 7, 11, 13, 21];
       const outcome = bestNextEnergy(now.prepared, now.answer, {
-        target: 'edgeDepthNm',
+        target,
         hours: 3,
         oneHourSigma: 0.006,
         energiesKeV,
       });
       if (!outcome.ok) throw new Error(outcome.reason);
-      expect(outcome.present.sigma).toBe(sigmaOf(now, 'edgeDepthNm'));
+      expect(outcome.present.sigma).toBe(sigmaOf(now, target));
       for (const { energyKeV, sigma } of outcome.candidates) {
         const then = noiseFree(template, values, pointsAfter([{ energyKeV, hours: 3 }], 0.006));
-        expect(sigma / sigmaOf(then, 'edgeDepthNm')).toBeCloseTo(1, 4);
+        expect(sigma / sigmaOf(then, target)).toBeCloseTo(1, 4);
       }
       expect(outcome.best.sigma).toBe(Math.min(...outcome.candidates.map(({ sigma }) => sigma)));
     },
@@ -220,10 +235,10 @@ describe('the best next energy', () => {
 describe('the best split of some hours', () => {
   it.each(templates)(
     'is certified and beats the single energy and the repeated scan: %s',
-    (_, template, values) => {
+    (_, template, values, target) => {
       const { prepared, answer } = noiseFree(template, values);
       const outcome = bestSplit(prepared, answer, {
-        target: 'edgeDepthNm',
+        target,
         hours: 8,
         oneHourSigma: 0.005,
         stepHours: 0.5,
@@ -269,10 +284,10 @@ describe('the best split of some hours', () => {
   // The layer is left out: its fits take ten seconds.
   it.each(templates.slice(0, 4))(
     'leaves the scatter that it predicts: %s',
-    (_, template, values) => {
+    (_, template, values, target) => {
       const now = noiseFree(template, values);
       const oneHourSigma = template.observable === 'rate' ? 0.05 : 0.004;
-      const input = { target: 'edgeDepthNm' as const, hours: 12, oneHourSigma };
+      const input = { target, hours: 12, oneHourSigma };
       // Energies apart from those of the scan: a scan holds an energy once.
       const energiesKeV = [2.5, 3.5, 4.5, 5.5, 7, 9, 11, 13, 15, 17, 19, 21];
       const outcome = bestSplit(now.prepared, now.answer, { ...input, energiesKeV });
@@ -290,7 +305,7 @@ describe('the best split of some hours', () => {
           { seed: 1, first: 0, count: 300 },
         ),
       );
-      const { spread } = parameters.find(({ name }) => name === 'edgeDepthNm')!;
+      const { spread } = parameters.find(({ name }) => name === target)!;
       expect(Math.abs(spread / outcome.best.sigma - 1)).toBeLessThan(0.12 + 0.03);
     },
   );
