@@ -81,8 +81,8 @@ describe('the c-optimal split', () => {
     expect(design.variance * hours).toBeCloseTo(variance, 6);
   });
 
-  // Source: SciPy's SLSQP from eight random splits each (tests/reference/c_optimal.py). Tolerance: 1e-7 of the variance, where SLSQP
-  // stops; and never above it by more than the certificate of 1e-9.
+  // Source: SciPy's SLSQP from eight random splits each (tests/reference/c_optimal.py). Tolerance: the certificate of 1e-9; seen:
+  // equal to 15 digits.
   it('is the one that SciPy finds', () => {
     const { problems: cases } = JSON.parse(
       readFileSync('fixtures/reference/planning/c-optimal.json', 'utf8'),
@@ -92,7 +92,7 @@ describe('the c-optimal split', () => {
       const problem = { ...rest, vectors: vectors.map((vector) => Float64Array.from(vector)) };
       const found = optimalDesign(problem, hours).variance;
       expect(found / variance).toBeLessThan(1 + 1e-9);
-      expect(found / variance).toBeGreaterThan(1 - 1e-7);
+      expect(found / variance).toBeGreaterThan(1 - 1e-9);
     }
   });
 
