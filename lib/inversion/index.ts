@@ -157,3 +157,14 @@ export {
   type FreeFormPoint,
   type FreeFormProfile,
 } from './free-form/free-form-profile';
+export { sensitivityAt } from './fit/sensitivity';
+export {
+  captureCoefficient,
+  thermalVelocity,
+  type CaptureCoefficientInput,
+} from './response/capture-coefficient';
+export {
+  calibrationErrors,
+  type CalibrationError,
+  type MovedCalibration,
+} from './uncertainty/calibration-errors';
