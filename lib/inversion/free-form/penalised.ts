@@ -55,11 +55,6 @@ export function createPenalisedWork(problem: PenalisedProblem, dataCount: number
   const { design, penalty, nonNegative } = problem;
   const rows = design.rows + penalty.rows;
   const { columns } = design;
-  const extent = Int32Array.from({ length: columns }, (_, j) => {
-    let last = penalty.rows;
-    while (last > 0 && penalty.values[j * penalty.rows + last - 1] === 0) last--;
-    return design.rows + last;
-  });
   const state = createNonNegativeState(rows, columns);
   // Every column begins as passive: right wherever the constraint does not bind, as for large strengths.
   if (nonNegative) state.x.fill(1);
@@ -68,7 +63,7 @@ export function createPenalisedWork(problem: PenalisedProblem, dataCount: number
       rows,
       columns,
       matrix: new Float64Array(rows * columns),
-      extent,
+      extent: stackedExtent(problem),
       b: new Float64Array(rows),
     },
     state,
@@ -77,6 +72,18 @@ export function createPenalisedWork(problem: PenalisedProblem, dataCount: number
     point: { strength: NaN, chiSquare: NaN, roughness: NaN, effectiveParameters: NaN, gcv: NaN },
     status: 'solved',
   };
+}
+
+/** Leading rows of each column of [K; √µ L] that hold anything. */
+export function stackedExtent({
+  design,
+  penalty,
+}: Pick<PenalisedProblem, 'design' | 'penalty'>): Int32Array {
+  return Int32Array.from({ length: design.columns }, (_, j) => {
+    let last = penalty.rows;
+    while (last > 0 && penalty.values[j * penalty.rows + last - 1] === 0) last--;
+    return design.rows + last;
+  });
 }
 
 /** Solves at one strength µ, from the passive set of the strength before, into work.state.x and work.point. */
@@ -93,18 +100,25 @@ export function solveAtStrength(
   measure(problem, work, strength);
 }
 
-/** [K; √µ L] and [y; √µ t]. */
-function stack(
-  { design, data, penalty, target }: PenalisedProblem,
-  { rows, columns, matrix, b }: LinearSystem,
+/** [K; √µ L] by columns into `matrix`. */
+export function stackMatrix(
+  { design, penalty }: Pick<PenalisedProblem, 'design' | 'penalty'>,
   root: number,
+  matrix: Float64Array,
 ): void {
-  for (let j = 0; j < columns; j++) {
+  const rows = design.rows + penalty.rows;
+  for (let j = 0; j < design.columns; j++) {
     const at = j * rows;
     for (let i = 0; i < design.rows; i++) matrix[at + i] = design.values[j * design.rows + i]!;
     for (let i = 0; i < penalty.rows; i++)
       matrix[at + design.rows + i] = root * penalty.values[j * penalty.rows + i]!;
   }
+}
+
+/** [K; √µ L] and [y; √µ t]. */
+function stack(problem: PenalisedProblem, { matrix, b }: LinearSystem, root: number): void {
+  const { design, data, penalty, target } = problem;
+  stackMatrix(problem, root, matrix);
   for (let i = 0; i < design.rows; i++) b[i] = data[i]!;
   for (let i = 0; i < penalty.rows; i++) b[design.rows + i] = root * target[i]!;
 }

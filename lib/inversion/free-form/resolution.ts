@@ -1,5 +1,5 @@
 import { createColumnSolver, factorColumns, solveFactored } from './column-solver';
-import type { ColumnMatrix } from './penalised';
+import { stackedExtent, stackMatrix, type ColumnMatrix } from './penalised';
 
 export interface Resolution {
   /**
@@ -42,16 +42,10 @@ export function resolutionOn(
   const { design, penalty, answers, chosen, strength } = problem;
   const rows = design.rows + penalty.rows;
   const columns = design.columns;
-  const root = Math.sqrt(strength);
   const matrix = new Float64Array(rows * columns);
-  for (let j = 0; j < columns; j++) {
-    for (let i = 0; i < design.rows; i++)
-      matrix[j * rows + i] = design.values[j * design.rows + i]!;
-    for (let i = 0; i < penalty.rows; i++)
-      matrix[j * rows + design.rows + i] = root * penalty.values[j * penalty.rows + i]!;
-  }
+  stackMatrix(problem, Math.sqrt(strength), matrix);
   const solver = createColumnSolver(rows, columns);
-  const extent = new Int32Array(columns).fill(rows);
+  const extent = stackedExtent(problem);
   if (!factorColumns(solver, matrix, extent, chosen, chosen.length)) return null;
   const b = new Float64Array(rows);
   const x = new Float64Array(columns);
