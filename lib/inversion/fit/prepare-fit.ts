@@ -1,5 +1,5 @@
 import { InversionError } from '../errors';
-import { compileKernel } from '../fold/kernel';
+import { compileKernel, type Kernel } from '../fold/kernel';
 import { correlatedWhitener, diagonalWhitener, whiten, type Whitener } from '../linalg/whitener';
 import type { TrialProfile } from '../profile/trial-profile';
 import { trialProfileOf } from '../profile/trial-profiles';
@@ -12,7 +12,8 @@ import type { Data, Model } from './model';
 import { depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
 import type { PreparedFit } from './prepared-fit';
 import { createRefineScratch } from './refine';
-import { buildSearchGrid } from './search-grid';
+import { rememberBySet } from './remember';
+import { foldLattice, weighLattice, type LatticeFolds } from './search-grid';
 import { createWorkspace } from './workspace';
 
 /**
@@ -136,6 +137,16 @@ export function whitenerOf(
       );
 }
 
+/** A kernel of the largest scan takes 100 MB, a lattice a few; the desk goes to and fro between few of them. */
+const rememberedKernel = rememberBySet<Kernel>(1);
+const rememberedLattice = rememberBySet<LatticeFolds>(8);
+
+/** Everything else that the share seen by the probe depends on. */
+function whatIsFolded(input: FitInput): unknown {
+  const { profile, polarity, response, carriers, semiconductor, parameters } = input;
+  return [profile, polarity, response, carriers, semiconductor, parameters.bulkPerCm3];
+}
+
 function compileModel(
   input: FitInput,
   trial: TrialProfile,
@@ -144,12 +155,27 @@ function compileModel(
   rows: Int32Array,
   deepestNm: number,
 ): Model {
-  const kernel = compileKernel(Array.from(rows, (index) => profiles[index]!));
+  const energies = Array.from(rows, (index) => input.points[index]!.energyKeV).join(' ');
+  const kernel = rememberedKernel(input.stopping, energies, () =>
+    compileKernel(Array.from(rows, (index) => profiles[index]!)),
+  );
   const shapeCount = trial.shape.length;
   const seen = RESPONSES[input.response.kind].seen?.(trial, input) ?? trial;
   const whitener = whitenerOf(input, rows);
   const unit = new Float64Array(rows.length).fill(1);
   whiten(whitener, unit);
+  const lattice = {
+    capNm: input.capThicknessNm,
+    scale: table[table.length - 1]!.neutral,
+    heldShape: table.slice(0, shapeCount).map((row) => (row.held ? row.neutral : null)),
+    deepestNm,
+    enabled: Array.from(rows, (index) => input.points[index]!.enabled),
+  };
+  const folds = rememberedLattice(
+    input.stopping,
+    JSON.stringify([energies, lattice, whatIsFolded(input)]),
+    () => foldLattice({ kernel, trial: seen, ...lattice }),
+  );
   const priorInverseSigma = Float64Array.from(table, (row) =>
     row.prior ? 1 / row.prior.sigma : 0,
   );
@@ -174,13 +200,7 @@ function compileModel(
     priorInverseSigma,
     whitener,
     unit,
-    grid: buildSearchGrid({
-      kernel,
-      trial: seen,
-      capNm: input.capThicknessNm,
-      scale: table[table.length - 1]!.neutral,
-      heldShape: table.slice(0, shapeCount).map((row) => (row.held ? row.neutral : null)),
-      deepestNm,
+    grid: weighLattice(folds, {
       whitener,
       unit,
       levelPriors: priorInverseSigma.subarray(shapeCount, table.length - 1),

@@ -9,7 +9,7 @@ import { createShareFold } from './workspace';
 /** Bins of the stopping profiles that a smooth profile is searched with. A sharp edge takes no more time on the bins of the file. */
 const COARSE_BINS = 56;
 
-export interface GridInput {
+export interface LatticeInput {
   kernel: Kernel;
   trial: TrialProfile;
   capNm: number;
@@ -18,15 +18,28 @@ export interface GridInput {
   /** Held value of each shape parameter, or null. */
   heldShape: readonly (number | null)[];
   deepestNm: number;
+  /** Rows that are used: they say where the stops are. */
+  enabled: readonly boolean[];
+}
+
+export interface LevelWeights {
   whitener: Whitener;
   unit: Float64Array;
   /** 1/σ of the priors of the levels. */
   levelPriors: Float64Array;
 }
 
-/** Whitened folds and normal matrices of the levels on the search lattice. */
-export function buildSearchGrid(input: GridInput): SearchGrid {
-  const { trial, capNm, scale, whitener } = input;
+/** Folds of the lattice before any uncertainty counts. */
+export interface LatticeFolds {
+  axes: readonly Float64Array[];
+  /** S, row-major by node. */
+  shares: Float64Array;
+  /** q */
+  capShare: Float64Array;
+}
+
+export function foldLattice(input: LatticeInput): LatticeFolds {
+  const { trial, capNm, scale } = input;
   const { rowCount } = input.kernel;
   const kernel = trial.kinked ? input.kernel : coarsenKernel(input.kernel, COARSE_BINS);
   const axes = trial
@@ -42,20 +55,31 @@ export function buildSearchGrid(input: GridInput): SearchGrid {
   const shares = new Float64Array(nodeCount * rowCount);
   const capShare = new Float64Array(rowCount);
   if (capNm > 0) foldStart(input.kernel, capNm / scale, capShare, new Float64Array(rowCount));
-  whiten(whitener, capShare);
   const fold = createShareFold({ rowCount, kernel, shapeCount: axes.length });
   fold.derivatives = false;
   const shape = new Float64Array(axes.length);
-  const levelCount = input.levelPriors.length;
-  const grams = new Float64Array(nodeCount * levelCount * levelCount);
   for (let node = 0; node < nodeCount; node++) {
     shapeOfNode(axes, node, shape);
     trial.fold(kernel, shape, capNm, scale, fold);
     shares.set(fold.share, node * rowCount);
-    whiten(whitener, shares, node * rowCount);
-    fillGram(input, shares, node, capShare, grams);
   }
-  return { nodeCount, axes, shares, capShare, grams };
+  return { axes, shares, capShare };
+}
+
+/** Whitened folds and normal matrices of the levels on the search lattice. */
+export function weighLattice(folds: LatticeFolds, weights: LevelWeights): SearchGrid {
+  const { whitener, unit, levelPriors } = weights;
+  const rowCount = unit.length;
+  const nodeCount = folds.shares.length / rowCount;
+  const shares = Float64Array.from(folds.shares);
+  const capShare = Float64Array.from(folds.capShare);
+  whiten(whitener, capShare);
+  const grams = new Float64Array(nodeCount * levelPriors.length ** 2);
+  for (let node = 0; node < nodeCount; node++) {
+    whiten(whitener, shares, node * rowCount);
+    fillGram(weights, shares, node, capShare, grams);
+  }
+  return { nodeCount, axes: folds.axes, shares, capShare, grams };
 }
 
 /** Values of the shape at a node, the first parameter changing fastest. */
@@ -75,7 +99,7 @@ export function shapeOfNode(
 
 /** Gram matrix of the columns 1 − q − S, S and q, and the priors. */
 function fillGram(
-  { unit, levelPriors }: GridInput,
+  { unit, levelPriors }: LevelWeights,
   shares: Float64Array,
   node: number,
   capShare: Float64Array,
@@ -104,7 +128,7 @@ function fillGram(
 
 /** Depths denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
 function blendedDepths(
-  { kernel, capNm, scale, deepestNm, whitener }: GridInput,
+  { kernel, capNm, scale, deepestNm, enabled }: LatticeInput,
   count: number,
 ): Float64Array {
   const fine = 128;
@@ -116,7 +140,7 @@ function blendedDepths(
     let sum = 0;
     let used = 0;
     for (let i = 0; i < share.length; i++) {
-      if (whitener.inverseSigma[i] === 0) continue;
+      if (!enabled[i]) continue;
       sum += share[i]!;
       used++;
     }
