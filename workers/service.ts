@@ -21,8 +21,9 @@ import type { FirstAnswer, InversionApi, Reply, ResampleBlock } from './protocol
 
 /** A stop is seen at least this often, ms. */
 const BREATH_MS = 40;
-/** Rows between two looks at the clock. */
-const SLICE = 5;
+/** Rows between two looks at the clock: few at first, and twice as many while a slice takes next to no time. */
+const FIRST_SLICE = 5;
+const QUICK_MS = 4;
 
 interface Job {
   prepared: PreparedFit;
@@ -99,14 +100,13 @@ async function resampleBreathing(
 ): Promise<Float64Array | null> {
   const parts: Float64Array[] = [];
   let breathed = performance.now();
-  for (let done = 0; done < count; done += SLICE) {
-    parts.push(
-      resample(prepared, answer, {
-        seed,
-        first: first + done,
-        count: Math.min(SLICE, count - done),
-      }),
-    );
+  let slice = FIRST_SLICE;
+  for (let done = 0; done < count;) {
+    const from = performance.now();
+    const rows = Math.min(slice, count - done);
+    parts.push(resample(prepared, answer, { seed, first: first + done, count: rows }));
+    done += rows;
+    if (performance.now() - from < QUICK_MS) slice *= 2;
     if (performance.now() - breathed < BREATH_MS) continue;
     await breathe();
     if (!open()) return null;
