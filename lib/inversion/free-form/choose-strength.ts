@@ -32,8 +32,9 @@ export function chooseStrength(
 }
 
 /**
- * Discrepancy principle (Morozov, Soviet Math. Doklady 7, 414 (1966)): the strength at which χ² equals the number of points. χ² rises with µ, with the
- * constraint as well as without, so the root in ln µ is found by regula falsi (Illinois) between two points of the curve.
+ * Discrepancy principle (Morozov, Soviet Math. Doklady 7, 414 (1966)): the strength at which χ² equals the number of points. χ²
+ * rises with µ, with the constraint as well as without, so the root in ln µ is found by regula falsi (Illinois) between two
+ * points of the curve. Where χ² is smaller everywhere the strongest of the curve is chosen; where it is larger everywhere, none.
  */
 export function byDiscrepancy(
   problem: PenalisedProblem,
@@ -45,8 +46,8 @@ export function byDiscrepancy(
   const above = rising.findIndex(({ chiSquare }) => chiSquare >= points);
   if (above < 0) {
     return {
-      strength: null,
-      note: 'No strength gives χ² equal to the number of points: even the smoothest profile lies closer to them.',
+      strength: rising[rising.length - 1]!.strength,
+      note: 'No strength gives χ² equal to the number of points: even the smoothest profile lies closer to them, and is taken.',
     };
   }
   if (above === 0) {
@@ -84,9 +85,9 @@ export function byDiscrepancy(
 }
 
 /**
- * Generalised cross-validation (Golub, Heath and Wahba 1979): the strength of the smallest n·χ²/(n − p)², p the effective parameters. With the constraint p
- * is the trace over the columns that are not at zero, so the score jumps where that set changes and the minimum is the best of the curve
- * polished between its neighbours by Brent's method.
+ * Generalised cross-validation (Golub, Heath and Wahba 1979): the strength of the smallest n·χ²/(n − p)², p the effective
+ * parameters. With the constraint p is the trace over the columns that are not at zero, so the score jumps where that set
+ * changes and the minimum is the best of the curve polished between its neighbours by Brent's method.
  */
 export function byCrossValidation(
   problem: PenalisedProblem,
@@ -123,9 +124,10 @@ export function byCrossValidation(
 }
 
 /**
- * Corner of the L-curve (Hansen, SIAM Review 34, 561 (1992)): the point of the curve with the largest curvature of ln‖Lx − t‖ against ln‖Kx − y‖. The direction of
- * the curve is known at each point, not differenced: dχ²/dµ = −µ·d‖Lx − t‖²/dµ (with the constraint too, as neither x nor the multipliers
- * enter to first order), so its slope is −χ²/(µ‖Lx − t‖²); curvature is the change of that angle over the chords to both neighbours.
+ * Corner of the L-curve (Hansen, SIAM Review 34, 561 (1992)): the point of the curve with the largest curvature of ln‖Lx − t‖
+ * against ln‖Kx − y‖. The direction of the curve is known at each point, not differenced: dχ²/dµ = −µ·d‖Lx − t‖²/dµ (with the
+ * constraint too, as neither x nor the multipliers enter to first order), so its slope is −χ²/(µ‖Lx − t‖²); curvature is the
+ * change of that angle over the chords to both neighbours.
  */
 export function byCorner(curve: readonly CurvePoint[]): StrengthChoice {
   const points = [...curve]

@@ -28,9 +28,10 @@ export function createColumnSolver(rows: number, columns: number): ColumnSolver 
 const DEPENDENT = 1e-14;
 
 /**
- * QR of the columns chosen[0 … count) of A by Householder reflections (Golub and Van Loan, Matrix Computations, section 5.2); normal
- * equations are never formed, so no digits are lost to the square of A. extent[j] is the number of leading rows of column j that hold
- * anything: below the largest extent so far there is nothing to eliminate, which keeps the banded rows of a difference operator cheap.
+ * QR of the columns chosen[0 … count) of A by Householder reflections (Golub and Van Loan, Matrix Computations, section 5.2);
+ * normal equations are never formed, so no digits are lost to the square of A. extent[j] is the number of leading rows of
+ * column j that hold anything: below the largest extent so far there is nothing to eliminate, which keeps the banded rows of a
+ * difference operator cheap.
  *
  * @returns false where the columns are dependent to rounding, or more than the rows.
  */

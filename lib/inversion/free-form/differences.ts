@@ -1,10 +1,10 @@
 import type { ColumnMatrix } from './penalised';
 
 /**
- * First or second difference over uneven knots, as a matrix L by columns. First: (u_{j+1} − u_j)/√h_j with h_j = x_{j+1} − x_j, so that
- * ‖Lu‖² = Σ (Δu)²/h is ∫(u′)² dx exactly for u linear between knots (unit of u squared per nm). Second: the change of slope at each
- * inner knot over √h̄, h̄ = (h_{j−1} + h_j)/2, so that ‖Lu‖² = Σ (Δu′/h̄)²·h̄ approximates ∫(u″)² dx between the middles of the first and the
- * last interval (unit of u squared per nm³), and does so exactly for a parabola.
+ * First or second difference over uneven knots, as a matrix L by columns. First: (u_{j+1} − u_j)/√h_j with h_j = x_{j+1} − x_j,
+ * so that ‖Lu‖² = Σ (Δu)²/h is ∫(u′)² dx exactly for u linear between knots (unit of u squared per nm). Second: the change of
+ * slope at each inner knot over √h̄, h̄ = (h_{j−1} + h_j)/2, so that ‖Lu‖² = Σ (Δu′/h̄)²·h̄ approximates ∫(u″)² dx between the
+ * middles of the first and the last interval (unit of u squared per nm³), and does so exactly for a parabola.
  */
 export function differenceOperator(knotsNm: ArrayLike<number>, order: 1 | 2): ColumnMatrix {
   const columns = knotsNm.length;

@@ -16,8 +16,9 @@ const TAIL_68 = 0.15865525393145707;
 const TAIL_95 = 0.025;
 
 /**
- * Pointwise 68 and 95 % quantiles over resampled profiles (linear between order statistics). They are those of the unknown u, turned into values
- * afterwards, so that a quantile above a ceiling is simply above it. What the bands leave out: resampleFreeForm.
+ * Pointwise 68 and 95 % quantiles over resampled profiles (linear between order statistics). They are those of the unknown u,
+ * turned into values afterwards, so that a quantile above a ceiling is simply above it. What the bands leave out:
+ * resampleFreeForm.
  *
  * @param rows row-major, as resampleFreeForm gives them, from any number of blocks.
  * @throws InversionError 'bad-rows' when rows do not fill whole rows, or fewer than two of them were solved.

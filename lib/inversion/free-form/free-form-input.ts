@@ -7,9 +7,9 @@ import { MAX_KNOTS } from './knots';
 export type Monotonic = 'no' | 'rising' | 'falling';
 
 /**
- * What a free-form profile depends on. Of `parameters` it reads levelTop and levelBulk (held; a capture rate needs neither), levelCap
- * (held, free, or with a prior, which counts as one more observation) and depthScale (held, or with its prior: then the prior mean is used and its
- * uncertainty enters the bands).
+ * What a free-form profile depends on. Of `parameters` it reads levelTop and levelBulk (held; a capture rate needs neither),
+ * levelCap (held, free, or with a prior, which counts as one more observation) and depthScale (held, or with its prior: then
+ * the prior mean is used and its uncertainty enters the bands).
  */
 export interface FreeFormInput extends Pick<
   FitInput,

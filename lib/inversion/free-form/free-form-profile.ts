@@ -4,7 +4,10 @@ import type { PreparedFreeForm } from './prepare-free-form';
 import type { FreeFormSolution } from './solve-free-form';
 import { valueAtDepth } from './value-at-depth';
 
-/** A point of a free-form profile; a value or an end of a band is null above the ceiling of a saturating fraction, or without bands. */
+/**
+ * A point of a free-form profile; a value or an end of a band is null above the ceiling of a saturating fraction, or without
+ * bands.
+ */
 export interface FreeFormPoint {
   depthNm: number;
   value: number | null;
@@ -27,8 +30,9 @@ export interface FreeFormProfile {
 const EVEN = 200;
 
 /**
- * The profile of a free-form solution over depth: value, bands and flag. The unknown is linear between knots and constant beyond the last, the
- * value follows from it point by point. 'beyond reach' is below the 95 % stopping quantile of the deepest enabled energy.
+ * The profile of a free-form solution over depth: value, bands and flag. The unknown is linear between knots and constant
+ * beyond the last, the value follows from it point by point. 'beyond reach' is below the 95 % stopping quantile of the deepest
+ * enabled energy.
  *
  * @param options.depthsNm depths wanted, nm below the cap; those of the bands, or the knots and 200 even steps, when left out.
  */

@@ -54,10 +54,10 @@ function tailAt({ edgesNm, density, tail }: KernelGroup, r: number, zNm: number)
 }
 
 /**
- * H_ij = ∫ρ_i(x)·hat_j(x) dx over the depths below the cap, with hat_j linear between knots, 1 at its own and 0 at the others; the first and
- * the last hat stay 1 outside the knots. Depths of the file are scaled by `scale` and counted from below the cap of capNm. Exact: the
- * share that has risen between two knots is (R(x_j) − R(x_{j+1}))/(x_{j+1} − x_j), and a hat is the difference of two of these.
- * Σ_j H_ij is the share that passed the cap.
+ * H_ij = ∫ρ_i(x)·hat_j(x) dx over the depths below the cap, with hat_j linear between knots, 1 at its own and 0 at the others;
+ * the first and the last hat stay 1 outside the knots. Depths of the file are scaled by `scale` and counted from below the cap
+ * of capNm. Exact: the share that has risen between two knots is (R(x_j) − R(x_{j+1}))/(x_{j+1} − x_j), and a hat is the
+ * difference of two of these. Σ_j H_ij is the share that passed the cap.
  */
 export function hatDesign(
   { kernel, ramps }: RampKernel,

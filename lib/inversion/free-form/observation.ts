@@ -17,8 +17,8 @@ export function priorRows(cap: CapLevel): 0 | 1 {
 }
 
 /**
- * How the points follow from the unknowns: ŷ_i = base·(1 − q_i) + slope·Σ_j H_ij u_j + cap·q_i, with q_i the share that stopped in the cap. Columns are
- * the knots, and the cap level where it is free. A prior of the cap level is one more row.
+ * How the points follow from the unknowns: ŷ_i = base·(1 − q_i) + slope·Σ_j H_ij u_j + cap·q_i, with q_i the share that stopped
+ * in the cap. Columns are the knots, and the cap level where it is free. A prior of the cap level is one more row.
  */
 export interface Observation {
   ramps: RampKernel;
@@ -91,8 +91,8 @@ export function predictRows(
 }
 
 /**
- * Columns of A to those of A·C in place, with u = C·d the sum of steps d ≥ 0 that makes u monotonic: rising, u_j = d_0 + … + d_j; falling,
- * u_j = d_j + … + d_last. Columns after the knots stay.
+ * Columns of A to those of A·C in place, with u = C·d the sum of steps d ≥ 0 that makes u monotonic: rising, u_j = d_0 + … +
+ * d_j; falling, u_j = d_j + … + d_last. Columns after the knots stay.
  */
 export function toSteps({ rows, values }: ColumnMatrix, knots: number, way: Monotonic): void {
   if (way === 'no') return;

@@ -19,10 +19,10 @@ const PER_S_IN_PER_US = 1e6;
 /**
  * The unknown u of each response, chosen so that the data are linear in it:
  * - capture rate: u = γ·p (µs⁻¹), Λ = u + Λ₀, p = u·10⁶/γ;
- * - two-level: u = populated share π, y = empty + (populated − empty)·π, with the level of the poor side of the edge as empty; p follows from π as in
- *   response/two-level.ts. π may come out above 1: the scan then asks for more than the held level gives;
- * - saturating fraction: u = occupied share h = p/(p + p_half), y = y₀ + y′·h through the held levels at the concentrations p_top and p_bulk;
- *   p = p_half·h/(1 − h), and h ≥ 1 is above the ceiling (null).
+ * - two-level: u = populated share π, y = empty + (populated − empty)·π, the empty level being that of the poor side of the edge;
+ *   p follows from π as in response/two-level.ts. π may come out above 1: the scan then asks for more than the held level gives;
+ * - saturating fraction: u = occupied share h = p/(p + p_half), in which y is linear, through the held levels at the
+ *   concentrations p_top and p_bulk; p = p_half·h/(1 − h), and h ≥ 1 is above the ceiling (null).
  *
  * Levels must be held, as the profile takes up whatever a level leaves: base and slope of u are not decided by the data.
  *

@@ -16,8 +16,8 @@ export interface ColumnMatrix {
 }
 
 /**
- * min ‖K x − y‖² + µ·‖L x − t‖², with K and y whitened, and x ≥ 0 unless the problem is unconstrained. t = L u₀ draws the solution
- * towards a reference u₀; zero draws it towards smoothness alone.
+ * min ‖K x − y‖² + µ·‖L x − t‖², with K and y whitened, and x ≥ 0 unless the problem is unconstrained. t = L u₀ draws the
+ * solution towards a reference u₀; zero draws it towards smoothness alone.
  */
 export interface PenalisedProblem {
   design: ColumnMatrix;

@@ -11,12 +11,12 @@ import type { FreeFormSolution } from './solve-free-form';
 const SCALE_ENDS = [0.5, 2] as const;
 
 /**
- * Resamples at the strength of the solution: for each row noise of covariance V is added to the observations (and to the prior mean of a free cap level)
- * and the profile is found again; where the depth scale is not held it is drawn from its prior and the folds are made again. The noise goes on the
- * observations and not on ŷ: ŷ is smoothed already, and finding it again would smooth twice and leave the profile at the edge of its own band.
- * The rows tell what noise and depth scale do to a profile as smooth as this one. They do not hold what smoothing itself takes away: an edge
- * sharper than the resolution looks equally rounded in every row, so a band must be read beside the averaging kernels.
- * Row r depends only on (seed, first + r).
+ * Resamples at the strength of the solution: for each row noise of covariance V is added to the observations (and to the prior
+ * mean of a free cap level) and the profile is found again; where the depth scale is not held it is drawn from its prior and
+ * the folds are made again. The noise goes on the observations and not on ŷ: ŷ is smoothed already, and finding it again would
+ * smooth twice and leave the profile at the edge of its own band. The rows tell what noise and depth scale do to a profile as
+ * smooth as this one. They do not hold what smoothing itself takes away: an edge sharper than the resolution looks equally
+ * rounded in every row, so a band must be read beside the averaging kernels. Row r depends only on (seed, first + r).
  *
  * @returns row-major count × unknowns: u per knot, then the cap level where it is free; NaN in a row that could not be solved.
  * @throws InversionError 'bad-block'.

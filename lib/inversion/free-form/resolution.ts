@@ -3,9 +3,9 @@ import { stackedExtent, stackMatrix, type ColumnMatrix } from './penalised';
 
 export interface Resolution {
   /**
-   * Averaging kernels (Backus and Gilbert, Geophys. J. R. astr. Soc. 16, 169 (1968)): row j says how the value found at knot j answers to the true values at all knots.
-   * A row with its weight far from its knot, or spread wide, is a value that the scan does not resolve. To draw it over depth, divide entry k by
-   * the area of hat k.
+   * Averaging kernels (Backus and Gilbert, Geophys. J. R. astr. Soc. 16, 169 (1968)): row j says how the value found at knot j
+   * answers to the true values at all knots. A row with its weight far from its knot, or spread wide, is a value that the scan
+   * does not resolve. To draw it over depth, divide entry k by the area of hat k.
    */
   kernels: readonly (readonly number[])[];
   /** Trace of the matrix: how many numbers the data decide. */
@@ -13,8 +13,8 @@ export interface Resolution {
 }
 
 /**
- * R = (KᵀK + µLᵀL)⁻¹KᵀK of the problem without constraint, K whitened; by QR of [K; √µ L], column by column as the least-squares answer to
- * [K e_k; 0]. Null where the columns are dependent to rounding.
+ * R = (KᵀK + µLᵀL)⁻¹KᵀK of the problem without constraint, K whitened; by QR of [K; √µ L], column by column as the
+ * least-squares answer to [K e_k; 0]. Null where the columns are dependent to rounding.
  */
 export function resolutionMatrix(
   design: ColumnMatrix,
@@ -26,8 +26,9 @@ export function resolutionMatrix(
 }
 
 /**
- * The same with only the chosen columns free and the others at zero: how the constrained solution answers as long as the set of zeros
- * stays. `answers` holds what the true values do to the data (K by the knots), `toKnots` takes a solution to values at the knots.
+ * The same with only the chosen columns free and the others at zero: how the constrained solution answers as long as the set of
+ * zeros stays. `answers` holds what the true values do to the data (K by the knots), `toKnots` takes a solution to values at
+ * the knots.
  */
 export function resolutionOn(
   problem: {

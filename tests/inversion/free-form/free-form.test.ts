@@ -16,8 +16,9 @@ import { largestDifference } from './support/compare';
 import { EDGE_LEVELS, edgeShare, freeFraction, freeRate, LEVELS, scanOf } from './support/inputs';
 
 describe('a free-form profile of a simulated graded edge', () => {
-  // The band holds noise alone; what smoothing takes away is (R − 1)·truth. Together they should hold the truth at 95 % of the depths;
-  // 98 and 99.8 % were seen over these scans, and 66 and 76 % with the bands alone, so that a band without the smoothing, or a wrong resolution, fails.
+  // The band holds noise alone; what smoothing takes away is (R − 1)·truth. Together they should hold the truth at 95 % of the
+  // depths; 98 and 99.8 % were seen over these scans, and 66 and 76 % with the bands alone, so that a band without the
+  // smoothing, or a wrong resolution, fails.
   it.each(['no', 'rising'] as const)(
     'holds the truth within its band and its smoothing: monotonic %s',
     (monotonic) => {
@@ -53,7 +54,8 @@ describe('a free-form profile of a simulated graded edge', () => {
     expect(sum).toBeCloseTo(13, 9);
   });
 
-  // Source: the fold of a graded edge, another way through the library. The profile is linear between knots 0.1 to 12 nm apart, which moves a fold by some 1e-4.
+  // Source: the fold of a graded edge, another way through the library. The profile is linear between knots 0.1 to 12 nm apart,
+  // which moves a fold by some 1e-4.
   it('folds a known edge as the trial profile folds it', () => {
     const prepared = prepareFreeForm(
       freeFraction({

@@ -88,7 +88,8 @@ function byQuadrature(
 }
 
 describe('the fold of a profile that is linear between knots', () => {
-  // Source: quadrature that is exact on each piece. Second differences of ramps as deep as 300 nm over gaps of 0.05 nm lose 1e-16·300/0.05.
+  // Source: quadrature that is exact on each piece. Second differences of ramps as deep as 300 nm over gaps of 0.05 nm lose
+  // 1e-16·300/0.05.
   it('is exact for every hat, cap and depth scale', () => {
     fc.assert(
       fc.property(histogram, knots, capNm, scale, (table, depths, cap, a) => {

@@ -82,3 +82,29 @@ describe('a free-form profile', () => {
     expect(held.chiSquare).toBeCloseTo(free.chiSquare, 9);
   });
 });
+
+describe('a point that is switched off', () => {
+  // Rows of a covariance that are out of use are integrated out: what is left is the block of the others.
+  it('counts as little as one that was never measured, and keeps its residual', () => {
+    const n = VALUES.length;
+    const covariance = Array.from({ length: n }, (_, i) =>
+      Array.from({ length: n }, (__, j) => 0.05 ** 2 * (i === j ? 1 : 0.7 ** Math.abs(i - j))),
+    );
+    const whole = { ...withValues(freeRate(), VALUES), covariance };
+    const off = {
+      ...whole,
+      points: whole.points.map((point, i) => ({ ...point, enabled: i !== 4 })),
+    };
+    const without = {
+      ...whole,
+      points: whole.points.filter((_, i) => i !== 4),
+      covariance: covariance.filter((_, i) => i !== 4).map((row) => row.filter((_, j) => j !== 4)),
+    };
+    const [a, b] = [off, without].map((input) => freeFormAt(prepareFreeForm(input), 50));
+    expect(largestDifference(a!.unknowns, b!.unknowns)).toBeLessThan(1e-10);
+    expect(a!.chiSquare).toBeCloseTo(b!.chiSquare, 10);
+    expect(a!.residuals.length).toBe(n);
+    expect(a!.residuals[4]!.enabled).toBe(false);
+    expect(freeFormAt(prepareFreeForm(whole), 50).chiSquare).not.toBeCloseTo(b!.chiSquare, 4);
+  });
+});

@@ -14,7 +14,10 @@ interface Drawn {
   start: Float64Array;
 }
 
-/** Random systems: dense, with zero blocks below, tall and wide, columns of very different size, b inside the cone or far from it. */
+/**
+ * Random systems: dense, with zero blocks below, tall and wide, columns of very different size, b inside the cone or far from
+ * it.
+ */
 const drawn = fc
   .record({
     seed: fc.integer(),
@@ -65,7 +68,10 @@ function residualOf({ rows, columns, matrix, b }: LinearSystem, x: Float64Array)
   });
 }
 
-/** Minimum by trying every set of zeros: each candidate by ordinary least squares (normal equations), the best feasible one kept. */
+/**
+ * Minimum by trying every set of zeros: each candidate by ordinary least squares (normal equations), the best feasible one
+ * kept.
+ */
 function byEverySet({ rows, columns, matrix, b }: LinearSystem): number {
   let best = norm(b);
   for (let set = 1; set < 1 << columns; set++) {
@@ -134,7 +140,8 @@ describe('non-negative least squares', () => {
         const cold = solve({ ...each, start: new Float64Array(each.system.columns) });
         const warm = solve({ ...each, start: new Float64Array(each.system.columns).fill(1) });
         const size = Math.max(norm(cold.x), norm(warm.x));
-        // Square dense systems of twelve columns can have a condition of 1e5 and more: the values are compared by what they do to b.
+        // Square dense systems of twelve columns can have a condition of 1e5 and more: the values are compared by what they do
+        // to b.
         const [a, b] = [residualOf(each.system, cold.x), residualOf(each.system, warm.x)];
         expect(largestDifference(a, b) * norm(b)).toBeLessThan(1e-9 * (1 + size));
       }),

@@ -96,7 +96,8 @@ describe('the resamples of a free-form profile', () => {
       const middle = column.reduce((sum, value) => sum + value, 0) / 400;
       return Math.sqrt(column.reduce((sum, value) => sum + (value - middle) ** 2, 0) / 399);
     };
-    // A constant from 13 points: σ/√13 where they are independent, σ·√(0.9 + 0.1/13) where they share nine tenths of their variance.
+    // A constant from 13 points: σ/√13 where they are independent, σ·√(0.9 + 0.1/13) where they share nine tenths of their
+    // variance.
     expect(Math.abs(mean([plain]) / (0.05 / Math.sqrt(13)) - 1)).toBeLessThan(0.15);
     expect(
       Math.abs(mean([{ ...plain, covariance }]) / (0.05 * Math.sqrt(0.9 + 0.1 / 13)) - 1),

@@ -91,7 +91,8 @@ describe('the resolution matrix', () => {
     }
   });
 
-  // A small change of the truth moves the constrained solution as its own resolution says, as long as the same values are at zero.
+  // A small change of the truth moves the constrained solution as its own resolution says, as long as the same values are at
+  // zero.
   it.each([
     { monotonic: 'no', difference: 1 },
     { monotonic: 'rising', difference: 1 },

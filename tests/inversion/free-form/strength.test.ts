@@ -44,7 +44,8 @@ describe('the curve over the strength of the penalty', () => {
     },
   );
 
-  // Source: at the minimum neither x nor a multiplier changes Φ = χ² + µη² to first order, so dχ² = −µ dη², with the constraint too.
+  // Source: at the minimum neither x nor a multiplier changes Φ = χ² + µη² to first order, so dχ² = −µ dη², with the constraint
+  // too.
   it.each(KINDS)('has dχ² = −µ d‖Lu‖² along it: $difference, $monotonic', (kind) => {
     const prepared = prepareFreeForm(scan(3, kind));
     for (const power of [-2, 0, 2, 4]) {
@@ -128,7 +129,7 @@ describe('the choice of the strength', () => {
     expect(few.curve.map(({ strength }) => strength)).toEqual([1e5, 1000, 100, 10]);
   });
 
-  it('says where no strength makes χ² the number of points, and leaves the choice to cross-validation', () => {
+  it('says where no strength makes χ² the number of points, and takes the smoothest, or leaves the choice to another rule', () => {
     // A constant: the smoothest profile hits every point.
     const flat = freeRate();
     const constant = solveFreeForm(
@@ -139,9 +140,9 @@ describe('the choice of the strength', () => {
         ),
       ),
     );
-    expect(constant.choices.discrepancy.strength).toBe(null);
+    expect(constant.strength).toBe(constant.curve[0]!.strength);
     expect(constant.choices.discrepancy.note).toMatch(/even the smoothest/);
-    expect(constant.chosenBy).toBe('gcv');
+    expect(constant.chosenBy).toBe('discrepancy');
     expect(constant.chiSquare).toBeLessThan(1e-9);
     // Points that scatter by forty σ from one energy to the next: no profile can do that.
     const scatter = solveFreeForm(
@@ -154,7 +155,8 @@ describe('the choice of the strength', () => {
     );
     expect(scatter.choices.discrepancy.strength).toBe(null);
     expect(scatter.choices.discrepancy.note).toMatch(/even the roughest/);
-    expect(scatter.chosenBy).toBe('gcv');
+    expect(scatter.choices.corner.strength).not.toBe(null);
+    expect(scatter.chosenBy).toBe('corner');
   });
 
   it('gives a profile also where everything is at zero', () => {

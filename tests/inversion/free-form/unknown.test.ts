@@ -9,7 +9,8 @@ import {
   type FreeFormInput,
   type ParameterValues,
 } from '@/lib/inversion/index';
-import { fractionInput, heldAt, rateInput } from '../support/scans';
+import { fractionInput, freeWith, heldAt, rateInput } from '../support/scans';
+import { largestDifference } from './support/compare';
 import { EDGE, EDGE_LEVELS, freeFraction, freeRate, withValues } from './support/inputs';
 
 describe('what the unknown stands for', () => {
@@ -61,7 +62,8 @@ describe('what the unknown stands for', () => {
     );
   });
 
-  // Source: F = F_pop + (F_free − F_pop)/(1 + p/p_half) with p linear in depth below 60 nm, folded by the midpoint rule on bins of 1 nm split in 20.
+  // Source: F = F_pop + (F_free − F_pop)/(1 + p/p_half) with p linear in depth below 60 nm, folded by the midpoint rule on bins
+  // of 1 nm split in 20.
   it('is the occupied share of a saturating fraction, turned into p afterwards', () => {
     const half = 3e15;
     const [free, populated] = [0.8, 0.25];
@@ -121,5 +123,26 @@ describe('what the unknown stands for', () => {
     const shift = unknowns[0]! - reference[0]!;
     unknowns.forEach((u, j) => expect(u - reference[j]!).toBeCloseTo(shift, 5));
     expect(roughness).toBeLessThan(1e-6);
+  });
+});
+
+describe('the cap level', () => {
+  // A prior is one more observation: χ² holds ((level − mean)/σ)² beside the points, and the level lies between the two.
+  it('with a prior is one more observation', () => {
+    const template = freeRate({ capThicknessNm: 8, difference: 2 });
+    const values = template.points.map((_, i) => 0.3 + 0.1 * i);
+    const at = (parameters: FreeFormInput['parameters']): ReturnType<typeof freeFormAt> =>
+      freeFormAt(prepareFreeForm({ ...withValues(template, values), parameters }), 1e4);
+    const free = at({});
+    const sigma = 0.5;
+    const pulled = at({ levelCap: freeWith(free.levelCap! + 0.2, sigma) });
+    const points = pulled.residuals.reduce((sum, { reduced }) => sum + reduced ** 2, 0);
+    const prior = (free.levelCap! + 0.2 - pulled.levelCap!) / sigma;
+    expect(pulled.chiSquare / (points + prior ** 2)).toBeCloseTo(1, 9);
+    expect(pulled.levelCap!).toBeGreaterThan(free.levelCap! + 0.01);
+    expect(pulled.levelCap!).toBeLessThan(free.levelCap! + 0.19);
+    const narrow = at({ levelCap: freeWith(free.levelCap! + 0.2, 1e-6) });
+    const held = at({ levelCap: heldAt(free.levelCap! + 0.2) });
+    expect(largestDifference(narrow.unknowns, held.unknowns)).toBeLessThan(1e-6);
   });
 });

@@ -7,8 +7,8 @@ export interface TestProblem {
 }
 
 /**
- * Test problems of P. C. Hansen, Regularization Tools, Numer. Algorithms 6, 1 (1994): the closed formulas of its routines of the same names, written from
- * memory. tests/reference/free-form.py has the same matrices from the integrals themselves.
+ * Test problems of P. C. Hansen, Regularization Tools, Numer. Algorithms 6, 1 (1994): the closed formulas of its routines of
+ * the same names, written from memory. tests/reference/free-form.py has the same matrices from the integrals themselves.
  */
 export const HANSEN: Readonly<Record<string, (n: number) => TestProblem>> = {
   shaw,

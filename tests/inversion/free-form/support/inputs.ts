@@ -34,7 +34,10 @@ export const scanOf = (seed: number, change: Partial<FreeFormInput> = {}): FreeF
     points: simulateScan({ input: fractionInput({}, 0.005), values: EDGE_LEVELS, seed }),
   });
 
-/** The share of that edge, ½ erfc((W − x)/(√2 w)) by Simpson's rule on the normal density: an integral of its own, good to 1e-10 here. */
+/**
+ * The share of that edge, ½ erfc((W − x)/(√2 w)) by Simpson's rule on the normal density: an integral of its own, good to 1e-10
+ * here.
+ */
 export function edgeShare(x: number): number {
   const z = (x - EDGE.edgeDepthNm) / EDGE.edgeWidthNm;
   const end = Math.max(-9, Math.min(9, z));
