@@ -11,6 +11,13 @@ export interface Bending {
   byBulk: { at: number; slope: number } | null;
 }
 
+interface Quadrature {
+  nodes: readonly number[];
+  weights: readonly number[];
+}
+const SMOOTH: Quadrature = { nodes: GAUSS_NODES, weights: GAUSS_WEIGHTS };
+const CONSTANT: Quadrature = { nodes: [0], weights: [2] };
+
 /** Shape parameters of the profile with most of them. */
 const MOST_SHAPES = 4;
 const slopes = new Float64Array(1 + MOST_SHAPES);
@@ -58,10 +65,13 @@ function integrate(
     const to = depthsNm[j]!;
     while (from < to) {
       const cut = nextCut(trial, stretches, shape, from, to);
-      const panels = panelsOf(stretches, from, cut);
+      const step = stepAt(stretches, (from + cut) / 2);
+      // Outside every stretch s is constant: its middle says all.
+      const panels = step === Infinity ? 1 : Math.ceil((cut - from) / step);
       const half = (cut - from) / panels / 2;
+      const nodes = step === Infinity ? CONSTANT : SMOOTH;
       for (let p = 0; p < panels; p++)
-        addPanel(trial, bending, steepness, shape, from + (2 * p + 1) * half, half);
+        addPanel(trial, bending, steepness, shape, from + (2 * p + 1) * half, half, nodes);
       from = cut;
     }
     integral[j] = sums[0]!;
@@ -77,12 +87,13 @@ function addPanel(
   shape: ArrayLike<number>,
   middle: number,
   half: number,
+  { nodes, weights }: Quadrature,
 ): void {
   const count = trial.shape.length;
-  for (let g = 0; g < GAUSS_NODES.length; g++) {
-    trial.slopes(middle + half * GAUSS_NODES[g]!, shape, slopes);
+  for (let g = 0; g < nodes.length; g++) {
+    trial.slopes(middle + half * nodes[g]!, shape, slopes);
     const s = slopes[0]!;
-    const weight = half * GAUSS_WEIGHTS[g]!;
+    const weight = half * weights[g]!;
     const below = 1 + steepness * s;
     sums[0] = sums[0]! + (weight * s * (1 + steepness)) / below;
     const bySeen = (weight * (1 + steepness)) / (below * below);
@@ -114,12 +125,12 @@ function nextCut(
   return cut;
 }
 
-function panelsOf(stretches: readonly Stretch[], from: number, to: number): number {
-  const middle = (from + to) / 2;
+/** Widest panel at a depth; Infinity outside every stretch. */
+function stepAt(stretches: readonly Stretch[], depthNm: number): number {
   let step = Infinity;
   for (const { fromNm, toNm, stepNm } of stretches)
-    if (middle > fromNm && middle < toNm) step = Math.min(step, stepNm);
-  return Math.max(1, Math.ceil((to - from) / step));
+    if (depthNm > fromNm && depthNm < toNm) step = Math.min(step, stepNm);
+  return step;
 }
 
 function positionOf({ position }: EdgeParameters, shape: ArrayLike<number>): number {

@@ -1,7 +1,7 @@
 import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
 import { depthParameter, extentParameter, widthAxis } from './edge-parameters';
 import { normalInto } from '../statistics/normal-table';
-import { normalDensity, normalShare, normalStretch } from './normal-share';
+import { normalShare, normalStretch } from './normal-share';
 import type { Stretch, TrialProfile } from './trial-profile';
 
 const DEPTHS = 20;
@@ -80,12 +80,16 @@ export function layer(deepestNm: number): TrialProfile {
 }
 
 function layerSlopes(depthNm: number, shape: ArrayLike<number>, slopes: Float64Array): void {
-  const { near, nearWidth, far, farWidth, from, to } = readEdges(shape);
-  slopes.fill(0);
-  if (depthNm < from || depthNm > to) return;
-  slopes[0] = normalShare(depthNm - near, nearWidth) - normalShare(depthNm - far, farWidth);
-  const rise = nearWidth > 0 ? normalDensity(depthNm - near, nearWidth) / nearWidth : 0;
-  const fall = farWidth > 0 ? normalDensity(depthNm - far, farWidth) / farWidth : 0;
+  const edge = readEdges(shape);
+  const { near, nearWidth, far, farWidth, from, to } = edge;
+  if (depthNm < from || depthNm > to) {
+    slopes.fill(0);
+    return;
+  }
+  normalsAt(depthNm, edge);
+  const rise = nearWidth > 0 ? pdf[NEAR]! / nearWidth : 0;
+  const fall = farWidth > 0 ? pdf[FAR]! / farWidth : 0;
+  slopes[0] = cdf[NEAR]! - cdf[FAR]!;
   slopes[1] = fall - rise;
   slopes[2] = nearWidth > 0 ? (-rise * (depthNm - near)) / nearWidth : 0;
   slopes[3] = fall;

@@ -11,13 +11,6 @@ export function normalShare(distanceNm: number, widthNm: number): number {
   return cdf[0]!;
 }
 
-/** φ((x − W)/w); 0 for a step. */
-export function normalDensity(distanceNm: number, widthNm: number): number {
-  if (widthNm === 0) return 0;
-  normalInto(distanceNm / widthNm, cdf, pdf, 0);
-  return pdf[0]!;
-}
-
 /**
  * A quarter of the width is fine enough for five-point quadrature of a function of Φ to 1e-11: the nearest singularity of
  * 1/(1 + KΦ(t)) lies 0.8 off the real axis for K up to 1e4.
