@@ -1,215 +1,317 @@
-import { foldScan, prepareFit, type FitInput, type PreparedFit } from '@/lib/inversion/index';
-import { free, heldAt } from './scans';
+import {
+  foldScan,
+  type FitInput,
+  type ParameterName,
+  type PreparedFit,
+} from '@/lib/inversion/index';
+import { solveInBox } from './solve-in-box';
+import { nelderMead, patternSearch } from './try-and-see';
 
 /**
- * Minimum of Φ by trying: a dense lattice over the edge (and width), the levels by coordinate descent within their bounds, then a
- * pattern search from the best few nodes. Shares only the fold with the library; search, level solver and polish are its own.
+ * Minimum of Φ by trying: a dense lattice over the shape, the levels solved within their bounds, then Nelder-Mead from the best few
+ * nodes and from places in between, then a pattern search. Shares only the fold with the library; lattice, level solver, χ² and polish
+ * are its own. Bounds and held values are those of the fit: they are the question, not the way to the answer.
  */
 export interface BruteForce {
   chiSquare: number;
-  /** Largest minus smallest χ² over the depths of the lattice. */
+  /** Largest minus smallest χ² over the first parameter of the shape, each at the best of the others. */
   spread: number;
+  /** Where: the shape and the depth scale by name. */
+  at: Partial<Record<ParameterName, number>>;
 }
+
+/** Best nodes of the lattice that are followed, and places away from them. */
+const STARTS = 6;
+const RESTARTS = 2;
+
+const LEVELS: readonly ParameterName[] = ['levelTop', 'levelBulk', 'levelCap'];
+
+/** Folds of the nodes depend on no datum: scans of one profile, cap and response share them. Share of every point, node by node. */
+const folded = new Map<string, Float64Array>();
+const MOST_FOLDED = 12;
 
 interface Shape {
-  edgeDepthNm: number;
-  edgeWidthNm: number;
-  depthScale: number;
+  names: readonly ParameterName[];
+  lower: number[];
+  upper: number[];
+  held: boolean[];
+  /** Values of the lattice. */
+  axes: number[][];
 }
 
-const folders = new Map<
-  string,
-  { prepared: PreparedFit; cap: PreparedFit; memo: Map<string, Float64Array> }
->();
+export function bruteForce(prepared: PreparedFit): BruteForce {
+  const shape = shapeOf(prepared);
+  const phi = objectiveOf(prepared, shape);
+  const nodes = allNodes(shape.axes);
+  const shares = sharesOfNodes(prepared, shape, nodes);
+  const count = prepared.input.points.length;
+  const values = nodes.map((node, k) => phi.of(node, shares.subarray(k * count, (k + 1) * count)));
+  const starts = spreadOut(shape, nodes, values);
+  const free = shape.names.map((_, k) => k).filter((k) => !shape.held[k]);
+  let best = { x: nodes[starts[0]!]!, value: values[starts[0]!]! };
+  starts.forEach((node, order) => {
+    const step = stepsAt(shape, nodes[node]!);
+    const start = order < STARTS ? nodes[node]! : betweenNodes(shape, nodes[node]!, step);
+    const search = { of: (x: readonly number[]) => phi.of(x), free, ...shape };
+    const found = nelderMead(search, start, step);
+    if (found.value < best.value) best = found;
+  });
+  const search = { of: (x: readonly number[]) => phi.of(x), free, ...shape };
+  const again = nelderMead(
+    search,
+    best.x,
+    stepsAt(shape, best.x).map((step) => step / 4),
+  );
+  if (again.value < best.value) best = again;
+  const step = stepsAt(shape, best.x).map((length) => length / 8);
+  best = patternSearch(search, best, step);
+  return {
+    chiSquare: best.value,
+    spread: highestOverFirst(shape, values) - best.value,
+    at: Object.fromEntries(shape.names.map((name, k) => [name, best.x[k]!])),
+  };
+}
 
-/** Populated share and cap share of every point, read off the fold of a fraction with levels 0 and 1. */
-function sharesAt(
-  input: FitInput,
-  { edgeDepthNm, edgeWidthNm, depthScale }: Shape,
-  remember: boolean,
-): Float64Array {
-  const key = `${input.capThicknessNm}`;
-  let folder = folders.get(key);
-  if (!folder) {
-    const plain: FitInput = {
-      ...input,
-      profile: 'graded',
-      observable: 'fraction',
-      response: { kind: 'two-level' },
-      parameters: {
-        depthScale: free,
-        ...(input.capThicknessNm > 0 ? { levelCap: heldAt(0) } : {}),
-      },
-    };
-    folder = { prepared: prepareFit(plain), cap: prepareFit(plain), memo: new Map() };
-    folders.set(key, folder);
+function shapeOf(prepared: PreparedFit): Shape {
+  const { model } = prepared.problem;
+  const at = model.names.map((_, k) => k).filter((k) => !LEVELS.includes(model.names[k]!));
+  const names = at.map((k) => model.names[k]!);
+  const held = at.map((k) => model.held[k] === 1);
+  return {
+    names,
+    lower: at.map((k) => model.lower[k]!),
+    upper: at.map((k) => model.upper[k]!),
+    held,
+    axes: at.map((k, a) => (held[a] ? [model.neutral[k]!] : axisOf(prepared, model.names[k]!))),
+  };
+}
+
+const even = (count: number, highest: number): number[] =>
+  Array.from({ length: count }, (_, k) => (highest * k) / (count - 1));
+
+function axisOf(
+  { input, deepestNm, problem: { model } }: PreparedFit,
+  name: ParameterName,
+): number[] {
+  const layered = input.profile === 'layer';
+  const lengths = (count: number, first: number, factor: number): number[] =>
+    Array.from({ length: count }, (_, k) => first * factor ** k).filter((x) => x < deepestNm);
+  switch (name) {
+    case 'edgeDepthNm':
+      return even(layered ? 41 : 161, deepestNm);
+    case 'layerThicknessNm':
+      return lengths(16, 3, 1.36);
+    case 'edgeWidthNm':
+    case 'farEdgeWidthNm':
+      return [0, ...(layered ? lengths(5, 3, 2.4) : lengths(14, 1, 1.55))];
+    case 'surfacePotentialEv': {
+      const k = model.names.indexOf(name);
+      const bound = model.lower[k]! < 0 ? model.lower[k]! : model.upper[k]!;
+      return even(120, 1).map((share) => bound * share ** 2);
+    }
+    case 'bulkPerCm3': {
+      const { mean, sigma } = input.parameters.bulkPerCm3!.prior!;
+      return [-3, -2, -1, 0, 1, 2, 3].map((k) => mean * Math.exp((k * sigma) / mean));
+    }
+    case 'depthScale':
+      return [input.parameters.depthScale?.prior?.mean ?? 1];
+    default:
+      throw new Error(`There is no lattice of ${name}.`);
   }
-  const name = `${edgeDepthNm} ${edgeWidthNm} ${depthScale}`;
-  const known = folder.memo.get(name);
+}
+
+function allNodes(axes: number[][]): number[][] {
+  return axes.reduce<number[][]>(
+    (nodes, axis) => axis.flatMap((value) => nodes.map((node) => [...node, value])),
+    [[]],
+  );
+}
+
+function sharesOfNodes(prepared: PreparedFit, shape: Shape, nodes: number[][]): Float64Array {
+  const { profile, capThicknessNm, response, carriers, polarity, semiconductor } = prepared.input;
+  const half = response.kind === 'saturating-fraction' ? response.halfPerCm3 : null;
+  const key = JSON.stringify([
+    profile,
+    capThicknessNm,
+    half,
+    carriers,
+    polarity,
+    semiconductor,
+    shape.axes,
+  ]);
+  const known = folded.get(key);
   if (known) return known;
-  const share = foldScan(folder.prepared, {
-    edgeDepthNm,
-    edgeWidthNm,
-    depthScale,
-    levelTop: 0,
-    levelBulk: 1,
-    levelCap: 0,
-  });
-  const cap =
-    input.capThicknessNm > 0
-      ? foldScan(folder.prepared, {
-          edgeDepthNm,
-          edgeWidthNm,
-          depthScale,
-          levelTop: 0,
-          levelBulk: 0,
-          levelCap: 1,
-        })
-      : share.map(() => 0);
-  const both = Float64Array.from([...share, ...cap]);
-  if (remember) folder.memo.set(name, both);
-  return both;
+  const all = nodes.map((node) => shareAt(prepared, shape, node));
+  const count = prepared.input.points.length;
+  const shares = new Float64Array(nodes.length * count);
+  all.forEach((share, k) => shares.set(share, k * count));
+  if (folded.size === MOST_FOLDED) folded.delete(folded.keys().next().value!);
+  folded.set(key, shares);
+  return shares;
 }
 
-function bestLevels(input: FitInput, shares: Float64Array): number {
-  const n = input.points.length;
-  const low = input.response.kind === 'capture-rate' ? input.response.baselinePerUs : 0;
-  const high = input.observable === 'fraction' ? 1 : Infinity;
-  const names =
-    input.capThicknessNm > 0
-      ? (['levelTop', 'levelBulk', 'levelCap'] as const)
-      : (['levelTop', 'levelBulk'] as const);
-  const size = names.length;
-  const column = (k: number, i: number): number =>
-    k === 1 ? shares[i]! : k === 2 ? shares[n + i]! : 1 - shares[i]! - shares[n + i]!;
-  const gram = new Float64Array(size * size);
-  const right = new Float64Array(size);
-  let chiSquare = 0;
-  for (let i = 0; i < n; i++) {
-    const { value, sigma, enabled } = input.points[i]!;
-    if (!enabled) continue;
-    const weight = 1 / sigma ** 2;
-    chiSquare += value * value * weight;
-    for (let k = 0; k < size; k++) {
-      right[k] = right[k]! + weight * column(k, i) * value;
-      for (let l = 0; l < size; l++)
-        gram[k * size + l] = gram[k * size + l]! + weight * column(k, i) * column(l, i);
-    }
-  }
-  const levels = new Float64Array(size);
-  const held = names.map((name) => input.parameters[name]?.held ?? false);
-  names.forEach((name, k) => {
+/** Populated share of every point: what a scan with levels 0 in front, 1 in the bulk and 0 in the cap would be. */
+function shareAt(prepared: PreparedFit, { names }: Shape, x: readonly number[]): Float64Array {
+  const values = Object.fromEntries(names.map((name, k) => [name, x[k]!]));
+  return foldScan(prepared, { ...values, levelTop: 0, levelBulk: 1, levelCap: 0 });
+}
+
+interface Objective {
+  /** Φ at a shape, the levels at their best. */
+  of: (x: readonly number[], share?: Float64Array) => number;
+}
+
+function objectiveOf(prepared: PreparedFit, shape: Shape): Objective {
+  const { input, problem } = prepared;
+  const { model } = problem;
+  const used = input.points.map((_, i) => i).filter((i) => input.points[i]!.enabled);
+  const weights = inverseOf(used.map((i) => used.map((j) => varianceOf(input, i, j))));
+  const levels = LEVELS.filter((name) => model.names.includes(name));
+  const at = levels.map((name) => model.names.indexOf(name));
+  const prior = (name: ParameterName): { mean: number; weight: number } | null => {
     const setting = input.parameters[name];
-    if (setting?.prior && !setting.held) {
-      const weight = 1 / setting.prior.sigma ** 2;
-      gram[k * size + k] = gram[k * size + k]! + weight;
-      right[k] = right[k]! + weight * setting.prior.mean;
-      chiSquare += weight * setting.prior.mean ** 2;
-    }
-    levels[k] = setting?.held ? setting.value! : 0.5;
-  });
-  for (let sweep = 0; sweep < 400; sweep++) {
-    let moved = 0;
-    for (let k = 0; k < size; k++) {
-      if (held[k] || gram[k * size + k]! < 1e-30) continue;
-      let rest = right[k]!;
-      for (let l = 0; l < size; l++) if (l !== k) rest -= gram[k * size + l]! * levels[l]!;
-      const lowest = k === 2 ? 0 : low;
-      const next = Math.min(Math.max(rest / gram[k * size + k]!, lowest), high);
-      moved = Math.max(moved, (next - levels[k]!) ** 2 * gram[k * size + k]!);
-      levels[k] = next;
-    }
-    if (moved < 1e-12) break;
-  }
-  for (let k = 0; k < size; k++) {
-    chiSquare -= 2 * right[k]! * levels[k]!;
-    for (let l = 0; l < size; l++) chiSquare += gram[k * size + l]! * levels[k]! * levels[l]!;
-  }
-  return chiSquare;
-}
-
-export function bruteForce(input: FitInput, deepestNm: number): BruteForce {
-  const { parameters } = input;
-  const priors = (['edgeDepthNm', 'edgeWidthNm', 'depthScale'] as const).map((name) => {
-    const setting = parameters[name];
     if (!setting || setting.held) return null;
-    return {
-      name,
-      prior: setting.prior ?? (name === 'depthScale' ? { mean: 1, sigma: 0.03 } : null),
-    };
-  });
-  const objective = (shape: Shape, remember = false): number =>
-    bestLevels(input, sharesAt(input, shape, remember)) +
-    priors.reduce(
-      (sum, row) =>
-        row?.prior ? sum + ((shape[row.name] - row.prior.mean) / row.prior.sigma) ** 2 : sum,
-      0,
-    );
-  const depths = parameters.edgeDepthNm?.held
-    ? [parameters.edgeDepthNm.value!]
-    : Array.from({ length: 161 }, (_, k) => (deepestNm * k) / 160);
-  const widths =
-    input.profile === 'sharp'
-      ? [0]
-      : parameters.edgeWidthNm?.held
-        ? [parameters.edgeWidthNm.value!]
-        : [0, ...Array.from({ length: 14 }, (_, k) => 1 * 1.55 ** k)].filter(
-            (width) => width < deepestNm,
-          );
-  const nodes = widths.flatMap((edgeWidthNm) =>
-    depths.map((edgeDepthNm) => ({ edgeDepthNm, edgeWidthNm, depthScale: 1 })),
-  );
-  const values = nodes.map((node) => objective(node, true));
-  const perDepth = depths.map((_, k) =>
-    Math.min(...widths.map((__, line) => values[line * depths.length + k]!)),
-  );
-  const order = [...nodes.keys()].sort((a, b) => values[a]! - values[b]!).slice(0, 6);
-  const polished = order.map((node) =>
-    patternSearch(input, objective, nodes[node]!, values[node]!, deepestNm),
-  );
-  const chiSquare = Math.min(...polished);
-  return { chiSquare, spread: Math.max(...perDepth) - chiSquare };
+    const { mean, sigma } =
+      setting.prior ?? (name === 'depthScale' ? { mean: 1, sigma: 0.03 } : {});
+    return mean === undefined || sigma === undefined ? null : { mean, weight: 1 / sigma ** 2 };
+  };
+  const levelPriors = levels.map(prior);
+  const shapePriors = shape.names.map(prior);
+  const scaleAt = shape.names.indexOf('depthScale');
+  let cap = { scale: NaN, share: new Float64Array(input.points.length) };
+  const box = {
+    lower: at.map((k) => model.lower[k]!),
+    upper: at.map((k) => model.upper[k]!),
+    held: at.map((k) => (model.held[k] ? model.neutral[k]! : null)),
+  };
+  const y = used.map((i) => input.points[i]!.value);
+  const n = used.length;
+  const size = levels.length;
+  const columns = Array.from({ length: size }, () => new Float64Array(n));
+  const weighted = Array.from({ length: size }, () => new Float64Array(n));
+  const residual = new Float64Array(n);
+  return {
+    of(x, share = shareAt(prepared, shape, x)) {
+      if (size > 2 && cap.scale !== x[scaleAt]) {
+        const values = Object.fromEntries(shape.names.map((name, k) => [name, x[k]!]));
+        const capOnly = { ...values, levelTop: 0, levelBulk: 0, levelCap: 1 };
+        cap = { scale: x[scaleAt]!, share: foldScan(prepared, capOnly) };
+      }
+      used.forEach((point, i) => {
+        columns[1]![i] = share[point]!;
+        if (size > 2) columns[2]![i] = cap.share[point]!;
+        columns[0]![i] = 1 - share[point]! - cap.share[point]!;
+      });
+      for (let k = 0; k < size; k++) multiply(weights, columns[k]!, weighted[k]!);
+      const gram = columns.map((a, k) =>
+        weighted.map((b, l) => dot(a, b) + (k === l ? (levelPriors[k]?.weight ?? 0) : 0)),
+      );
+      const right = weighted.map(
+        (b, k) => dot(b, y) + (levelPriors[k] ? levelPriors[k].weight * levelPriors[k].mean : 0),
+      );
+      const level = solveInBox(gram, right, box);
+      for (let i = 0; i < n; i++) {
+        residual[i] = y[i]!;
+        for (let k = 0; k < size; k++) residual[i]! -= level[k]! * columns[k]![i]!;
+      }
+      let sum = 0;
+      for (let i = 0; i < n; i++) sum += residual[i]! * dot(weights[i]!, residual);
+      levelPriors.forEach((p, k) => {
+        if (p) sum += p.weight * (level[k]! - p.mean) ** 2;
+      });
+      shapePriors.forEach((p, k) => {
+        if (p) sum += p.weight * (x[k]! - p.mean) ** 2;
+      });
+      return sum;
+    },
+  };
 }
 
-/** Hooke-Jeeves: steps along each axis, halved when none helps. */
-function patternSearch(
-  input: FitInput,
-  objective: (shape: Shape) => number,
-  start: Shape,
-  startValue: number,
-  deepestNm: number,
-): number {
-  const steps: Partial<Shape> = {};
-  if (!input.parameters.edgeDepthNm?.held) steps.edgeDepthNm = deepestNm / 200;
-  if (input.profile === 'graded' && !input.parameters.edgeWidthNm?.held)
-    steps.edgeWidthNm = Math.max(1, start.edgeWidthNm / 4);
-  if (input.capThicknessNm > 0 && input.parameters.depthScale && !input.parameters.depthScale.held)
-    steps.depthScale = 0.01;
-  let at = start;
-  let value = startValue;
-  for (let halving = 0; halving < 16; halving++) {
-    for (let moved = true, tries = 0; moved && tries < 40; tries++) {
-      moved = false;
-      for (const [name, step] of Object.entries(steps)) {
-        for (const sign of [-1, 1]) {
-          const next = { ...at, [name]: at[name as keyof Shape] + (sign * step) / 2 ** halving };
-          if (
-            next.edgeDepthNm < 0 ||
-            next.edgeDepthNm > deepestNm ||
-            next.edgeWidthNm < 0 ||
-            next.edgeWidthNm > deepestNm
-          )
-            continue;
-          const there = objective(next);
-          if (there < value) {
-            at = next;
-            value = there;
-            moved = true;
-            break;
-          }
-        }
-      }
+function varianceOf({ points, covariance }: FitInput, i: number, j: number): number {
+  if (covariance) return covariance[i]![j]!;
+  return i === j ? points[i]!.sigma ** 2 : 0;
+}
+
+/** V⁻¹ by Gauss-Jordan elimination. */
+function inverseOf(matrix: number[][]): Float64Array[] {
+  const n = matrix.length;
+  const work = matrix.map((row, i) => [...row, ...row.map((_, j) => (i === j ? 1 : 0))]);
+  for (let k = 0; k < n; k++) {
+    const pivot = work[k]![k]!;
+    for (let j = 0; j < 2 * n; j++) work[k]![j]! /= pivot;
+    for (let i = 0; i < n; i++) {
+      const factor = work[i]![k]!;
+      if (i === k || factor === 0) continue;
+      for (let j = 0; j < 2 * n; j++) work[i]![j]! -= factor * work[k]![j]!;
     }
   }
-  return value;
+  return work.map((row) => Float64Array.from(row.slice(n)));
+}
+
+function dot(a: ArrayLike<number>, b: ArrayLike<number>): number {
+  let sum = 0;
+  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!;
+  return sum;
+}
+
+function multiply(matrix: Float64Array[], x: Float64Array, into: Float64Array): void {
+  for (let i = 0; i < matrix.length; i++) into[i] = dot(matrix[i]!, x);
+}
+
+/** Places of a node on its axes, the first axis changing fastest. */
+function placesOf({ axes }: Shape, node: number): number[] {
+  let rest = node;
+  return axes.map(({ length }) => {
+    const place = rest % length;
+    rest = (rest - place) / length;
+    return place;
+  });
+}
+
+/** The best nodes, none within two steps of a better one along every axis: so that they lie in different valleys. */
+function spreadOut(shape: Shape, nodes: number[][], values: number[]): number[] {
+  const order = [...nodes.keys()].sort((a, b) => values[a]! - values[b]!).slice(0, 4000);
+  const chosen: number[] = [];
+  for (const node of order) {
+    const places = placesOf(shape, node);
+    const apart = chosen.every((other) =>
+      placesOf(shape, other).some((place, k) => Math.abs(place - places[k]!) > 2),
+    );
+    if (apart) chosen.push(node);
+    if (chosen.length === STARTS) break;
+  }
+  return [...chosen, ...chosen.slice(0, RESTARTS)];
+}
+
+/** Steps of about the spacing of the lattice. */
+function stepsAt({ names, upper, lower, axes }: Shape, x: readonly number[]): number[] {
+  return names.map((name, k) => {
+    if (name === 'edgeDepthNm') return upper[k]! / 60;
+    if (name === 'depthScale') return 0.01;
+    if (name === 'surfacePotentialEv') return (upper[k]! - lower[k]!) / 60 + Math.abs(x[k]!) / 20;
+    if (name === 'bulkPerCm3')
+      return (axes[k]!.length > 1 ? axes[k]![1]! - axes[k]![0]! : x[k]!) / 2;
+    return Math.max(1.5, x[k]! / 4);
+  });
+}
+
+/** A place away from a node, by a fixed pattern of signs. */
+function betweenNodes(shape: Shape, node: readonly number[], step: readonly number[]): number[] {
+  return node.map((x, k) =>
+    shape.held[k]
+      ? x
+      : Math.min(
+          Math.max(x + (k % 2 === 0 ? 1.4 : -1.4) * step[k]!, shape.lower[k]!),
+          shape.upper[k]!,
+        ),
+  );
+}
+
+function highestOverFirst({ axes }: Shape, values: number[]): number {
+  const lowest = axes[0]!.map(() => Infinity);
+  values.forEach((value, node) => {
+    const k = node % lowest.length;
+    lowest[k] = Math.min(lowest[k]!, value);
+  });
+  return Math.max(...lowest);
 }
