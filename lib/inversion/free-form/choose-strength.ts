@@ -24,10 +24,15 @@ export function chooseStrength(
   work: PenalisedWork,
   curve: readonly CurvePoint[],
 ): StrengthChoices {
+  const solved = curve.filter(({ chiSquare }) => !Number.isNaN(chiSquare));
+  if (solved.length === 0) {
+    const none = { strength: null, note: 'The problem has no single solution at any strength.' };
+    return { discrepancy: none, gcv: none, corner: none };
+  }
   return {
-    discrepancy: byDiscrepancy(problem, work, curve),
-    gcv: byCrossValidation(problem, work, curve),
-    corner: byCorner(curve),
+    discrepancy: byDiscrepancy(problem, work, solved),
+    gcv: byCrossValidation(problem, work, solved),
+    corner: byCorner(solved),
   };
 }
 
@@ -36,7 +41,7 @@ export function chooseStrength(
  * rises with µ, with the constraint as well as without, so the root in ln µ is found by regula falsi (Illinois) between two
  * points of the curve. Where χ² is smaller everywhere the strongest of the curve is chosen; where it is larger everywhere, none.
  */
-export function byDiscrepancy(
+function byDiscrepancy(
   problem: PenalisedProblem,
   work: PenalisedWork,
   curve: readonly CurvePoint[],
@@ -89,7 +94,7 @@ export function byDiscrepancy(
  * parameters. With the constraint p is the trace over the columns that are not at zero, so the score jumps where that set
  * changes and the minimum is the best of the curve polished between its neighbours by Brent's method.
  */
-export function byCrossValidation(
+function byCrossValidation(
   problem: PenalisedProblem,
   work: PenalisedWork,
   curve: readonly CurvePoint[],
@@ -129,7 +134,7 @@ export function byCrossValidation(
  * constraint too, as neither x nor the multipliers enter to first order), so its slope is −χ²/(µ‖Lx − t‖²); curvature is the
  * change of that angle over the chords to both neighbours.
  */
-export function byCorner(curve: readonly CurvePoint[]): StrengthChoice {
+function byCorner(curve: readonly CurvePoint[]): StrengthChoice {
   const points = [...curve]
     .filter(({ chiSquare, roughness }) => chiSquare > 0 && roughness > 0)
     .sort((a, b) => a.strength - b.strength);

@@ -86,7 +86,10 @@ export function stackedExtent({
   });
 }
 
-/** Solves at one strength µ, from the passive set of the strength before, into work.state.x and work.point. */
+/**
+ * Solves at one strength µ, from the passive set of the strength before, into work.state.x, work.point and work.status. Where the
+ * positive columns are dependent the constrained problem is begun again from none; what stays dependent is NaN throughout.
+ */
 export function solveAtStrength(
   problem: PenalisedProblem,
   work: PenalisedWork,
@@ -94,9 +97,16 @@ export function solveAtStrength(
 ): void {
   const { system, state } = work;
   stack(problem, system, Math.sqrt(strength));
-  work.status = problem.nonNegative
-    ? solveNonNegative(system, state)
-    : solveUnconstrained(system, state);
+  const solve = problem.nonNegative ? solveNonNegative : solveUnconstrained;
+  work.status = solve(system, state);
+  if (work.status === 'dependent' && problem.nonNegative) {
+    state.x.fill(0);
+    work.status = solve(system, state);
+  }
+  if (work.status === 'dependent') {
+    state.x.fill(NaN);
+    state.count = 0;
+  }
   measure(problem, work, strength);
 }
 
@@ -128,9 +138,10 @@ function measure(problem: PenalisedProblem, work: PenalisedWork, strength: numbe
   point.strength = strength;
   point.chiSquare = squaredDistance(problem.design, problem.data, state.x);
   point.roughness = Math.sqrt(squaredDistance(problem.penalty, problem.target, state.x));
-  point.effectiveParameters = traceOfInfluence(problem.design, work);
+  point.effectiveParameters =
+    work.status === 'dependent' ? NaN : traceOfInfluence(problem.design, work);
   const left = dataCount - point.effectiveParameters;
-  point.gcv = left > 0 ? (dataCount * point.chiSquare) / (left * left) : Infinity;
+  point.gcv = left <= 0 ? Infinity : (dataCount * point.chiSquare) / (left * left);
 }
 
 function squaredDistance(

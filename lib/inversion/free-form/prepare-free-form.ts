@@ -1,5 +1,5 @@
 import { InversionError } from '../errors';
-import { parameterTable } from '../fit/parameter-table';
+import { parameterTable, type ParameterRow } from '../fit/parameter-table';
 import { compileKernel } from '../fold/kernel';
 import { correlatedWhitener, diagonalWhitener, type Whitener } from '../linalg/whitener';
 import { trialProfileOf } from '../profile/trial-profiles';
@@ -72,13 +72,17 @@ export function prepareFreeForm(input: FreeFormInput): PreparedFreeForm {
   const knotsNm = input.knotsNm
     ? Float64Array.from(input.knotsNm)
     : rootSpacedKnots(below(0.99), input.knotCount);
+  if (!(knotsNm[0]! < below(1))) {
+    throw new InversionError(
+      'bad-knots',
+      `All knots lie deeper than ${below(1)} nm, where the last muons of the scan stop.`,
+    );
+  }
   if (input.reference) checkReference(input.reference, knotsNm.length);
-  const capRow = setting('levelCap');
-  const cap: CapLevel = !capRow
-    ? { kind: 'none' }
-    : capRow.held
-      ? { kind: 'held', value: capRow.neutral }
-      : { kind: 'free', prior: capRow.prior };
+  const cap = capLevelOf(
+    setting('levelCap'),
+    shallowest(input, profiles) * scale < input.capThicknessNm,
+  );
   const pointOfRow = rowsByEnergy(input, profiles);
   const columns = knotsNm.length + (cap.kind === 'free' ? 1 : 0);
   const rows = pointOfRow.length;
@@ -137,6 +141,25 @@ function deepestQuantile(
         : deepest,
     0,
   );
+}
+
+/** Least depth at which a muon of a point in use stops, nm. */
+function shallowest(
+  { points }: FreeFormInput,
+  profiles: readonly (StoppingProfile | null)[],
+): number {
+  return Math.min(
+    ...profiles.map((profile, index) =>
+      profile && points[index]!.enabled ? stoppingQuantile(profile, 0) : Infinity,
+    ),
+  );
+}
+
+/** A free level of a cap in which no muon stops is no unknown at all, unless its prior says something. */
+function capLevelOf(row: ParameterRow | undefined, seen: boolean): CapLevel {
+  if (!row) return { kind: 'none' };
+  if (row.held) return { kind: 'held', value: row.neutral };
+  return seen || row.prior ? { kind: 'free', prior: row.prior } : { kind: 'none' };
 }
 
 function rowsByEnergy(

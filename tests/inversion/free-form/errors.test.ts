@@ -50,6 +50,7 @@ const wrong: readonly [string, FreeFormInput][] = [
   ['bad-knots', { ...rate, knotsNm: [0, 10, 10, 40] }],
   ['bad-knots', { ...rate, knotsNm: [-1, 10, 40] }],
   ['bad-knots', { ...rate, knotsNm: [0, NaN, 40] }],
+  ['bad-knots', { ...rate, knotsNm: [400, 500, 600] }],
   ['bad-reference', { ...rate, reference: [1, 2, 3] }],
   ['bad-reference', { ...rate, reference: new Array<number>(40).fill(NaN) }],
   ['bad-covariance', { ...rate, covariance: [[1]] }],

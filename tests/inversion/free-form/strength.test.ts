@@ -175,3 +175,31 @@ describe('the choice of the strength', () => {
     expect(nothing.choices.corner.strength).toBe(null);
   });
 });
+
+describe('a penalised problem whose columns are dependent', () => {
+  const column = [1, 2, 3];
+  const problem = {
+    design: { rows: 3, columns: 2, values: Float64Array.from([...column, ...column]) },
+    data: Float64Array.of(1, 1, 1),
+    penalty: { rows: 1, columns: 2, values: Float64Array.of(0, 0) },
+    target: Float64Array.of(0),
+  };
+
+  it('is said to be so without constraint, and has one of its solutions with it', () => {
+    const loose = { ...problem, nonNegative: false };
+    const work = createPenalisedWork(loose, 3);
+    solveAtStrength(loose, work, 1);
+    expect(work.status).toBe('dependent');
+    expect(work.state.x[0]).toBe(NaN);
+    expect(work.point.chiSquare).toBe(NaN);
+    const constrained = { ...problem, nonNegative: true };
+    const other = createPenalisedWork(constrained, 3);
+    solveAtStrength(constrained, other, 1);
+    expect(other.status).toBe('solved');
+    expect(other.state.x[0]! + other.state.x[1]!).toBeCloseTo(6 / 14, 12);
+    const curve = strengthCurve(loose, work, [3, 2, 1]);
+    const { discrepancy, gcv, corner } = chooseStrength(loose, work, curve);
+    expect([gcv.strength, corner.strength]).toEqual([null, null]);
+    expect(discrepancy.strength).toBe(null);
+  });
+});

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import {
+  createStoppingSet,
   freeFormAt,
   freeFormProfile,
   prepareFreeForm,
@@ -144,5 +145,29 @@ describe('the cap level', () => {
     const narrow = at({ levelCap: freeWith(free.levelCap! + 0.2, 1e-6) });
     const held = at({ levelCap: heldAt(free.levelCap! + 0.2) });
     expect(largestDifference(narrow.unknowns, held.unknowns)).toBeLessThan(1e-6);
+  });
+
+  it('is no unknown where no muon stops in the cap', () => {
+    const plain = freeRate({ capThicknessNm: 0.5 });
+    const shifted = {
+      ...plain,
+      stopping: createStoppingSet(
+        plain.stopping.profiles.map((profile) => ({
+          ...profile,
+          edgesNm: profile.edgesNm.map((x) => x + 1),
+        })),
+      ),
+    };
+    const solution = solveFreeForm(
+      prepareFreeForm(
+        withValues(
+          shifted,
+          plain.points.map(() => 1),
+        ),
+      ),
+    );
+    expect(solution.levelCap).toBe(null);
+    expect(solution.status).toBe('solved');
+    expect(freeFormAt(prepareFreeForm(plain), 1).levelCap).not.toBe(null);
   });
 });
