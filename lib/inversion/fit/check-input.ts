@@ -1,8 +1,10 @@
 import { MAX_ENERGIES } from '../constants';
 import { InversionError } from '../errors';
 import { RESPONSES } from '../response/responses';
+import { checkStoppingSet } from '../stopping/check-stopping-set';
 import { sameEnergy } from '../stopping/same-energy';
 import type { FitInput } from '../types';
+import { isNumber, isPositive, isPositiveOrZero } from './number-range';
 
 /** @throws InversionError with one clear sentence for whatever a fit cannot start from. */
 export function checkInput(input: FitInput): void {
@@ -10,18 +12,13 @@ export function checkInput(input: FitInput): void {
   checkCovariance(input);
   checkResponse(input);
   checkCarriers(input);
-  if (!(input.capThicknessNm >= 0 && Number.isFinite(input.capThicknessNm))) {
+  if (!isPositiveOrZero(input.capThicknessNm)) {
     throw new InversionError(
       'bad-cap',
       `The cap layer cannot be ${input.capThicknessNm} nm thick.`,
     );
   }
-  if (input.stopping.profiles.length === 0) {
-    throw new InversionError(
-      'empty-stopping-set',
-      'A fit needs a stopping set with at least one stopping profile.',
-    );
-  }
+  checkStoppingSet(input.stopping);
 }
 
 function checkPoints({ points }: FitInput): void {
@@ -34,21 +31,21 @@ function checkPoints({ points }: FitInput): void {
   }
   points.forEach(({ energyKeV, value, sigma }, index) => {
     const where = `Point ${index + 1} of the energy scan`;
-    if (!(energyKeV > 0 && Number.isFinite(energyKeV))) {
+    if (!isPositive(energyKeV)) {
       throw new InversionError(
         'bad-energy',
         `${where} has the energy ${energyKeV} keV; a positive number was expected.`,
         { index },
       );
     }
-    if (!Number.isFinite(value)) {
+    if (!isNumber(value)) {
       throw new InversionError(
         'bad-value',
         `${where} (${energyKeV} keV) has the value ${value}; a finite number was expected.`,
         { index },
       );
     }
-    if (!(sigma > 0 && Number.isFinite(sigma))) {
+    if (!isPositive(sigma)) {
       throw new InversionError(
         'bad-sigma',
         `${where} (${energyKeV} keV) has the uncertainty ${sigma}; a positive number was expected.`,
@@ -80,22 +77,19 @@ function checkResponse({ response, observable }: FitInput): void {
   if (response.kind === 'saturating-fraction') checkHalf(response);
   if (response.kind !== 'capture-rate') return;
   const { gammaCm3PerS, gammaSigmaCm3PerS, baselinePerUs } = response;
-  if (!(gammaCm3PerS > 0 && Number.isFinite(gammaCm3PerS))) {
+  if (!isPositive(gammaCm3PerS)) {
     throw new InversionError(
       'bad-gamma',
       `The capture coefficient must be a positive number of cm³/s, not ${gammaCm3PerS}.`,
     );
   }
-  if (
-    gammaSigmaCm3PerS !== null &&
-    !(gammaSigmaCm3PerS >= 0 && Number.isFinite(gammaSigmaCm3PerS))
-  ) {
+  if (gammaSigmaCm3PerS !== null && !isPositiveOrZero(gammaSigmaCm3PerS)) {
     throw new InversionError(
       'bad-gamma',
       `The uncertainty of the capture coefficient cannot be ${gammaSigmaCm3PerS} cm³/s.`,
     );
   }
-  if (!(baselinePerUs >= 0 && Number.isFinite(baselinePerUs))) {
+  if (!isPositiveOrZero(baselinePerUs)) {
     throw new InversionError(
       'bad-baseline',
       `The rate without carriers cannot be ${baselinePerUs} µs⁻¹.`,
@@ -107,13 +101,13 @@ function checkHalf({
   halfPerCm3,
   halfSigmaPerCm3,
 }: Extract<FitInput['response'], { kind: 'saturating-fraction' }>): void {
-  if (!(halfPerCm3 > 0 && Number.isFinite(halfPerCm3))) {
+  if (!isPositive(halfPerCm3)) {
     throw new InversionError(
       'bad-half-concentration',
       `The concentration of half saturation must be a positive number of cm⁻³, not ${halfPerCm3}.`,
     );
   }
-  if (halfSigmaPerCm3 !== null && !(halfSigmaPerCm3 >= 0 && Number.isFinite(halfSigmaPerCm3))) {
+  if (halfSigmaPerCm3 !== null && !isPositiveOrZero(halfSigmaPerCm3)) {
     throw new InversionError(
       'bad-half-concentration',
       `The uncertainty of the concentration of half saturation cannot be ${halfSigmaPerCm3} cm⁻³.`,
@@ -156,7 +150,7 @@ function checkCovariance({ points, covariance }: FitInput): void {
 
 function checkCarriers({ carriers }: FitInput): void {
   for (const value of [carriers.bulkPerCm3, carriers.bulkSigmaPerCm3, carriers.topPerCm3]) {
-    if (value !== null && !(value >= 0 && Number.isFinite(value))) {
+    if (value !== null && !isPositiveOrZero(value)) {
       throw new InversionError(
         'bad-concentration',
         `A carrier concentration cannot be ${value} cm⁻³.`,

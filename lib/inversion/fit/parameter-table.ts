@@ -1,6 +1,7 @@
 import { DEPTH_SCALE_PRIOR } from '../constants';
 import { InversionError } from '../errors';
 import { RESPONSES } from '../response/responses';
+import { isNumber, isPositive } from './number-range';
 import type { ShapeParameter, TrialProfile } from '../profile/trial-profile';
 import type { FitInput, GaussianPrior, ParameterName, ParameterSetting } from '../types';
 
@@ -93,11 +94,7 @@ function checkSetting(
       { name, lower, upper },
     );
   }
-  if (
-    !held &&
-    prior &&
-    !(Number.isFinite(prior.mean) && prior.sigma > 0 && Number.isFinite(prior.sigma))
-  ) {
+  if (!held && prior && !(isNumber(prior.mean) && isPositive(prior.sigma))) {
     throw new InversionError(
       'bad-prior',
       `The prior of ${name} needs a finite mean and a positive uncertainty.`,

@@ -4,6 +4,7 @@ import { TAIL_BELOW } from '../electrostatics/potential-table';
 import { reducedCurve, type ReducedCurve } from '../electrostatics/reduced-curve';
 import { spaceChargeFunction } from '../electrostatics/space-charge';
 import { InversionError } from '../errors';
+import { isPositive } from '../fit/number-range';
 import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
 import type { FitInput, SemiconductorBulk } from '../types';
 import type { TrialProfile } from './trial-profile';
@@ -165,7 +166,7 @@ function bulkOf({ semiconductor, polarity, response }: FitInput): SemiconductorB
     [semiconductor.temperatureK, 'temperature (K)'],
     [semiconductor.intrinsicPerCm3 ?? 1, 'intrinsic concentration (cm⁻³)'],
   ] as const) {
-    if (!(value > 0 && Number.isFinite(value)))
+    if (!isPositive(value))
       throw new InversionError('bad-semiconductor', `The ${name} cannot be ${value}.`);
   }
   return semiconductor;
@@ -174,7 +175,7 @@ function bulkOf({ semiconductor, polarity, response }: FitInput): SemiconductorB
 function givenBulk({ parameters, carriers }: FitInput): number {
   const setting = parameters.bulkPerCm3;
   const given = setting?.prior?.mean ?? setting?.value ?? carriers.bulkPerCm3;
-  if (given !== null && given !== undefined && given > 0 && Number.isFinite(given)) return given;
+  if (given !== null && given !== undefined && isPositive(given)) return given;
   throw new InversionError(
     'no-bulk-concentration',
     'Band bending needs the carrier concentration of the bulk, a positive number of cm⁻³.',
