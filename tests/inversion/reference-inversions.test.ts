@@ -5,13 +5,17 @@ import {
   createStoppingSet,
   fit,
   prepareFit,
+  type CarrierScale,
   type FitInput,
   type Observable,
   type ParameterName,
   type Polarity,
   type ProfileKind,
+  type Response,
+  type SemiconductorBulk,
+  type StoppingSet,
 } from '@/lib/inversion/index';
-import { answerOf, fractionInput, freeWith, heldAt } from './support/scans';
+import { answerOf, fractionInput, free, freeWith, heldAt } from './support/scans';
 
 type Ends = [number | null, number | null];
 type Named<T> = Partial<Record<ParameterName, T>>;
@@ -22,18 +26,24 @@ interface ReferenceCase {
   observable: Observable;
   polarity: Polarity;
   capThicknessNm: number;
-  baselinePerUs: number;
   held: Named<number>;
   priors: Named<[number, number]>;
   values: number[];
   sigmas: number[];
+  /** Λ₀ of a capture rate where no response is named. */
+  baselinePerUs?: number;
+  response?: Response;
+  carriers?: CarrierScale;
+  semiconductor?: SemiconductorBulk | null;
+  covariance?: number[][] | null;
   reference: {
     chiSquare: number;
     parameters: Named<number>;
     sigmas: Named<number> | null;
     intervals68: Named<Ends>;
     intervals95: Named<Ends>;
-    iminuit: { chiSquare: number; valid: boolean; minos68: Named<Ends> } | null;
+    iminuit?: { chiSquare: number; valid: boolean; minos68: Named<Ends> } | null;
+    lmfit?: { chiSquare: number; parameters: Named<number>; sigmas: Named<number | null> } | null;
   };
 }
 
@@ -44,48 +54,50 @@ interface Reference {
   cases: ReferenceCase[];
 }
 
-/**
- * Source: SciPy least_squares with many starts, a profile walked out with brentq, and iminuit's minos
- * (tests/reference/make_reference.py; versions in the file).
- */
-const reference = JSON.parse(
-  readFileSync('fixtures/reference/inversion/inversions.json', 'utf8'),
-) as Reference;
-const stopping = createStoppingSet(
-  reference.energiesKeV.map((energyKeV, i) =>
-    createStoppingProfile({
-      energyKeV,
-      positionsNm: reference.edgesNm,
-      positionsAre: 'edges',
-      weights: reference.counts[i]!,
-      weightsAre: 'counts',
-    }),
-  ),
-);
+function stoppingOf({ energiesKeV, edgesNm, counts }: Reference): StoppingSet {
+  return createStoppingSet(
+    energiesKeV.map((energyKeV, i) =>
+      createStoppingProfile({
+        energyKeV,
+        positionsNm: edgesNm,
+        positionsAre: 'edges',
+        weights: counts[i]!,
+        weightsAre: 'counts',
+      }),
+    ),
+  );
+}
 
-function inputOf(c: ReferenceCase): FitInput {
+function responseOf({ response, observable, baselinePerUs }: ReferenceCase): Response {
+  if (response) return response;
+  if (observable === 'fraction') return { kind: 'two-level' };
+  return {
+    kind: 'capture-rate',
+    gammaCm3PerS: 1e-6,
+    gammaSigmaCm3PerS: null,
+    baselinePerUs: baselinePerUs!,
+  };
+}
+
+function inputOf(c: ReferenceCase, { energiesKeV }: Reference, stopping: StoppingSet): FitInput {
   return fractionInput({
     observable: c.observable,
     profile: c.profile,
     polarity: c.polarity,
     stopping,
     capThicknessNm: c.capThicknessNm,
-    response:
-      c.observable === 'fraction'
-        ? { kind: 'two-level' }
-        : {
-            kind: 'capture-rate',
-            gammaCm3PerS: 1e-6,
-            gammaSigmaCm3PerS: null,
-            baselinePerUs: c.baselinePerUs,
-          },
-    points: reference.energiesKeV.map((energyKeV, i) => ({
+    response: responseOf(c),
+    ...(c.carriers ? { carriers: c.carriers } : {}),
+    semiconductor: c.semiconductor ?? null,
+    covariance: c.covariance ?? null,
+    points: energiesKeV.map((energyKeV, i) => ({
       energyKeV,
       value: c.values[i]!,
       sigma: c.sigmas[i]!,
       enabled: true,
     })),
     parameters: {
+      ...Object.fromEntries(Object.keys(c.reference.parameters).map((name) => [name, free])),
       ...Object.fromEntries(Object.entries(c.held).map(([name, value]) => [name, heldAt(value)])),
       ...Object.fromEntries(
         Object.entries(c.priors).map(([name, [mean, sigma]]) => [name, freeWith(mean, sigma)]),
@@ -93,6 +105,18 @@ function inputOf(c: ReferenceCase): FitInput {
     },
   });
 }
+
+/**
+ * Source: SciPy least_squares with many starts and a profile walked out with brentq, iminuit's minos, and lmfit
+ * (tests/reference/make_reference.py and profile_inversions.py; versions in the files).
+ */
+const cases = ['inversions.json', 'profile-inversions.json'].flatMap((file) => {
+  const reference = JSON.parse(
+    readFileSync(`fixtures/reference/inversion/${file}`, 'utf8'),
+  ) as Reference;
+  const stopping = stoppingOf(reference);
+  return reference.cases.map((c) => ({ ...c, input: inputOf(c, reference, stopping) }));
+});
 
 /** One per cent of the interval where it is closed; where one side is open, of the distance to the closed end. */
 function expectEnds(
@@ -116,13 +140,24 @@ function expectEnds(
 }
 
 describe('whole inversions against general-purpose libraries', () => {
-  it('has at least eight cases of either profile and observable', () => {
-    expect(reference.cases.length).toBeGreaterThanOrEqual(8);
-    expect(new Set(reference.cases.map((c) => `${c.profile} ${c.observable}`)).size).toBe(4);
+  it('has cases of every profile, response and kind of uncertainty', () => {
+    expect(cases.length).toBeGreaterThanOrEqual(25);
+    expect(new Set(cases.map(({ input }) => `${input.profile} ${input.response.kind}`))).toEqual(
+      new Set([
+        ...['sharp', 'graded', 'layer', 'band-bending'].flatMap((profile) => [
+          `${profile} two-level`,
+          `${profile} capture-rate`,
+        ]),
+        // A step shows the saturating fraction its two levels and nothing between.
+        ...['graded', 'layer', 'band-bending'].map((profile) => `${profile} saturating-fraction`),
+      ]),
+    );
+    const correlated = cases.filter(({ covariance }) => covariance);
+    expect(new Set(correlated.map(({ profile }) => profile)).size).toBe(4);
   });
 
-  describe.each(reference.cases.map((c) => [c.name, c] as const))('%s', (_, c) => {
-    const answer = answerOf(fit(prepareFit(inputOf(c))));
+  describe.each(cases.map((c) => [c.name, c] as const))('%s', (_, c) => {
+    const answer = answerOf(fit(prepareFit(c.input)));
     const found = (name: ParameterName) =>
       answer.parameters.find((parameter) => parameter.name === name)!;
     const names = Object.keys(c.reference.intervals68) as ParameterName[];
@@ -176,6 +211,21 @@ describe('whole inversions against general-purpose libraries', () => {
         for (const [name, ends] of Object.entries(iminuit!.minos68) as [ParameterName, Ends][]) {
           if (ends[0] === null || ends[1] === null || ends[0] <= 0) continue;
           expectEnds(found(name).interval68, ends, found(name).value, `minos of ${name}`);
+        }
+      });
+    }
+
+    // lmfit is compared where it found the same minimum; its own stop leaves a thousandth of σ, its numerical Jacobian 1 % of it.
+    const { lmfit } = c.reference;
+    if (lmfit && Math.abs(lmfit.chiSquare - c.reference.chiSquare) < 1e-6) {
+      it('agrees with lmfit', () => {
+        for (const [name, sigma] of Object.entries(lmfit.sigmas) as [ParameterName, number][]) {
+          if (found(name).sigma === null) continue;
+          expect(
+            Math.abs(found(name).value - lmfit.parameters[name]!) / found(name).sigma!,
+            name,
+          ).toBeLessThan(5e-3);
+          expect(Math.abs(found(name).sigma! / sigma - 1), `σ of ${name}`).toBeLessThan(0.02);
         }
       });
     }
