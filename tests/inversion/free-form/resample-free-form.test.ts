@@ -104,3 +104,24 @@ describe('the resamples of a free-form profile', () => {
     ).toBeLessThan(0.15);
   });
 });
+
+describe('the bands of a free-form profile', () => {
+  // Source: the normal shares below −1 σ and of either tail of 95 %, on rows that run evenly from 0 to 1; linear between order
+  // statistics is then exact.
+  it('are the two-sided 68.27 and 95 % quantiles at each depth, rows that were not solved left out', () => {
+    const prepared = prepareFreeForm(scanOf(1, { knotCount: 4 }));
+    const count = 501;
+    const rows = new Float64Array((count + 2) * 4).fill(NaN);
+    // In no order, and the second knot twice as high as the first.
+    for (let r = 0; r < count; r++)
+      for (let j = 0; j < 4; j++) rows[r * 4 + j] = (((r * 101) % count) / (count - 1)) * (j + 1);
+    const [first, second] = prepared.knotsNm;
+    const bands = freeFormBands(prepared, rows, [first!, second!, (first! + second!) / 2]);
+    [1, 2, 1.5].forEach((height, k) => {
+      expect(bands.lower68[k]!).toBeCloseTo(0.15865525393145707 * height, 12);
+      expect(bands.upper68[k]!).toBeCloseTo(0.8413447460685429 * height, 12);
+      expect(bands.lower95[k]!).toBeCloseTo(0.025 * height, 12);
+      expect(bands.upper95[k]!).toBeCloseTo(0.975 * height, 12);
+    });
+  });
+});
