@@ -123,7 +123,7 @@ function byCrossValidation(
     Math.min(...ends),
     Math.log(strength),
     Math.max(...ends),
-    1e-7,
+    1e-5,
   );
   return { strength: value <= gcv ? Math.exp(x) : strength, note: null };
 }
