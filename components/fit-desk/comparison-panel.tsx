@@ -1,8 +1,8 @@
 import { memo } from 'react';
 
+import type { ProfileKind } from '@/lib/inversion/index';
 import { EvidenceTable } from '@/components/charts/evidence-table';
 import { Notice } from '@/components/ui/notice';
-import type { ProfileKind } from '@/lib/schemas/fit';
 
 import { evidenceRows, zeroWidthSentence } from './comparison';
 import { profileKind } from './profile-kinds';

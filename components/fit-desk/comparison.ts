@@ -1,11 +1,11 @@
 import {
+  type ProfileKind,
   compareFits,
   zeroWidthTest,
   type CarrierProfile,
   type FitAnswer,
   type FitInput,
 } from '@/lib/inversion/index';
-import type { ProfileKind } from '@/lib/schemas/fit';
 import type { EvidenceRow } from '@/components/charts/evidence-table';
 
 import { profileKind } from './profile-kinds';

@@ -1,3 +1,4 @@
+import type * as inversion from '@/lib/inversion/index';
 import type { ProfileKind } from '@/lib/schemas/fit';
 
 /** The trial profiles that the desk offers; a new one is one entry here. */
@@ -21,6 +22,7 @@ export const PROFILE_KINDS: readonly {
   },
 ];
 
-export function profileKind(kind: ProfileKind) {
+/** The entry of a kind; the desk makes no fits of kinds that it does not offer. */
+export function profileKind(kind: inversion.ProfileKind) {
   return PROFILE_KINDS.find((entry) => entry.kind === kind) ?? PROFILE_KINDS[0]!;
 }

@@ -1,6 +1,5 @@
 import type { ProfileSeries, ResidualSeries } from '@/components/charts/chart-types';
-import type { CarrierProfile, FitAnswer } from '@/lib/inversion/index';
-import type { ProfileKind } from '@/lib/schemas/fit';
+import type { CarrierProfile, FitAnswer, ProfileKind } from '@/lib/inversion/index';
 
 import type { ComparedFit } from './comparison';
 import { profileKind } from './profile-kinds';

@@ -2,8 +2,7 @@
 
 import { useCallback, useState } from 'react';
 
-import type { FitInput } from '@/lib/inversion/index';
-import type { ProfileKind } from '@/lib/schemas/fit';
+import type { FitInput, ProfileKind } from '@/lib/inversion/index';
 import type { InversionPool } from '@/workers/pool';
 
 import type { ComparisonResult } from './comparison';

@@ -1,4 +1,5 @@
-import type { ShareFold, TrialProfile } from '../profile/trial-profile';
+import type { TrialProfile } from '../profile/trial-profile';
+import type { ShareFold } from '../fold/share-fold';
 import type { Kernel } from '../fold/kernel';
 import type { Whitener } from '../linalg/whitener';
 import type { ParameterName } from '../types';

@@ -1,6 +1,6 @@
 import { createCumulativeScratch } from '../fold/fold-cumulative';
 import { createEdgeFold, createFoldScratch } from '../fold/fold-edge';
-import type { ShareFold } from '../profile/trial-profile';
+import type { ShareFold } from '../fold/share-fold';
 import type { Model, Workspace } from './model';
 
 type Shape = Pick<Model, 'rowCount' | 'kernel' | 'shapeCount' | 'size' | 'levelCount'>;

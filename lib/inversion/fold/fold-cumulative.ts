@@ -1,17 +1,5 @@
-import type { ShareFold } from '../profile/trial-profile';
 import type { Kernel, KernelGroup } from './kernel';
-
-/** Cumulative share and its derivatives at the bin edges of one group. */
-export interface CumulativeScratch {
-  /** Depth below the cap of each bin edge, nm. */
-  depthsNm: Float64Array;
-  /** M(x) = ∫₀ˣ s dx at each of them, 0 above the surface. */
-  integral: Float64Array;
-  /** s(x), 0 above the surface. */
-  share: Float64Array;
-  /** ∂M/∂shape_k. */
-  byShape: readonly Float64Array[];
-}
+import type { CumulativeScratch, ShareFold } from './share-fold';
 
 export function createCumulativeScratch(
   { largestEdgeCount }: Kernel,

@@ -1,7 +1,8 @@
-import type { EdgeParameters, ShareFold, Stretch, TrialProfile } from '../profile/trial-profile';
+import type { EdgeParameters, Stretch, TrialProfile } from '../profile/trial-profile';
 import { GAUSS_NODES, GAUSS_WEIGHTS } from '../statistics/gauss-legendre';
-import { foldCumulative, type CumulativeScratch } from './fold-cumulative';
+import { foldCumulative } from './fold-cumulative';
 import type { Kernel } from './kernel';
+import type { CumulativeScratch, ShareFold } from './share-fold';
 
 /** How the probe bends the share: g(s) = s(1 + K)/(1 + K·s). */
 export interface Bending {

@@ -5,7 +5,8 @@ import { reducedCurve, type ReducedCurve } from '../electrostatics/reduced-curve
 import { spaceChargeFunction } from '../electrostatics/space-charge';
 import { InversionError } from '../errors';
 import { isPositive } from '../fit/number-range';
-import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
+import { foldCumulative } from '../fold/fold-cumulative';
+import type { CumulativeScratch } from '../fold/share-fold';
 import type { FitInput, SemiconductorBulk } from '../types';
 import type { TrialProfile } from './trial-profile';
 

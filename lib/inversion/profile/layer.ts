@@ -1,4 +1,5 @@
-import { foldCumulative, type CumulativeScratch } from '../fold/fold-cumulative';
+import { foldCumulative } from '../fold/fold-cumulative';
+import type { CumulativeScratch } from '../fold/share-fold';
 import { depthParameter, extentParameter, widthAxis } from './edge-parameters';
 import { normalInto } from '../statistics/normal-table';
 import { normalShare, normalStretch } from './normal-share';

@@ -1,19 +1,6 @@
-import type { FoldScratch, EdgeFold } from '../fold/fold-edge';
-import type { CumulativeScratch } from '../fold/fold-cumulative';
 import type { Kernel } from '../fold/kernel';
+import type { ShareFold } from '../fold/share-fold';
 import type { ParameterName, ProfileKind } from '../types';
-
-/** Populated share per row and its derivatives by the shape parameters and by the depth scale. */
-export interface ShareFold {
-  share: Float64Array;
-  byShape: readonly Float64Array[];
-  byScale: Float64Array;
-  scratch: FoldScratch;
-  edge: EdgeFold;
-  cumulative: CumulativeScratch;
-  /** False leaves the derivatives alone. */
-  derivatives: boolean;
-}
 
 /** A parameter of the shape and the range that is searched. */
 export interface ShapeParameter {
