@@ -1,5 +1,5 @@
 import { meanLevel } from '../fit/evaluate';
-import { whitenedValues, whitenerOf } from '../fit/prepare-fit';
+import { whitenedValues, whitenerOf } from '../fit/scan-rows';
 import { whiten } from '../linalg/whitener';
 import { minimise } from '../fit/minimise';
 import type { Problem } from '../fit/model';

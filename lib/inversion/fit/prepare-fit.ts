@@ -1,11 +1,10 @@
 import { InversionError } from '../errors';
 import { compileKernel, type Kernel } from '../fold/kernel';
-import { correlatedWhitener, diagonalWhitener, whiten, type Whitener } from '../linalg/whitener';
+import { whiten } from '../linalg/whitener';
 import type { TrialProfile } from '../profile/trial-profile';
 import { trialProfileOf } from '../profile/trial-profiles';
 import { RESPONSES } from '../response/responses';
-import { stoppingProfileAt } from '../stopping/stopping-profile-at';
-import type { FitInput, ScanPoint, StoppingProfile, StoppingSet } from '../types';
+import type { FitInput, ScanPoint, StoppingProfile } from '../types';
 import { checkInput } from './check-input';
 import { meanLevel } from './evaluate';
 import type { Data, Model } from './model';
@@ -13,6 +12,7 @@ import { depthScaleSetting, parameterTable, type ParameterRow } from './paramete
 import type { PreparedFit } from './prepared-fit';
 import { createRefineScratch } from './refine';
 import { rememberBySet } from './remember';
+import { profileOf, rowsByEnergy, whitenedValues, whitenerOf } from './scan-rows';
 import { foldLattice, weighLattice, type LatticeFolds } from './search-grid';
 import { createWorkspace } from './workspace';
 
@@ -82,28 +82,6 @@ export function compileInput(input: FitInput): PreparedFit {
   };
 }
 
-function profileOf(
-  stopping: StoppingSet,
-  { energyKeV, enabled }: ScanPoint,
-): StoppingProfile | null {
-  try {
-    return stoppingProfileAt(stopping, energyKeV);
-  } catch (error) {
-    if (!enabled && error instanceof InversionError && error.code === 'energy-outside-stopping-set')
-      return null;
-    throw error;
-  }
-}
-
-/** Points that have a stopping profile, in ascending energy: the order of a scan then changes nothing, to the last bit. */
-function rowsByEnergy(
-  points: readonly ScanPoint[],
-  profiles: readonly (StoppingProfile | null)[],
-): Int32Array {
-  const used = points.map((_, index) => index).filter((index) => profiles[index] !== null);
-  return Int32Array.from(used.sort((a, b) => points[a]!.energyKeV - points[b]!.energyKeV));
-}
-
 /** Last bin edge of the enabled points that still closes a bin with stops in it. */
 function deepestStop(
   points: readonly ScanPoint[],
@@ -117,24 +95,6 @@ function deepestStop(
     deepest = Math.max(deepest, profile.edgesNm[last]!);
   });
   return deepest;
-}
-
-/** W of the rows of the model, which are not in the order of the points. */
-export function whitenerOf(
-  { points, covariance }: Pick<FitInput, 'points' | 'covariance'>,
-  rows: ArrayLike<number>,
-): Whitener {
-  const order = Array.from(rows);
-  const enabled = order.map((index) => points[index]!.enabled);
-  return covariance
-    ? correlatedWhitener(
-        order.map((a) => order.map((b) => covariance[a]![b]!)),
-        enabled,
-      )
-    : diagonalWhitener(
-        order.map((index) => points[index]!.sigma),
-        enabled,
-      );
 }
 
 /** A kernel of the largest scan takes 100 MB, a lattice a few; the desk goes to and fro between few of them. */
@@ -217,15 +177,4 @@ function compileData(
     target: whitenedValues(input, pointOfRow, whitener),
     priorMean: Float64Array.from(table, (row) => row.prior?.mean ?? 0),
   };
-}
-
-/** W·y, in the rows of the model. */
-export function whitenedValues(
-  { points }: Pick<FitInput, 'points'>,
-  pointOfRow: Int32Array,
-  whitener: Whitener,
-): Float64Array {
-  const target = Float64Array.from(pointOfRow, (index) => points[index]!.value);
-  whiten(whitener, target);
-  return target;
 }

@@ -1,3 +1,4 @@
+import { quantileOf, TAIL_68, TAIL_95 } from '../statistics/quantile';
 import { InversionError } from '../errors';
 import type { PreparedFreeForm } from './prepare-free-form';
 import { valueAtDepth } from './value-at-depth';
@@ -10,10 +11,6 @@ export interface FreeFormBands {
   lower95: readonly (number | null)[];
   upper95: readonly (number | null)[];
 }
-
-/** Tail shares of the two-sided 68.27 % and 95 % bands. */
-const TAIL_68 = 0.15865525393145707;
-const TAIL_95 = 0.025;
 
 /**
  * Pointwise 68 and 95 % quantiles over resampled profiles (linear between order statistics). They are those of the unknown u,
@@ -47,8 +44,8 @@ export function freeFormBands(
     });
     column.sort();
     const ends = (tail: number): [number | null, number | null] => {
-      const low = observation.line.valueOf(quantile(column, tail));
-      const high = observation.line.valueOf(quantile(column, 1 - tail));
+      const low = observation.line.valueOf(quantileOf(column, tail));
+      const high = observation.line.valueOf(quantileOf(column, 1 - tail));
       // A populated share falls with the concentration where the poor side was given more carriers than the other.
       return low !== null && high !== null && low > high ? [high, low] : [low, high];
     };
@@ -61,11 +58,4 @@ export function freeFormBands(
     lower95: bands.map(({ outer }) => outer[0]),
     upper95: bands.map(({ outer }) => outer[1]),
   };
-}
-
-function quantile(sorted: Float64Array, share: number): number {
-  const at = share * (sorted.length - 1);
-  const below = Math.floor(at);
-  const above = Math.min(below + 1, sorted.length - 1);
-  return sorted[below]! + (at - below) * (sorted[above]! - sorted[below]!);
 }

@@ -1,9 +1,9 @@
 import { InversionError } from '../errors';
 import { parameterTable, type ParameterRow } from '../fit/parameter-table';
+import { profileOf, rowsByEnergy, whitenerOf } from '../fit/scan-rows';
 import { compileKernel } from '../fold/kernel';
-import { correlatedWhitener, diagonalWhitener, type Whitener } from '../linalg/whitener';
+import type { Whitener } from '../linalg/whitener';
 import { trialProfileOf } from '../profile/trial-profiles';
-import { stoppingProfileAt } from '../stopping/stopping-profile-at';
 import { stoppingQuantile } from '../stopping/stopping-quantile';
 import type { GaussianPrior, StoppingProfile } from '../types';
 import { compileProblem } from './compile-problem';
@@ -51,9 +51,7 @@ export interface PreparedFreeForm {
 export function prepareFreeForm(input: FreeFormInput): PreparedFreeForm {
   checkFreeFormInput(input);
   const line = observedLine(input);
-  const profiles = input.points.map(({ energyKeV, enabled }) =>
-    profileAt(input, energyKeV, enabled),
-  );
+  const profiles = input.points.map((point) => profileOf(input.stopping, point));
   const deepest = (quantile: number): number => deepestQuantile(input, profiles, quantile);
   // Levels and depth scale are read as a fit with one sharp edge reads them.
   const asFit = { ...input, profile: 'sharp' } as const;
@@ -83,7 +81,7 @@ export function prepareFreeForm(input: FreeFormInput): PreparedFreeForm {
     setting('levelCap'),
     shallowest(input, profiles) * scale < input.capThicknessNm,
   );
-  const pointOfRow = rowsByEnergy(input, profiles);
+  const pointOfRow = rowsByEnergy(input.points, profiles);
   const columns = knotsNm.length + (cap.kind === 'free' ? 1 : 0);
   const rows = pointOfRow.length;
   const observation: Observation = {
@@ -113,20 +111,6 @@ export function prepareFreeForm(input: FreeFormInput): PreparedFreeForm {
     ...parts,
     work: createPenalisedWork(parts.problem, dataCount),
   };
-}
-
-function profileAt(
-  { stopping }: FreeFormInput,
-  energyKeV: number,
-  enabled: boolean,
-): StoppingProfile | null {
-  try {
-    return stoppingProfileAt(stopping, energyKeV);
-  } catch (error) {
-    if (!enabled && error instanceof InversionError && error.code === 'energy-outside-stopping-set')
-      return null;
-    throw error;
-  }
 }
 
 function deepestQuantile(
@@ -162,14 +146,6 @@ function capLevelOf(row: ParameterRow | undefined, seen: boolean): CapLevel {
   return seen || row.prior ? { kind: 'free', prior: row.prior } : { kind: 'none' };
 }
 
-function rowsByEnergy(
-  { points }: FreeFormInput,
-  profiles: readonly (StoppingProfile | null)[],
-): Int32Array {
-  const used = points.map((_, index) => index).filter((index) => profiles[index] !== null);
-  return Int32Array.from(used.sort((a, b) => points[a]!.energyKeV - points[b]!.energyKeV));
-}
-
 /** The data must decide at least what the penalty does not see: a constant, or a straight line, and a free cap level. */
 function checkCount({ difference }: FreeFormInput, dataCount: number, capColumns: number): void {
   const fewest = difference + capColumns;
@@ -181,18 +157,4 @@ function checkCount({ difference }: FreeFormInput, dataCount: number, capColumns
     } needs more than ${fewest} points in use; there are ${dataCount}.`,
     { points: dataCount, fewest },
   );
-}
-
-function whitenerOf({ points, covariance }: FreeFormInput, pointOfRow: Int32Array): Whitener {
-  const order = Array.from(pointOfRow);
-  const enabled = order.map((point) => points[point]!.enabled);
-  return covariance
-    ? correlatedWhitener(
-        order.map((a) => order.map((b) => covariance[a]![b]!)),
-        enabled,
-      )
-    : diagonalWhitener(
-        order.map((point) => points[point]!.sigma),
-        enabled,
-      );
 }

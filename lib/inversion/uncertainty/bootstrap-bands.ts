@@ -1,13 +1,10 @@
+import { quantileOf, TAIL_68, TAIL_95 } from '../statistics/quantile';
 import { InversionError } from '../errors';
 import type { PreparedFit } from '../fit/prepared-fit';
 import { valuesOf } from '../fit/theta-of';
 import { profileValue } from '../profile/profile-value';
 import type { FitAnswer, ParameterValues } from '../types';
 import { emptyBands, type Bands } from './bands';
-
-/** Tail shares of the two-sided 68.27 % and 95 % bands. */
-const TAIL_68 = 0.15865525393145707;
-const TAIL_95 = 0.025;
 
 /**
  * Pointwise 68 and 95 % quantiles of the profile value over resampled fits (linear between order statistics).
@@ -42,17 +39,10 @@ export function bootstrapBands(
   for (let k = 0; k < depthsNm.length; k++) {
     for (let r = 0; r < count; r++) column[r] = values[r]!(depthsNm[k]!);
     column.sort();
-    bands.lower68[k] = quantile(column, TAIL_68);
-    bands.upper68[k] = quantile(column, 1 - TAIL_68);
-    bands.lower95[k] = quantile(column, TAIL_95);
-    bands.upper95[k] = quantile(column, 1 - TAIL_95);
+    bands.lower68[k] = quantileOf(column, TAIL_68);
+    bands.upper68[k] = quantileOf(column, 1 - TAIL_68);
+    bands.lower95[k] = quantileOf(column, TAIL_95);
+    bands.upper95[k] = quantileOf(column, 1 - TAIL_95);
   }
   return bands;
-}
-
-function quantile(sorted: Float64Array, share: number): number {
-  const at = share * (sorted.length - 1);
-  const below = Math.floor(at);
-  const above = Math.min(below + 1, sorted.length - 1);
-  return sorted[below]! + (at - below) * (sorted[above]! - sorted[below]!);
 }
