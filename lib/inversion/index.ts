@@ -158,6 +158,7 @@ export {
   type FreeFormProfile,
 } from './free-form/free-form-profile';
 export { sensitivityAt } from './fit/sensitivity';
+export { farEdgeDepth } from './uncertainty/far-edge-depth';
 export {
   captureCoefficient,
   thermalVelocity,

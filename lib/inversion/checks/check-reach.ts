@@ -43,8 +43,24 @@ export const checkReach: FitCheck = (context) => {
       message: `The scan bounds the edge on one side only: ${side} (95 %).`,
     };
   }
+  const far = farEdgeBeyondReach(context);
+  if (far !== null) {
+    return {
+      id,
+      state: 'caution',
+      message: `The far edge of the layer at ${figure(far)} nm lies beyond the reach of the scan, which ends at ${figure(reachNm)} nm.`,
+    };
+  }
   return { id, state: 'fine', message: `Edge is inside reach. ${sourceOf(context)}` };
 };
+
+/** Depth of a far edge that the muons hardly reach; null where there is none. */
+function farEdgeBeyondReach({ prepared, answer, profile }: CheckContext): number | null {
+  const { trial } = prepared.problem.model;
+  const values = valuesOf(answer);
+  const far = trial.landmarks(trial.shape.map(({ name }) => values[name]!))[1];
+  return far && far.depthNm > profile.reachNm ? far.depthNm : null;
+}
 
 /** Bent bands have no edge of their own: what counts is the depth where the carriers reach half of the bulk. */
 function checkBendingReach(context: CheckContext): Check {

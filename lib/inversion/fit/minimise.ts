@@ -44,9 +44,7 @@ function minimiseSteps(
   result: RefineResult,
 ): RefineResult {
   const { edges } = problem.model.trial;
-  const steps = edges.filter(
-    (edge) => isStep(edge, theta) && !held[edge.position[edge.position.length - 1]!],
-  );
+  const steps = edges.filter((edge) => isStep(edge, theta) && moverOf(edge, held) >= 0);
   let { chiSquare } = result;
   for (let sweep = 0; sweep < MOST_SWEEPS; sweep++) {
     const before = chiSquare;
@@ -57,6 +55,12 @@ function minimiseSteps(
   evaluate(problem, theta, held);
   if (steps.length === 0) return result;
   return { chiSquare, iterations: result.iterations, converged: true, predictedReduction: 0 };
+}
+
+/** The parameter that moves an edge: the last of its position that is not held; -1 where all are. */
+function moverOf({ position }: EdgeParameters, held: Uint8Array): number {
+  for (let a = position.length - 1; a >= 0; a--) if (!held[position[a]!]) return position[a]!;
+  return -1;
 }
 
 function isStep({ width }: EdgeParameters, theta: Float64Array): boolean {
@@ -79,15 +83,16 @@ function minimiseStep(
 ): number {
   const { model } = problem;
   const { edges } = model.trial;
-  const moved = step.position[step.position.length - 1]!;
+  const moved = moverOf(step, held);
   // An edge that is placed from this one stays where it is and takes the move back, unless it is held.
   const follower =
     edges.find((edge) => edge !== step && edge.position.includes(moved))?.position.at(-1) ?? -1;
-  const counter = follower >= 0 && !held[follower] ? follower : -1;
+  const counter = follower >= 0 && follower !== moved && !held[follower] ? follower : -1;
   innerHeld.set(held);
   for (const edge of edges) {
     if (!isStep(edge, theta)) continue;
-    innerHeld[edge.position[edge.position.length - 1]!] = 1;
+    const mover = moverOf(edge, held);
+    if (mover >= 0) innerHeld[mover] = 1;
     if (edge.width !== null) innerHeld[edge.width] = 1;
   }
   innerHeld[moved] = 1;

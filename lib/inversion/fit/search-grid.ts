@@ -45,6 +45,7 @@ export function foldLattice(input: LatticeInput): LatticeFolds {
   const axes = trial
     .searchAxes({
       deepestNm: input.deepestNm,
+      held: input.heldShape.map((value) => value !== null),
       depths: (count) => blendedDepths(input, count),
     })
     .map((axis, k) => {

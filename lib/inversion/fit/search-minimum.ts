@@ -3,7 +3,7 @@ import { minimise, type MinimiseScratch } from './minimise';
 import type { Problem } from './model';
 import { polish } from './polish';
 import type { RefineResult } from './refine';
-import { localMinima, scanGrid, thetaOfNode } from './search';
+import { scanGrid, startNodes, thetaOfNode } from './search';
 import { openWidths } from './widths';
 
 /** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
@@ -32,7 +32,7 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   const { grid, held, neutral, size } = model;
   const chiSquares = new Float64Array(grid.nodeCount);
   scanGrid(problem, neutral, held, chiSquares);
-  const nodes = localMinima(grid.axes, chiSquares).slice(0, model.trial.starts);
+  const nodes = startNodes(model, chiSquares);
   let best = Infinity;
   let iterations = 0;
   const theta = new Float64Array(size);

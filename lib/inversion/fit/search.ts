@@ -76,31 +76,62 @@ function addShapePriors(
   }
 }
 
-/** Local minima of the lattice (no better neighbour, diagonal ones included), best first. */
-export function localMinima(axes: readonly Float64Array[], chiSquares: Float64Array): number[] {
+/**
+ * Nodes to follow to the bottom, best first: local minima of the lattice. Where a profile has several widths, their few nodes are
+ * all neighbours of each other and one broad valley would hide the rest; there each combination of widths has minima of its own,
+ * and one that lies next to a better one is left out.
+ */
+export function startNodes({ grid, trial, widths }: Model, chiSquares: Float64Array): number[] {
+  if (widths.length < 2) return localMinima(grid.axes, chiSquares).slice(0, trial.starts);
+  const nodes: number[] = [];
+  for (const node of localMinima(grid.axes, chiSquares, widths)) {
+    if (nodes.length === trial.starts) break;
+    if (!nodes.some((better) => areNeighbours(grid.axes, node, better))) nodes.push(node);
+  }
+  return nodes;
+}
+
+/**
+ * Local minima of the lattice (no better neighbour, diagonal ones included), best first. Nodes that differ along an axis that is
+ * kept apart do not count as neighbours.
+ */
+export function localMinima(
+  axes: readonly Float64Array[],
+  chiSquares: Float64Array,
+  apart: readonly number[] = [],
+): number[] {
   const minima: number[] = [];
   for (let node = 0; node < chiSquares.length; node++) {
-    if (isLowest(axes, chiSquares, node)) minima.push(node);
+    if (isLowest(axes, chiSquares, apart, node)) minima.push(node);
   }
   return minima.sort((a, b) => chiSquares[a]! - chiSquares[b]!);
 }
 
 /** Neighbours along one axis rule most nodes out before the diagonal ones are looked at. */
-function isLowest(axes: readonly Float64Array[], chiSquares: Float64Array, node: number): boolean {
+function isLowest(
+  axes: readonly Float64Array[],
+  chiSquares: Float64Array,
+  apart: readonly number[],
+  node: number,
+): boolean {
   let stride = 1;
-  for (const { length } of axes) {
-    const place = Math.floor(node / stride) % length;
-    if (place > 0 && isBelow(chiSquares, node - stride, node)) return false;
-    if (place < length - 1 && isBelow(chiSquares, node + stride, node)) return false;
+  for (let k = 0; k < axes.length; k++) {
+    const { length } = axes[k]!;
+    if (!apart.includes(k)) {
+      const place = Math.floor(node / stride) % length;
+      if (place > 0 && isBelow(chiSquares, node - stride, node)) return false;
+      if (place < length - 1 && isBelow(chiSquares, node + stride, node)) return false;
+    }
     stride *= length;
   }
-  return noneBelow(axes, chiSquares, node, node, 0, 1);
+  return noneBelow(axes, chiSquares, apart, node, node, 0, 1);
 }
 
 /** Whether no neighbour of a node lies lower, diagonal ones included: those reached from `from` over the axes from k on. */
 function noneBelow(
   axes: readonly Float64Array[],
   chiSquares: Float64Array,
+  apart: readonly number[],
   node: number,
   from: number,
   k: number,
@@ -110,11 +141,23 @@ function noneBelow(
   const { length } = axes[k]!;
   const place = Math.floor(node / stride) % length;
   const next = stride * length;
+  const onwards = (at: number): boolean =>
+    noneBelow(axes, chiSquares, apart, node, at, k + 1, next);
+  if (!onwards(from)) return false;
+  if (apart.includes(k)) return true;
   return (
-    noneBelow(axes, chiSquares, node, from, k + 1, next) &&
-    (place === 0 || noneBelow(axes, chiSquares, node, from - stride, k + 1, next)) &&
-    (place === length - 1 || noneBelow(axes, chiSquares, node, from + stride, k + 1, next))
+    (place === 0 || onwards(from - stride)) && (place === length - 1 || onwards(from + stride))
   );
+}
+
+function areNeighbours(axes: readonly Float64Array[], a: number, b: number): boolean {
+  let stride = 1;
+  for (const { length } of axes) {
+    const apart = (Math.floor(a / stride) % length) - (Math.floor(b / stride) % length);
+    if (Math.abs(apart) > 1) return false;
+    stride *= length;
+  }
+  return true;
 }
 
 /** A plateau counts once, at its first node. */

@@ -5,9 +5,11 @@ import { normalInto } from '../statistics/normal-table';
 import { normalShare, normalStretch } from './normal-share';
 import type { Stretch, TrialProfile } from './trial-profile';
 
-const DEPTHS = 20;
-const THICKNESS_SHARES = [0.03, 0.06, 0.1, 0.15, 0.22, 0.3, 0.4, 0.55, 0.75];
-const WIDTH_SHARES = [0, 0.04, 0.15];
+/** Nodes of depth and thickness by the number of free widths: a width that is held leaves its share of the nodes to them. */
+const DEPTHS = [64, 40, 28];
+const THICKNESSES = [26, 18, 13];
+const THICKEST_SHARE = 0.8;
+const WIDTH_SHARES = [0, 0.02, 0.07, 0.25, 0.8];
 
 /** W₁, w₁, W₂, w₂ and the limits between which s > 0. */
 interface Edges {
@@ -65,19 +67,30 @@ export function layer(deepestNm: number): TrialProfile {
       { depthNm: shape[0]!, widthNm: shape[1]! },
       { depthNm: shape[0]! + shape[2]!, widthNm: shape[3]! },
     ],
-    searchAxes: ({ depths }) => [
-      depths(DEPTHS),
-      widthAxis(WIDTH_SHARES, deepestNm),
-      widthAxis(THICKNESS_SHARES, deepestNm),
-      widthAxis(WIDTH_SHARES, deepestNm),
-    ],
-    starts: 6,
+    searchAxes({ depths, held }) {
+      const free = (held[1] ? 0 : 1) + (held[3] ? 0 : 1);
+      return [
+        depths(DEPTHS[free]!),
+        widthAxis(WIDTH_SHARES, deepestNm),
+        thicknessAxis(THICKNESSES[free]!, deepestNm),
+        widthAxis(WIDTH_SHARES, deepestNm),
+      ];
+    },
+    starts: 12,
     fold(kernel, shape, capNm, scale, out) {
       foldCumulative(kernel, capNm, scale, out, (scratch, first, count, derivatives) =>
         cumulate(shape, scratch, first, count, derivatives),
       );
     },
   };
+}
+
+/** Thin layers closer together: they differ by a share of their thickness. */
+function thicknessAxis(count: number, deepestNm: number): Float64Array {
+  return Float64Array.from(
+    { length: count },
+    (_, k) => THICKEST_SHARE * deepestNm * ((k + 1) / count) ** 1.6,
+  );
 }
 
 function layerSlopes(depthNm: number, shape: ArrayLike<number>, slopes: Float64Array): void {

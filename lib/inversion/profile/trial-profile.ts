@@ -64,6 +64,8 @@ export interface TrialProfile {
 export interface SearchRange {
   /** Deepest depth below the cap where a point in use has stops, nm. */
   deepestNm: number;
+  /** Whether each shape parameter is held: its axis is then its value alone. */
+  held: readonly boolean[];
   /** This many depths, denser where more muons stop. */
   depths(count: number): Float64Array;
 }
