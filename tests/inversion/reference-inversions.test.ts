@@ -141,7 +141,7 @@ function expectEnds(
 
 describe('whole inversions against general-purpose libraries', () => {
   it('has cases of every profile, response and kind of uncertainty', () => {
-    expect(cases.length).toBeGreaterThanOrEqual(25);
+    expect(cases.length).toBeGreaterThanOrEqual(33);
     expect(new Set(cases.map(({ input }) => `${input.profile} ${input.response.kind}`))).toEqual(
       new Set([
         ...['sharp', 'graded', 'layer', 'band-bending'].flatMap((profile) => [
@@ -154,6 +154,10 @@ describe('whole inversions against general-purpose libraries', () => {
     );
     const correlated = cases.filter(({ covariance }) => covariance);
     expect(new Set(correlated.map(({ profile }) => profile)).size).toBe(4);
+    const open = cases.filter(({ reference }) =>
+      Object.values(reference.intervals95).some((ends) => ends.includes(null)),
+    );
+    expect(new Set(open.map(({ profile }) => profile)).size).toBe(4);
   });
 
   describe.each(cases.map((c) => [c.name, c] as const))('%s', (_, c) => {

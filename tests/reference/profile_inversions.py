@@ -371,7 +371,9 @@ class Case:
             try:
                 m.minos(n)
                 e = m.merrors[n]
-                ends = [(m.values[n] + e.lower) * unit[n] if e.lower_valid else None, (m.values[n] + e.upper) * unit[n] if e.upper_valid else None]
+                # Minos calls an end valid where it ran into a limit.
+                open_end = (not e.lower_valid or e.at_lower_limit, not e.upper_valid or e.at_upper_limit)
+                ends = [None if shut else float((m.values[n] + d) * unit[n]) for shut, d in zip(open_end, (e.lower, e.upper))]
             except RuntimeError:
                 ends = [None, None]
             out["minos68"][n] = ends
@@ -413,11 +415,13 @@ CASES = [
     lambda: Case("layer, a step in front and a graded edge behind, widths held, fraction", "layer", "fraction", dict(edgeDepthNm=48, layerThicknessNm=60, **LEVELS), 0.005, 22, held={"edgeWidthNm": 0.0, "farEdgeWidthNm": 9.0}),
     lambda: Case("layer under a cap, fraction", "layer", "fraction", dict(edgeDepthNm=35, edgeWidthNm=12, layerThicknessNm=60, levelCap=0.5, **LEVELS), 0.003, 23, cap=12.0, held={"farEdgeWidthNm": 10.0}),
     lambda: Case("layer, rate, correlated points, depth scale with a prior", "layer", "rate", dict(edgeDepthNm=40, edgeWidthNm=10, layerThicknessNm=70, **RATES), 0.04, 24, held={"farEdgeWidthNm": 10.0}, priors=SCALE, correlated=(0.2, 0.3)),
+    lambda: Case("layer whose far edge lies beyond the reach, fraction", "layer", "fraction", dict(edgeDepthNm=60, edgeWidthNm=12, layerThicknessNm=150, **LEVELS), 0.01, 26, held={"farEdgeWidthNm": 10.0, "levelTop": 0.72}, priors={"levelBulk": [0.3, 0.03]}),
     lambda: Case("layer, saturating fraction", "layer", "fraction", dict(edgeDepthNm=45, edgeWidthNm=12, layerThicknessNm=60, **LEVELS), 0.004, 25, held={"farEdgeWidthNm": 12.0}, half=2e15, bulk=2e16),
     lambda: Case("band bending, rate, bulk held", "band-bending", "rate", dict(surfacePotentialEv=0.25, **RATES), 0.05, 31, held={"bulkPerCm3": 4e16, "levelTop": 0.01}, semiconductor=GERMANIUM, bulk=4e16),
     lambda: Case("band bending, rate, bulk with a prior", "band-bending", "rate", dict(surfacePotentialEv=0.25, bulkPerCm3=4.5e16, **RATES), 0.04, 32, held={"levelTop": 0.01}, priors={"bulkPerCm3": [4e16, 8e15]}, semiconductor=WITHOUT_MINORITY, bulk=4e16),
     lambda: Case("band bending, rate, correlated points, depth scale with a prior", "band-bending", "rate", dict(surfacePotentialEv=0.2, **RATES), 0.05, 33, held={"bulkPerCm3": 4e16}, priors=SCALE, semiconductor=GERMANIUM, bulk=4e16, correlated=(0.3, 0.2)),
     lambda: Case("band bending, two-level fraction, minority carriers at the surface", "band-bending", "fraction", dict(surfacePotentialEv=0.1, **LEVELS), 0.004, 34, held={"bulkPerCm3": 2e16}, semiconductor=NARROW_GAP, bulk=2e16),
+    lambda: Case("band bending, two-level fraction, inverted surface that no bending deepens", "band-bending", "fraction", dict(surfacePotentialEv=0.19, **LEVELS), 0.015, 38, held={"bulkPerCm3": 2e16}, semiconductor=NARROW_GAP, bulk=2e16),
     lambda: Case("band bending, saturating fraction", "band-bending", "fraction", dict(surfacePotentialEv=0.3, **LEVELS), 0.006, 35, held={"bulkPerCm3": 4e16}, semiconductor=GERMANIUM, bulk=4e16, half=2e15),
     lambda: Case("band bending, saturating fraction, bulk with a prior, under a cap", "band-bending", "fraction", dict(surfacePotentialEv=0.3, bulkPerCm3=3.6e16, levelCap=0.5, **LEVELS), 0.005, 36, priors={"bulkPerCm3": [4e16, 8e15]}, semiconductor=WITHOUT_MINORITY, bulk=4e16, half=2e15, cap=8.0),
     lambda: Case("band bending, accumulation, saturating fraction", "band-bending", "fraction", dict(surfacePotentialEv=-0.07, **LEVELS), 0.003, 37, polarity="accumulation", held={"bulkPerCm3": 3e15, "levelTop": 0.72}, semiconductor=GERMANIUM, bulk=3e15, half=6e15),
