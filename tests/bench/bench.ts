@@ -10,12 +10,14 @@ import { spawnSync } from 'node:child_process';
 import { existsSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import {
+  carrierProfile,
   fit,
   foldCurve,
   foldScan,
   prepareFit,
   prepareFreeForm,
   resample,
+  runChecks,
   simulateScan,
   solveFreeForm,
   type FitAnswer,
@@ -129,6 +131,10 @@ function measure(ms: Record<string, number>): Case[] {
   const freeFormMs = medianMs(60, 20, (k) => {
     solveFreeForm(prepareFreeForm(freeFormInputs[k % SCANS]!));
   });
+  const checksMs = medianMs(40, 20, (k) => {
+    const { prepared, answer } = ready[k % SCANS]!;
+    runChecks(prepared, answer, carrierProfile(prepared, answer));
+  });
   return [
     {
       name: 'graded-full',
@@ -152,6 +158,12 @@ function measure(ms: Record<string, number>): Case[] {
       name: 'free-form',
       what: '40 knots, non-negative, L-curve of 40 points, all three choices of its strength',
       oursMs: freeFormMs,
+      peers: {},
+    },
+    {
+      name: 'checks',
+      what: 'profile with preview bands and every check',
+      oursMs: checksMs,
       peers: {},
     },
     {
