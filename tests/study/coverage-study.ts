@@ -1,12 +1,19 @@
 /**
- * How often the intervals of the edge, and the upper limit of its width, hold the truth of simulated scans.
+ * How often the intervals of the edge (of the surface potential, where bands bend), and the upper limit of its width, hold the
+ * truth of simulated scans. Some minutes.
  *
  *   npm run coverage-study             a Markdown table
  *   npm run coverage-study -- --json   {"scans", "settings": [{"name", ...counts}]}
  *   npm run coverage-study -- 200      with so many scans a setting in place of 2,000
  */
 import { coverageOf, type Coverage, type CoverageSetting } from '../inversion/support/coverage';
-import { fractionInput, freeWith, heldAt, rateInput } from '../inversion/support/scans';
+import {
+  ENERGIES_KEV,
+  fractionInput,
+  freeWith,
+  heldAt,
+  rateInput,
+} from '../inversion/support/scans';
 
 const SCANS = 2000;
 
@@ -15,6 +22,23 @@ const scale = freeWith(1, 0.03);
 const levels = { levelTop: 0.74, levelBulk: 0.32 };
 const heldLevels = { levelTop: heldAt(levels.levelTop), levelBulk: heldAt(levels.levelBulk) };
 const rates = { levelTop: 0.1, levelBulk: 2 };
+
+/** Neighbours correlated by 0.44, all by at least 0.3. */
+const correlated = (sigma: number): number[][] =>
+  ENERGIES_KEV.map((_, i) =>
+    ENERGIES_KEV.map((__, j) => sigma ** 2 * (0.3 + 0.7 * 0.2 ** Math.abs(i - j))),
+  );
+
+const carriersOf = (bulkPerCm3: number) => ({
+  carriers: { bulkPerCm3, bulkSigmaPerCm3: null, topPerCm3: null },
+});
+/** Germanium at 290 K with 4e16 cm⁻³: a Debye length of 24 nm. */
+const bent = {
+  profile: 'band-bending',
+  semiconductor: { relativePermittivity: 16, temperatureK: 290, intrinsicPerCm3: 2e13 },
+  ...carriersOf(4e16),
+} as const;
+const bentTruth = { surfacePotentialEv: 0.25, bulkPerCm3: 4e16, levelTop: 0.01, levelBulk: 3 };
 
 const SETTINGS: CoverageSetting[] = [
   {
@@ -95,6 +119,47 @@ const SETTINGS: CoverageSetting[] = [
     name: 'graded, rate, no carriers in front, σ 0.06',
     input: rateInput({}, 0.06),
     truth: { edgeDepthNm: 60, edgeWidthNm: 14, levelTop: 0.01, levelBulk: 1.5 },
+  },
+  {
+    name: 'graded, fraction, middle, σ 0.006, correlated points',
+    input: fractionInput({ covariance: correlated(0.006) }, 0.006),
+    truth: { edgeDepthNm: 75, edgeWidthNm: 18, ...levels },
+  },
+  {
+    name: 'graded, saturating fraction, middle, σ 0.004',
+    input: fractionInput(
+      {
+        response: { kind: 'saturating-fraction', halfPerCm3: 2e15, halfSigmaPerCm3: null },
+        ...carriersOf(2e16),
+      },
+      0.004,
+    ),
+    truth: { edgeDepthNm: 80, edgeWidthNm: 20, ...levels },
+  },
+  {
+    name: 'layer of 65 nm, rate, σ 0.03, far width held (near edge)',
+    input: rateInput({ profile: 'layer', parameters: { farEdgeWidthNm: heldAt(12) } }, 0.03),
+    truth: {
+      edgeDepthNm: 45,
+      edgeWidthNm: 14,
+      layerThicknessNm: 65,
+      farEdgeWidthNm: 12,
+      levelTop: 0.1,
+      levelBulk: 3,
+    },
+  },
+  {
+    name: 'band bending, rate, σ 0.05 (surface potential)',
+    input: rateInput({ ...bent, parameters: { levelTop: heldAt(0.01) } }, 0.05),
+    truth: bentTruth,
+  },
+  {
+    name: 'band bending, rate, σ 0.05, prior on the bulk (surface potential)',
+    input: rateInput(
+      { ...bent, parameters: { levelTop: heldAt(0.01), bulkPerCm3: freeWith(4e16, 6e15) } },
+      0.05,
+    ),
+    truth: bentTruth,
   },
 ];
 

@@ -10,7 +10,10 @@ import {
 import { normalStream } from '@/lib/inversion/statistics/random';
 import { free } from './scans';
 
-/** What is measured of the intervals: scans from one truth, fitted by one input. */
+/**
+ * What is measured of the intervals: scans from one truth, fitted by one input. "Edge" is what places the profile: the depth of its
+ * (near) edge, for band bending the surface potential.
+ */
 export interface CoverageSetting {
   name: string;
   /** Energies, σ, trial profile, priors; the values of its points are not read. */
@@ -59,7 +62,8 @@ const holds = ([lower, upper]: Interval, truth: number): boolean =>
 /** Simulates, fits and counts. Seeds run on from firstSeed. */
 export function coverageOf(setting: CoverageSetting, scans: number, firstSeed: number): Coverage {
   const { input } = setting;
-  const fitsWidth = input.profile === 'graded' && !input.parameters.edgeWidthNm?.held;
+  const place = input.profile === 'band-bending' ? 'surfacePotentialEv' : 'edgeDepthNm';
+  const fitsWidth = setting.truth.edgeWidthNm !== undefined && !input.parameters.edgeWidthNm?.held;
   const count: Coverage = {
     scans,
     noMinimum: 0,
@@ -80,7 +84,7 @@ export function coverageOf(setting: CoverageSetting, scans: number, firstSeed: n
       seed,
     });
     const outcome = fit(prepareFit({ ...input, points }), {
-      intervalsFor: ['edgeDepthNm', 'edgeWidthNm'],
+      intervalsFor: [place, 'edgeWidthNm'],
     });
     if (outcome.status === 'no-minimum') {
       count.noMinimum++;
@@ -88,12 +92,12 @@ export function coverageOf(setting: CoverageSetting, scans: number, firstSeed: n
     }
     if (outcome.status !== 'converged') count.notConverged++;
     const { parameters } = outcome.answer;
-    const edge = parameters.find(({ name }) => name === 'edgeDepthNm')!;
+    const edge = parameters.find(({ name }) => name === place)!;
     const ends = edge.interval95.filter((end) => end !== null).length;
     if (ends === 1) count.oneSided++;
     if (ends === 0) count.open++;
-    if (holds(edge.interval68, truth.edgeDepthNm!)) count.edge68++;
-    if (holds(edge.interval95, truth.edgeDepthNm!)) count.edge95++;
+    if (holds(edge.interval68, truth[place]!)) count.edge68++;
+    if (holds(edge.interval95, truth[place]!)) count.edge95++;
     if (!fitsWidth) continue;
     const width = parameters.find(({ name }) => name === 'edgeWidthNm')!;
     const right = holds([null, width.interval95[1]], truth.edgeWidthNm!);
