@@ -6,7 +6,7 @@ import {
   type State,
   type Trial,
 } from './least-squares-problem';
-import { runLibraryBlock } from './library-block';
+import { BLOCK, runLibraryBlock } from './library-block';
 
 export interface LeastSquaresResult {
   chiSquare: number;
@@ -29,6 +29,8 @@ const FIRST_DAMPING = 1e-3;
 const LARGEST_DAMPING = 1e12;
 /** What a step promises, relative to χ², below which χ² itself is too coarse to judge it. */
 const NEAR = 1e-9;
+/** Near the minimum a step squares what is left: one iteration of the library, and a look whether that was so. */
+const ONE_IS_ENOUGH = 1e-3;
 
 /**
  * Levenberg-Marquardt by ml-levenberg-marquardt, made to hold up: data whitened (weights 1), parameters scaled by the column
@@ -79,7 +81,8 @@ export function leastSquares(
       }
     }
     const before = chiSquare;
-    take(runLibraryBlock(problem, theta, state, moving, damping));
+    const iterationsWanted = promised < ONE_IS_ENOUGH * (chiSquare + floor) ? 1 : BLOCK;
+    take(runLibraryBlock(problem, theta, state, moving, damping, iterationsWanted));
     if (before - chiSquare >= 0.5 * promised) {
       damping = Math.max(damping / 100, 1e-7);
       continue;

@@ -7,8 +7,9 @@ import {
   type Trial,
 } from './least-squares-problem';
 
-/** Iterations of the library between two looks at the gradient: it has no test of its own that stops on noisy data. */
-const BLOCK = 3;
+/** Most iterations of the library between two looks at the gradient: it has no test of its own that stops on noisy data. */
+export const BLOCK = 3;
+
 /** A few iterations of ml-levenberg-marquardt on the movable parameters, scaled to order one. */
 export function runLibraryBlock(
   problem: LeastSquaresProblem,
@@ -16,6 +17,7 @@ export function runLibraryBlock(
   { jacobian, predicted }: State,
   { index, scale }: Moving,
   damping: number,
+  maxIterations: number,
 ): Trial {
   const { rows, lower, upper, target } = problem;
   const point = Float64Array.from(theta);
@@ -50,7 +52,7 @@ export function runLibraryBlock(
           return (i) => index.map((k, a) => jacobian[k * rows + i]! * scale[a]!);
         },
         damping,
-        maxIterations: BLOCK,
+        maxIterations,
         errorTolerance: 0,
       },
     );

@@ -40,11 +40,16 @@ function whitened(
   const priors = free.filter((k) => priorInverseSigma[k]! > 0);
   const rows = rowCount + priors.length;
   const full = Float64Array.from(theta);
+  // Value and Jacobian of one point are asked for in turn: it is folded once.
+  let folded = false;
   const foldPoint = (values: ArrayLike<number>): void => {
-    free.forEach((k, a) => {
-      full[k] = values[a]!;
-    });
-    foldAt(model, work, full);
+    for (let a = 0; a < free.length; a++) {
+      if (full[free[a]!] === values[a]!) continue;
+      full[free[a]!] = values[a]!;
+      folded = false;
+    }
+    if (!folded) foldAt(model, work, full);
+    folded = true;
   };
   return {
     size: free.length,

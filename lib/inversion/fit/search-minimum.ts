@@ -2,10 +2,13 @@ import type { FitStatus } from '../types';
 import { minimise, type MinimiseScratch } from './minimise';
 import type { Problem } from './model';
 import { polish } from './polish';
-import type { RefineResult } from './refine';
+import { refine, type RefineResult } from './refine';
 import { scanGrid, startNodes, thetaOfNode } from './search';
 import { openWidths } from './widths';
 
+/** With many shape parameters a node says little of how deep its valley is; a few steps say enough to choose these many. */
+const MOST_FOLLOWED = 6;
+const FIRST_STEPS = { maxIterations: 8, tolerance: 1e-3 };
 /** Convergence: what Φ may still fall by, relative to 1 + Φ: to tell valleys apart, for the polish, at the end. */
 const VALLEY = { maxIterations: 60, tolerance: 1e-5 };
 const POLISH_TOLERANCE = 1e-8;
@@ -24,8 +27,8 @@ export interface GlobalMinimum {
 }
 
 /**
- * Global minimum of Φ: χ² on the whole lattice of edges and widths with the levels solved exactly, then the best valleys
- * polished, then the best of them to the last digits.
+ * Global minimum of Φ: χ² on the whole lattice of the shape with the levels solved exactly, then the best valleys polished (of
+ * many, those that a few steps show to be deep), then the best of them to the last digits.
  */
 export function searchMinimum(problem: Problem, scratch: MinimiseScratch): GlobalMinimum {
   const { model } = problem;
@@ -36,15 +39,26 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   let best = Infinity;
   let iterations = 0;
   const theta = new Float64Array(size);
-  const trial = new Float64Array(size);
-  for (const node of nodes) {
-    thetaOfNode(model, node, neutral, trial);
-    openWidths(model, trial, model.held);
-    const result = minimise(problem, trial, held, scratch, VALLEY);
+  const starts = nodes.map((node) => {
+    const start = new Float64Array(size);
+    thetaOfNode(model, node, neutral, start);
+    openWidths(model, start, held);
+    return { start, chiSquare: chiSquares[node]! };
+  });
+  if (starts.length > MOST_FOLLOWED) {
+    for (const tried of starts) {
+      const result = refine(problem, tried.start, held, scratch.refine, FIRST_STEPS);
+      iterations += result.iterations;
+      tried.chiSquare = result.chiSquare;
+    }
+    starts.sort((a, b) => a.chiSquare - b.chiSquare).splice(MOST_FOLLOWED);
+  }
+  for (const { start } of starts) {
+    const result = minimise(problem, start, held, scratch, VALLEY);
     iterations += result.iterations;
     if (result.chiSquare < best) {
       best = result.chiSquare;
-      theta.set(trial);
+      theta.set(start);
     }
   }
   const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };

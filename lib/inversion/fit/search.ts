@@ -141,12 +141,11 @@ function noneBelow(
   const { length } = axes[k]!;
   const place = Math.floor(node / stride) % length;
   const next = stride * length;
-  const onwards = (at: number): boolean =>
-    noneBelow(axes, chiSquares, apart, node, at, k + 1, next);
-  if (!onwards(from)) return false;
+  if (!noneBelow(axes, chiSquares, apart, node, from, k + 1, next)) return false;
   if (apart.includes(k)) return true;
   return (
-    (place === 0 || onwards(from - stride)) && (place === length - 1 || onwards(from + stride))
+    (place === 0 || noneBelow(axes, chiSquares, apart, node, from - stride, k + 1, next)) &&
+    (place === length - 1 || noneBelow(axes, chiSquares, apart, node, from + stride, k + 1, next))
   );
 }
 

@@ -76,7 +76,7 @@ export function layer(deepestNm: number): TrialProfile {
         widthAxis(WIDTH_SHARES, deepestNm),
       ];
     },
-    starts: 12,
+    starts: 24,
     fold(kernel, shape, capNm, scale, out) {
       foldCumulative(kernel, capNm, scale, out, (scratch, first, count, derivatives) =>
         cumulate(shape, scratch, first, count, derivatives),

@@ -1,7 +1,7 @@
 import { fillJacobian, foldAt } from '../fit/evaluate';
 import type { Problem } from '../fit/model';
 import { covarianceOfJacobian } from '../linalg/covariance-of-jacobian';
-import type { Covariance } from '../types';
+import type { Covariance, ParameterName } from '../types';
 
 /**
  * Covariance (JᵀV⁻¹J + priors)⁻¹ at the minimum from the analytic Jacobian, over the free parameters that are not at a bound.
@@ -38,4 +38,11 @@ export function covarianceAt(problem: Problem, theta: Float64Array): Covariance 
     row.map((value, b) => (a === b ? 1 : value / Math.sqrt(matrix[a]![a]! * matrix[b]![b]!))),
   );
   return { ok: true, names, matrix, correlation };
+}
+
+/** σ of a parameter; null where the covariance does not have it. */
+export function sigmaOf(covariance: Covariance, name: ParameterName): number | null {
+  if (!covariance.ok) return null;
+  const k = covariance.names.indexOf(name);
+  return k < 0 ? null : Math.sqrt(covariance.matrix[k]![k]!);
 }

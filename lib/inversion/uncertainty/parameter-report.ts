@@ -1,7 +1,8 @@
 import type { MinimiseScratch } from '../fit/minimise';
 import type { Problem } from '../fit/model';
-import type { Covariance, FitParameter, Interval, ParameterName } from '../types';
+import type { FitParameter, Interval, ParameterName } from '../types';
 import { SIGMAS_68, SIGMAS_95 } from './bands';
+import { sigmaOf } from './covariance';
 import { profileIntervals, type MinimumPoint } from './profile-likelihood';
 
 /** A linear error bar may stand for an interval when each side agrees with it within a third. */
@@ -74,10 +75,4 @@ function agrees(
   return [value - lower, upper - value].every(
     (side) => Math.abs(side - sigma) <= AGREEMENT * sigma,
   );
-}
-
-function sigmaOf(covariance: Covariance, name: ParameterName): number | null {
-  if (!covariance.ok) return null;
-  const k = covariance.names.indexOf(name);
-  return k < 0 ? null : Math.sqrt(covariance.matrix[k]![k]!);
 }

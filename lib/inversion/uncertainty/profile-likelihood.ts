@@ -3,6 +3,7 @@ import { minimise, type MinimiseScratch } from '../fit/minimise';
 import type { Model, Problem } from '../fit/model';
 import { openWidths } from '../fit/widths';
 import type { Covariance, Interval } from '../types';
+import { sigmaOf } from './covariance';
 
 export interface ProfileIntervals {
   interval68: Interval;
@@ -19,10 +20,18 @@ export interface MinimumPoint {
 }
 
 /**
- * A rise this close to the target, relative, is corrected by the slope of √Φ and not evaluated again: what is left is a
- * thousandth of a quarter per cent of the half-width.
+ * A rise this close to the target, relative, is corrected by the slope and bend of √Φ and not evaluated again: that moves an end
+ * by half of it, and what is left by the third order, a few ten-thousandths of the half-width.
  */
-const TARGET_TOLERANCE = 5e-3;
+const TARGET_TOLERANCE = 0.025;
+/** The same where the bend at the minimum is not known. */
+const BLIND_TOLERANCE = 0.005;
+/** How far a bend may lead from the straight line, to look for an end and to state one. */
+const FAR = 0.9;
+const CLOSE = 0.02;
+/** After so many steps outward Φ is flat, and strides are long. */
+const SHORT_STEPS = 2;
+const STRIDE = 1.15;
 /** Φ is corrected by what the last step promises, so that little is left of the tolerance. */
 const INNER = { maxIterations: 200, tolerance: 1e-5, takeLastStep: true };
 /** A fall of Φ by more than this is a new minimum, less is rounding. */
@@ -80,7 +89,7 @@ function walkSide(
       inside = { x: bound, rise: 0 };
       continue;
     }
-    const root = findRoot(line, bracket.inside, bracket.outside, target);
+    const root = findRoot(line, minimum.theta[k]!, bracket.inside, bracket.outside, target);
     ends.push(root);
     inside = { x: root, rise: target };
   }
@@ -90,6 +99,8 @@ function walkSide(
 interface Line {
   /** Rise of the profiled Φ over the minimum at θ_k = x. */
   rise: (x: number) => number;
+  /** σ of θ_k at the minimum: √Φ sets out with the slope 1/σ. null where there is none. */
+  sigma: number | null;
   step: number;
   better: Float64Array | null;
 }
@@ -106,9 +117,11 @@ function createLine(
   held[k] = 1;
   const point = Float64Array.from(theta);
   const slopes = slopesAlong(problem, covariance, k);
+  const sigma = sigmaOf(covariance, model.names[k]!);
   const afresh = model.shapeCount > TWO_SHAPES ? new Float64Array(model.size) : null;
   const line: Line = {
-    step: firstStep(problem, theta, covariance, k),
+    sigma,
+    step: firstStep(problem, theta, sigma, k),
     better: null,
     rise(x) {
       moveTo(model, point, held, slopes, k, x);
@@ -164,22 +177,42 @@ function slopesAlong({ model }: Problem, covariance: Covariance, k: number): Flo
 function firstStep(
   { model }: Problem,
   theta: Float64Array,
-  covariance: Covariance,
+  sigma: number | null,
   k: number,
 ): number {
   const span = Number.isFinite(model.upper[k]!)
     ? model.upper[k]! - model.lower[k]!
     : Math.max(1, 2 * Math.abs(theta[k]!));
-  if (covariance.ok) {
-    const at = covariance.names.indexOf(model.names[k]!);
-    if (at >= 0) return Math.min(Math.sqrt(covariance.matrix[at]![at]!), span * FIRST_SHARE);
-  }
-  return span / 20;
+  return sigma === null ? span / 20 : Math.min(sigma, span * FIRST_SHARE);
 }
 
 interface Point {
   x: number;
   rise: number;
+}
+
+/**
+ * Where √Φ reaches the target if it goes on as √rise = d/σ + b·d², b from the point known; straight on where σ is not known, and
+ * where the two differ by more than `trust`: σ says nothing where a bound or a kink has changed the slope on the way.
+ */
+function reachOfTarget(
+  sigma: number | null,
+  reach: number,
+  rise: number,
+  target: number,
+  trust: number,
+): number {
+  const straight = reach * Math.sqrt(target / Math.max(rise, target / 9));
+  if (sigma === null) return straight;
+  const goal = Math.sqrt(target);
+  const bend = (Math.sqrt(rise) - reach / sigma) / (reach * reach);
+  const root = 1 / (sigma * sigma) + 4 * bend * goal;
+  const bent = root > 0 ? (2 * goal) / (1 / sigma + Math.sqrt(root)) : Infinity;
+  return Math.abs(bent / straight - 1) < trust ? bent : straight;
+}
+
+function toleranceOf({ sigma }: Line): number {
+  return sigma === null ? BLIND_TOLERANCE : TARGET_TOLERANCE;
 }
 
 /** Walks outward until Φ has risen by the target; null when the bound comes first. */
@@ -193,20 +226,20 @@ function findBracket(
 ): { inside: Point; outside: Point } | null {
   let inside = from;
   let reach = Math.max(Math.abs(from.x - centre), 0);
-  let next = Math.max(
-    line.step * Math.sqrt(target),
-    reach > 0 ? reach * Math.sqrt(target / Math.max(from.rise, target / 9)) : 0,
-  );
+  let next =
+    reach > 0
+      ? reachOfTarget(line.sigma, reach, from.rise, target, FAR)
+      : line.step * Math.sqrt(target);
   for (let step = 0; step < MOST_STEPS; step++) {
     if (inside.x === bound) return null;
-    let x = centre + direction * Math.max(next, reach * 1.001);
+    let x = centre + direction * Math.max(next, reach * (step > SHORT_STEPS ? STRIDE : 1.001));
     if (direction * (x - bound) > 0) x = bound;
     const rise = line.rise(x);
     if (line.better) return null;
-    if (rise >= target) return { inside, outside: { x, rise } };
+    if (rise >= target * (1 - toleranceOf(line))) return { inside, outside: { x, rise } };
     inside = { x, rise };
     reach = Math.abs(x - centre);
-    next = reach * Math.min(3, 1.05 * Math.sqrt(target / Math.max(rise, target / 9)));
+    next = reachOfTarget(line.sigma, reach, rise, target, FAR);
   }
   return null;
 }
@@ -215,7 +248,13 @@ function findBracket(
  * Crossing of the target between two points: √Φ rises nearly linearly, so the secant on it, kept inside the bracket by the
  * Illinois rule, needs few steps, and the last of them none at all.
  */
-function findRoot(line: Line, inside: Point, outside: Point, target: number): number {
+function findRoot(
+  line: Line,
+  centre: number,
+  inside: Point,
+  outside: Point,
+  target: number,
+): number {
   const goal = Math.sqrt(target);
   const height = ({ rise }: Point): number => Math.sqrt(rise) - goal;
   let before = inside;
@@ -224,8 +263,13 @@ function findRoot(line: Line, inside: Point, outside: Point, target: number): nu
   let low = { x: inside.x, height: height(inside) };
   let high = { x: outside.x, height: height(outside) };
   for (let step = 0; step < MOST_STEPS; step++) {
-    if (Math.abs(last.rise - target) <= TARGET_TOLERANCE * target)
-      return crossing(before, last, height);
+    if (Math.abs(last.rise - target) <= toleranceOf(line) * target) {
+      const reach = Math.abs(last.x - centre);
+      return (
+        centre +
+        Math.sign(last.x - centre) * reachOfTarget(line.sigma, reach, last.rise, target, CLOSE)
+      );
+    }
     const x = low.x - (low.height * (high.x - low.x)) / (high.height - low.height);
     if (!(Math.abs(high.x - low.x) > 1e-12 * Math.abs(x))) return x;
     before = last;
@@ -241,10 +285,4 @@ function findRoot(line: Line, inside: Point, outside: Point, target: number): nu
     }
   }
   return last.x;
-}
-
-/** Where the straight line through two points on √Φ meets the target. */
-function crossing(a: Point, b: Point, height: (point: Point) => number): number {
-  const rise = height(b) - height(a);
-  return rise === 0 ? b.x : b.x - (height(b) * (b.x - a.x)) / rise;
 }
