@@ -11,6 +11,7 @@ import {
   prepareFit,
   resample,
   runChecks,
+  type Check,
   type FitAnswer,
   type FitInput,
   type PreparedFit,
@@ -28,6 +29,8 @@ const QUICK_MS = 4;
 interface Job {
   prepared: PreparedFit;
   answer: FitAnswer;
+  /** Of the worker that fitted: no check depends on the bands. */
+  checks: readonly Check[];
 }
 
 /** The work of one worker, without the thread round it. */
@@ -49,12 +52,13 @@ export function createInversionService(): InversionApi {
         const prepared = prepareFit(input);
         const outcome = fit(prepared);
         if (outcome.status === 'no-minimum') throw new InversionError('no-minimum', outcome.reason);
-        jobs.set(id, { prepared, answer: outcome.answer });
-        return firstAnswer(prepared, outcome.answer);
+        const first = firstAnswer(prepared, outcome.answer);
+        jobs.set(id, { prepared, answer: outcome.answer, checks: first.checks });
+        return first;
       }),
     adopt: async (id, input: FitInput, answer) =>
       reply(() => {
-        jobs.set(id, { prepared: prepareFit(input), answer });
+        jobs.set(id, { prepared: prepareFit(input), answer, checks: [] });
         return 'ready' as const;
       }),
     resample: async (id, block) => {
@@ -68,11 +72,11 @@ export function createInversionService(): InversionApi {
     },
     bands: async (id, rows) =>
       reply(() => {
-        const { prepared, answer } = jobOf(id);
+        const { prepared, answer, checks } = jobOf(id);
         const depthsNm = defaultDepthGrid(prepared, answer);
         const bands = bootstrapBands(prepared, answer, rows, depthsNm);
         const profile = carrierProfile(prepared, answer, bands, { depthsNm: Array.from(depthsNm) });
-        return { profile, checks: runChecks(prepared, answer, profile) };
+        return { profile, checks: [...checks] };
       }),
     close: async (id) => {
       jobs.delete(id);

@@ -26,19 +26,19 @@ export function bootstrapBands(
       `Bands need at least two whole rows of ${freeNames.length} parameters.`,
     );
   }
-  const fixed = valuesOf(answer);
-  const values = Array.from({ length: count }, (_, r) => {
-    const row: ParameterValues = { ...fixed };
+  // Row by row: a profile may have to be made ready for the parameters of its row.
+  const values = new Float64Array(depthsNm.length * count);
+  const row: ParameterValues = valuesOf(answer);
+  for (let r = 0; r < count; r++) {
     freeNames.forEach((name, k) => {
       row[name] = rows[r * freeNames.length + k]!;
     });
-    return profileValue(prepared, row);
-  });
+    const value = profileValue(prepared, row);
+    for (let k = 0; k < depthsNm.length; k++) values[k * count + r] = value(depthsNm[k]!);
+  }
   const bands = emptyBands('bootstrap', depthsNm);
-  const column = new Float64Array(count);
   for (let k = 0; k < depthsNm.length; k++) {
-    for (let r = 0; r < count; r++) column[r] = values[r]!(depthsNm[k]!);
-    column.sort();
+    const column = values.subarray(k * count, (k + 1) * count).sort();
     bands.lower68[k] = quantileOf(column, TAIL_68);
     bands.upper68[k] = quantileOf(column, 1 - TAIL_68);
     bands.lower95[k] = quantileOf(column, TAIL_95);
