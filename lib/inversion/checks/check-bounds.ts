@@ -1,4 +1,5 @@
-import { IN_WORDS, figure, listOf, type FitCheck } from './check-context';
+import { IN_WORDS } from '../parameter-words';
+import { figure, listOf, type FitCheck } from './check-context';
 
 /** Parameters pressed against a bound: their error bar is one-sided, and another model may be meant. */
 export const checkBounds: FitCheck = ({ answer }) => {

@@ -23,20 +23,6 @@ export function locatorOf({ answer }: CheckContext): FitParameter {
   return answer.parameters[0]!;
 }
 
-/** Parameter names as words in a sentence. */
-export const IN_WORDS: Readonly<Record<ParameterName, string>> = {
-  edgeDepthNm: 'the edge depth',
-  edgeWidthNm: 'the edge width',
-  layerThicknessNm: 'the layer thickness',
-  farEdgeWidthNm: 'the width of the far edge',
-  surfacePotentialEv: 'the band bending at the surface',
-  bulkPerCm3: 'the bulk concentration',
-  levelTop: 'the level above the edge',
-  levelBulk: 'the level below the edge',
-  levelCap: 'the level of the cap',
-  depthScale: 'the depth scale',
-};
-
 /** What a sentence calls the locator, and its unit. */
 export function locatorWords({ name }: FitParameter): { what: string; unit: string } {
   return name === 'surfacePotentialEv'

@@ -1,4 +1,5 @@
-import { IN_WORDS, type FitCheck } from './check-context';
+import { IN_WORDS } from '../parameter-words';
+import { type FitCheck } from './check-context';
 
 const STRONG = 0.95;
 

@@ -1,4 +1,5 @@
-import { figure, IN_WORDS, locatorOf, parameterOf, percent, type FitCheck } from './check-context';
+import { IN_WORDS } from '../parameter-words';
+import { figure, locatorOf, parameterOf, percent, type FitCheck } from './check-context';
 
 /** How much of the uncertainty of the edge is the assumed accuracy of the stopping calculation. */
 export const checkDepthScale: FitCheck = (context) => {

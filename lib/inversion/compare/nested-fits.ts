@@ -1,3 +1,4 @@
+import { IN_WORDS, sentence } from '../parameter-words';
 import { InversionError } from '../errors';
 import type { PreparedFit } from '../fit/prepared-fit';
 import type { FitAnswer, ParameterName } from '../types';
@@ -42,12 +43,14 @@ function whyNotNested(
 ): string | null {
   const a = settingOf(simpler, name);
   const b = settingOf(richer, name);
-  if (!b) return `The richer fit has no ${name}, so the simpler one is no special case of it.`;
-  if (!a!.held && b.held) return `${name} is held in the richer fit and free in the simpler one.`;
+  if (!b)
+    return `The richer fit has no parameter for ${IN_WORDS[name]}, so the simpler one is no special case of it.`;
+  if (!a!.held && b.held)
+    return `${sentence(name)} is held in the richer fit and free in the simpler one.`;
   if (a!.held && b.held && a!.neutral !== b.neutral)
-    return `${name} is held at different values in the two fits.`;
+    return `${sentence(name)} is held at different values in the two fits.`;
   if (!a!.held && (a!.weight !== b.weight || a!.mean !== b.mean))
-    return `${name} has different priors in the two fits.`;
+    return `${sentence(name)} has different priors in the two fits.`;
   return null;
 }
 

@@ -3,6 +3,7 @@ import { InversionError } from '../errors';
 import { RESPONSES } from '../response/responses';
 import { isNumber, isPositive } from './number-range';
 import type { ShapeParameter, TrialProfile } from '../profile/trial-profile';
+import { IN_WORDS, sentence } from '../parameter-words';
 import type { FitInput, GaussianPrior, ParameterName, ParameterSetting } from '../types';
 
 /** Depth scales beyond a factor of two are not an error of a stopping calculation but a wrong layer or a wrong unit. */
@@ -85,19 +86,21 @@ function checkSetting(
   upper: number,
 ): void {
   if (held && (value === null || !Number.isFinite(value))) {
-    throw new InversionError('no-held-value', `${name} is held but has no value.`, { name });
+    throw new InversionError('no-held-value', `${sentence(name)} is held but has no value.`, {
+      name,
+    });
   }
   if (held && !(value! >= lower && value! <= upper)) {
     throw new InversionError(
       'held-out-of-bounds',
-      `${name} is held at ${value!}, which lies outside ${lower} to ${Number.isFinite(upper) ? upper : 'any positive value'}.`,
+      `${sentence(name)} is held at ${value!}, which lies outside ${lower} to ${Number.isFinite(upper) ? upper : 'any positive value'}.`,
       { name, lower, upper },
     );
   }
   if (!held && prior && !(isNumber(prior.mean) && isPositive(prior.sigma))) {
     throw new InversionError(
       'bad-prior',
-      `The prior of ${name} needs a finite mean and a positive uncertainty.`,
+      `The prior of ${IN_WORDS[name]} needs a finite mean and a positive uncertainty.`,
       { name },
     );
   }

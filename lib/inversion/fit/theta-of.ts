@@ -1,4 +1,5 @@
 import { InversionError } from '../errors';
+import { IN_WORDS, sentence } from '../parameter-words';
 import type { FitAnswer, ParameterName, ParameterValues } from '../types';
 import type { PreparedFit } from './prepared-fit';
 
@@ -22,7 +23,7 @@ export function thetaOf({ problem }: PreparedFit, values: ParameterValues): Floa
     if (value === undefined || !Number.isFinite(value)) {
       throw new InversionError(
         'no-value',
-        `A finite value of ${name} is needed, not ${value ?? 'none'}.`,
+        `A finite value of ${IN_WORDS[name]} is needed, not ${value ?? 'none'}.`,
         { name },
       );
     }
@@ -32,7 +33,7 @@ export function thetaOf({ problem }: PreparedFit, values: ParameterValues): Floa
       (name === 'depthScale' && value <= 0) ||
       (bounded && !(value >= model.lower[k]! && value <= model.upper[k]!))
     ) {
-      throw new InversionError('bad-value', `${name} cannot be ${value}.`, { name });
+      throw new InversionError('bad-value', `${sentence(name)} cannot be ${value}.`, { name });
     }
     return value;
   });

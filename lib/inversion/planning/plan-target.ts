@@ -1,3 +1,4 @@
+import { IN_WORDS, sentence } from '../parameter-words';
 import type { PreparedFit } from '../fit/prepared-fit';
 import type { FitAnswer, Interval, ParameterName } from '../types';
 import { SIGMAS_68, SIGMAS_95 } from '../uncertainty/bands';
@@ -29,16 +30,17 @@ export function planTarget(
 ): TargetOutcome {
   const parameter = parameters.find((candidate) => candidate.name === name);
   const refuse = (reason: string): TargetOutcome => ({ ok: false, reason });
-  if (!parameter) return refuse(`This trial profile has no ${name}.`);
-  if (parameter.held) return refuse(`${name} is held, so no point makes it better known.`);
+  if (!parameter) return refuse(`This trial profile has no parameter for ${IN_WORDS[name]}.`);
+  if (parameter.held)
+    return refuse(`${sentence(name)} is held, so no point makes it better known.`);
   if (parameter.atBound !== null)
     return refuse(
-      `${name} is at its ${parameter.atBound} bound, where its uncertainty is not that of a normal distribution and cannot be predicted.`,
+      `${sentence(name)} is at its ${parameter.atBound} bound, where its uncertainty is not that of a normal distribution and cannot be predicted.`,
     );
   if (!covariance.ok)
     return refuse(`The present fit has no covariance to plan from: ${covariance.reason}`);
   const index = covariance.names.indexOf(name);
-  if (index < 0) return refuse(`The present covariance does not contain ${name}.`);
+  if (index < 0) return refuse(`The present covariance does not contain ${IN_WORDS[name]}.`);
   const columns = covariance.names.map((free) => parameterNames.indexOf(free));
   return {
     ok: true,

@@ -1,6 +1,7 @@
 import { fillJacobian, foldAt } from '../fit/evaluate';
 import type { Problem } from '../fit/model';
 import { covarianceOfJacobian } from '../linalg/covariance-of-jacobian';
+import { IN_WORDS } from '../parameter-words';
 import type { Covariance, ParameterName } from '../types';
 
 /**
@@ -29,8 +30,8 @@ export function covarianceAt(problem: Problem, theta: Float64Array): Covariance 
   if (!result.ok) {
     const reason =
       result.blind === 'dependent'
-        ? `The points leave a combination of ${names.join(', ')} undetermined.`
-        : `The points do not depend on ${names[result.blind]!}.`;
+        ? `The points leave a combination of ${names.map((name) => IN_WORDS[name]).join(', ')} undetermined.`
+        : `The points do not depend on ${IN_WORDS[names[result.blind]!]}.`;
     return { ok: false, reason };
   }
   const { matrix } = result;

@@ -23,7 +23,7 @@ export interface MinimumPoint {
  * A rise this close to the target, relative, is corrected by the slope and bend of √Φ and not evaluated again: that moves an end
  * by half of it, and what is left by the third order, a few ten-thousandths of the half-width.
  */
-const TARGET_TOLERANCE = 0.025;
+const TARGET_TOLERANCE = 0.015;
 /** The same where the bend at the minimum is not known. */
 const BLIND_TOLERANCE = 0.005;
 /** How far a bend may lead from the straight line, to look for an end and to state one. */
@@ -90,7 +90,8 @@ function walkSide(
       continue;
     }
     const root = findRoot(line, minimum.theta[k]!, bracket.inside, bracket.outside, target);
-    ends.push(root);
+    // The last stretch is not walked but calculated, and may lead past the bound: then Φ does not rise so far before it.
+    ends.push(direction * (root - bound) > 0 ? naturalEnd : root);
     inside = { x: root, rise: target };
   }
   return { ends, better: line.better };

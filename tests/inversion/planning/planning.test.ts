@@ -194,7 +194,7 @@ describe('the best next energy', () => {
     };
     const held = noiseFree(fractionInput({ parameters: { levelTop: heldAt(0.74) } }), truth);
     expect(reasonOf(held, 'levelTop')).toMatch(/is held/);
-    expect(reasonOf(held, 'levelCap')).toMatch(/no levelCap/);
+    expect(reasonOf(held, 'levelCap')).toMatch(/no parameter for the level of the cap/);
     // About half of the scans of a sharp edge end at width zero.
     const atZero = Array.from({ length: 8 }, (_, seed) => {
       const values = { ...truth, edgeWidthNm: 0 };
