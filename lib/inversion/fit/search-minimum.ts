@@ -24,6 +24,8 @@ export interface GlobalMinimum {
   predictedReduction: number;
   /** Largest χ² over the first shape parameter on the lattice, each at the best of the others: how much it matters at all. */
   highestChiSquare: number;
+  /** χ² of the nodes of the lattice. */
+  nodeChiSquares: Float64Array;
 }
 
 /**
@@ -64,7 +66,10 @@ export function searchMinimum(problem: Problem, scratch: MinimiseScratch): Globa
   const evidence = { folds: grid.nodeCount + iterations, starts: nodes.length, iterations };
   if (!model.trial.kinked)
     evidence.iterations += polish(problem, theta, POLISH_TOLERANCE).iterations;
-  return finish(problem, scratch, theta, evidence, highestOverDepths(grid.axes, chiSquares));
+  return finish(problem, scratch, theta, evidence, {
+    highestChiSquare: highestOverDepths(grid.axes, chiSquares),
+    nodeChiSquares: chiSquares,
+  });
 }
 
 /** The minimum below a point that lies lower than the one known. */
@@ -79,7 +84,7 @@ export function followMinimum(
     starts: before.starts + 1,
     iterations: before.iterations,
   };
-  return finish(problem, scratch, Float64Array.from(better), evidence, before.highestChiSquare);
+  return finish(problem, scratch, Float64Array.from(better), evidence, before);
 }
 
 function finish(
@@ -87,7 +92,7 @@ function finish(
   scratch: MinimiseScratch,
   theta: Float64Array,
   evidence: { folds: number; starts: number; iterations: number },
-  highestChiSquare: number,
+  { highestChiSquare, nodeChiSquares }: Pick<GlobalMinimum, 'highestChiSquare' | 'nodeChiSquares'>,
 ): GlobalMinimum {
   const result = minimise(problem, theta, problem.model.held, scratch, FINAL);
   const chiSquare = closeWidths(problem, theta, result.chiSquare, scratch);
@@ -100,6 +105,7 @@ function finish(
     iterations: evidence.iterations + result.iterations,
     predictedReduction: result.predictedReduction,
     highestChiSquare,
+    nodeChiSquares,
   };
 }
 

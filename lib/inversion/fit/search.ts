@@ -149,7 +149,8 @@ function noneBelow(
   );
 }
 
-function areNeighbours(axes: readonly Float64Array[], a: number, b: number): boolean {
+/** Whether two nodes are no more than one place apart along every axis. */
+export function areNeighbours(axes: readonly Float64Array[], a: number, b: number): boolean {
   let stride = 1;
   for (const { length } of axes) {
     const apart = (Math.floor(a / stride) % length) - (Math.floor(b / stride) % length);

@@ -4,6 +4,7 @@ import type { Model, Problem } from '../fit/model';
 import { openWidths } from '../fit/widths';
 import type { Covariance, Interval } from '../types';
 import { sigmaOf } from './covariance';
+import { otherValleys } from './other-valleys';
 
 export interface ProfileIntervals {
   interval68: Interval;
@@ -17,6 +18,8 @@ export interface MinimumPoint {
   theta: Float64Array;
   chiSquare: number;
   covariance: Covariance;
+  /** χ² of the nodes of the search. */
+  nodeChiSquares: Float64Array;
 }
 
 /**
@@ -37,7 +40,10 @@ const INNER = { maxIterations: 200, tolerance: 1e-5, takeLastStep: true };
 /** A fall of Φ by more than this is a new minimum, less is rounding. */
 const NEW_MINIMUM = 1e-4;
 const MOST_STEPS = 40;
-/** With more shape parameters a valley bends: each point is also reached from the minimum itself, and the lower one counts. */
+/**
+ * With more shape parameters a valley bends and others run beside it: each point is also reached from the minimum itself and from
+ * nodes of the search, and the lowest counts.
+ */
 const TWO_SHAPES = 2;
 /** A first step further than this share of the range would leave the valley of a poorly known parameter. */
 const FIRST_SHARE = 1 / 8;
@@ -110,7 +116,7 @@ interface Line {
 function createLine(
   problem: Problem,
   scratch: MinimiseScratch,
-  { theta, chiSquare, covariance }: MinimumPoint,
+  { theta, chiSquare, covariance, nodeChiSquares }: MinimumPoint,
   k: number,
 ): Line {
   const { model } = problem;
@@ -120,6 +126,7 @@ function createLine(
   const slopes = slopesAlong(problem, covariance, k);
   const sigma = sigmaOf(covariance, model.names[k]!);
   const afresh = model.shapeCount > TWO_SHAPES ? new Float64Array(model.size) : null;
+  const valleys = afresh && otherValleys(problem, scratch, nodeChiSquares, held, k);
   const line: Line = {
     sigma,
     step: firstStep(problem, theta, sigma, k),
@@ -135,6 +142,13 @@ function createLine(
         if (other < rise) {
           rise = other;
           point.set(afresh);
+        }
+        if (valleys!(x, afresh) - chiSquare < rise) {
+          const beside = minimise(problem, afresh, held, scratch, INNER).chiSquare - chiSquare;
+          if (beside < rise) {
+            rise = beside;
+            point.set(afresh);
+          }
         }
       }
       if (rise < -NEW_MINIMUM * (1 + chiSquare)) line.better = Float64Array.from(point);
