@@ -114,6 +114,7 @@ const SETTINGS: CoverageSetting[] = [
       0.06,
     ),
     truth: { edgeDepthNm: 70, edgeWidthNm: 16, ...rates },
+    repeat: 10,
   },
   {
     name: 'graded, rate, no carriers in front, σ 0.06',
@@ -173,7 +174,7 @@ function percent(count: number, of: number): string {
 function tableRow(name: string, c: Coverage): string {
   const fitted = c.scans - c.noMinimum;
   const cells = [
-    name,
+    c.scans === scans ? name : `${name} (${c.scans.toLocaleString('en')} scans)`,
     percent(c.edge68, fitted),
     percent(c.edge95, fitted),
     c.widthLimit === null ? '' : percent(c.widthLimit, fitted),
@@ -189,7 +190,7 @@ const options = process.argv.slice(2);
 const scans = Number(options.find((option) => /^\d+$/.test(option)) ?? SCANS);
 const results = SETTINGS.map((setting, index) => ({
   name: setting.name,
-  ...coverageOf(setting, scans, 1_000_000 * (index + 1)),
+  ...coverageOf(setting, scans * (setting.repeat ?? 1), 1_000_000 * (index + 1)),
 }));
 if (options.includes('--json')) {
   console.log(JSON.stringify({ scans, settings: results }, null, 2));

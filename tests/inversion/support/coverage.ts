@@ -19,6 +19,8 @@ export interface CoverageSetting {
   /** Energies, σ, trial profile, priors; the values of its points are not read. */
   input: FitInput;
   truth: ParameterValues;
+  /** So many times the usual number of scans, where that leaves doubt. */
+  repeat?: number;
 }
 
 export interface Coverage {
