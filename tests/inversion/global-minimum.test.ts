@@ -3,12 +3,15 @@ import { fit, prepareFit } from '@/lib/inversion/index';
 import { bruteForce } from './support/brute-force';
 import { randomScan, type RandomKind } from './support/random-scans';
 
-/** First seed and number of scans; the study (tests/study/global-minimum.ts) runs 1,000. */
-const SCANS: readonly { kind: RandomKind; first: number; count: number }[] = [
-  { kind: 'edge', first: 0, count: 80 },
-  { kind: 'layer', first: 450, count: 6 },
-  { kind: 'band-bending', first: 750, count: 3 },
-  { kind: 'saturating', first: 900, count: 4 },
+/**
+ * A part of the 1,000 scans of the study (tests/study/global-minimum.ts). The layers are those that a search misses by 0.07 and 0.6
+ * when it follows six lattice minima, and by 0.2 when a step that only its near edge can move is not minimised on a line.
+ */
+const SCANS: readonly { kind: RandomKind; seeds: readonly number[] }[] = [
+  { kind: 'edge', seeds: Array.from({ length: 16 }, (_, seed) => seed) },
+  { kind: 'layer', seeds: [484, 595, 719] },
+  { kind: 'band-bending', seeds: [754, 755] },
+  { kind: 'saturating', seeds: [900, 901, 902, 903] },
 ];
 /** χ² above brute force that is allowed. Why so small: a hundredth moves an interval by half a per cent of its width. */
 const ALLOWED = 0.01;
@@ -16,11 +19,11 @@ const ALLOWED = 0.01;
 describe('the global minimum', () => {
   // Source: brute force in support/brute-force.ts, which shares only the fold.
   it.each(SCANS)(
-    `is never more than ${ALLOWED} above brute force over $count random scans: $kind`,
-    ({ kind, first, count }) => {
+    `is never more than ${ALLOWED} above brute force on random scans: $kind`,
+    ({ kind, seeds }) => {
       const above: { seed: number; excess: number }[] = [];
       let unusable = 0;
-      for (let seed = first; seed < first + count; seed++) {
+      for (const seed of seeds) {
         const prepared = prepareFit(randomScan(kind, seed));
         const outcome = fit(prepared, { intervalsFor: [] });
         const brute = bruteForce(prepared);
@@ -34,7 +37,7 @@ describe('the global minimum', () => {
         if (excess > ALLOWED) above.push({ seed, excess });
       }
       expect(above).toEqual([]);
-      expect(unusable).toBeLessThanOrEqual(count / 4);
+      expect(unusable).toBeLessThanOrEqual(seeds.length / 4);
     },
   );
 });

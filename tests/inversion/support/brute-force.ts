@@ -1,11 +1,6 @@
-import {
-  foldScan,
-  type FitInput,
-  type ParameterName,
-  type PreparedFit,
-} from '@/lib/inversion/index';
-import { solveInBox } from './solve-in-box';
-import { nelderMead, patternSearch } from './try-and-see';
+import type { ParameterName, PreparedFit } from '@/lib/inversion/index';
+import { LEVELS, phiOf, shareAt } from './phi-by-hand';
+import { nelderMead, patternSearch, type Found, type Search } from './try-and-see';
 
 /**
  * Minimum of Φ by trying: a dense lattice over the shape, the levels solved within their bounds, then Nelder-Mead from the best few
@@ -24,8 +19,6 @@ export interface BruteForce {
 const STARTS = 6;
 const RESTARTS = 2;
 
-const LEVELS: readonly ParameterName[] = ['levelTop', 'levelBulk', 'levelCap'];
-
 /** Folds of the nodes depend on no datum: scans of one profile, cap and response share them. Share of every point, node by node. */
 const folded = new Map<string, Float64Array>();
 const MOST_FOLDED = 12;
@@ -41,36 +34,38 @@ interface Shape {
 
 export function bruteForce(prepared: PreparedFit): BruteForce {
   const shape = shapeOf(prepared);
-  const phi = objectiveOf(prepared, shape);
+  const phi = phiOf(prepared, shape.names);
   const nodes = allNodes(shape.axes);
   const shares = sharesOfNodes(prepared, shape, nodes);
   const count = prepared.input.points.length;
-  const values = nodes.map((node, k) => phi.of(node, shares.subarray(k * count, (k + 1) * count)));
-  const starts = spreadOut(shape, nodes, values);
+  const values = nodes.map((node, k) => phi(node, shares.subarray(k * count, (k + 1) * count)));
   const free = shape.names.map((_, k) => k).filter((k) => !shape.held[k]);
-  let best = { x: nodes[starts[0]!]!, value: values[starts[0]!]! };
-  starts.forEach((node, order) => {
+  const search: Search = { of: (x) => phi(x), free, lower: shape.lower, upper: shape.upper };
+  const followed = spreadOut(shape, nodes, values).map((node, order) => {
     const step = stepsAt(shape, nodes[node]!);
     const start = order < STARTS ? nodes[node]! : betweenNodes(shape, nodes[node]!, step);
-    const search = { of: (x: readonly number[]) => phi.of(x), free, ...shape };
-    const found = nelderMead(search, start, step);
-    if (found.value < best.value) best = found;
+    return nelderMead(search, start, step);
   });
-  const search = { of: (x: readonly number[]) => phi.of(x), free, ...shape };
+  const lowest = followed.reduce(lower);
+  const steps = stepsAt(shape, lowest.x);
   const again = nelderMead(
     search,
-    best.x,
-    stepsAt(shape, best.x).map((step) => step / 4),
+    lowest.x,
+    steps.map((step) => step / 4),
   );
-  if (again.value < best.value) best = again;
-  const step = stepsAt(shape, best.x).map((length) => length / 8);
-  best = patternSearch(search, best, step);
+  const best = patternSearch(
+    search,
+    lower(lowest, again),
+    steps.map((step) => step / 8),
+  );
   return {
     chiSquare: best.value,
     spread: highestOverFirst(shape, values) - best.value,
     at: Object.fromEntries(shape.names.map((name, k) => [name, best.x[k]!])),
   };
 }
+
+const lower = (a: Found, b: Found): Found => (b.value < a.value ? b : a);
 
 function shapeOf(prepared: PreparedFit): Shape {
   const { model } = prepared.problem;
@@ -141,121 +136,13 @@ function sharesOfNodes(prepared: PreparedFit, shape: Shape, nodes: number[][]): 
   ]);
   const known = folded.get(key);
   if (known) return known;
-  const all = nodes.map((node) => shareAt(prepared, shape, node));
+  const all = nodes.map((node) => shareAt(prepared, shape.names, node));
   const count = prepared.input.points.length;
   const shares = new Float64Array(nodes.length * count);
   all.forEach((share, k) => shares.set(share, k * count));
   if (folded.size === MOST_FOLDED) folded.delete(folded.keys().next().value!);
   folded.set(key, shares);
   return shares;
-}
-
-/** Populated share of every point: what a scan with levels 0 in front, 1 in the bulk and 0 in the cap would be. */
-function shareAt(prepared: PreparedFit, { names }: Shape, x: readonly number[]): Float64Array {
-  const values = Object.fromEntries(names.map((name, k) => [name, x[k]!]));
-  return foldScan(prepared, { ...values, levelTop: 0, levelBulk: 1, levelCap: 0 });
-}
-
-interface Objective {
-  /** Φ at a shape, the levels at their best. */
-  of: (x: readonly number[], share?: Float64Array) => number;
-}
-
-function objectiveOf(prepared: PreparedFit, shape: Shape): Objective {
-  const { input, problem } = prepared;
-  const { model } = problem;
-  const used = input.points.map((_, i) => i).filter((i) => input.points[i]!.enabled);
-  const weights = inverseOf(used.map((i) => used.map((j) => varianceOf(input, i, j))));
-  const levels = LEVELS.filter((name) => model.names.includes(name));
-  const at = levels.map((name) => model.names.indexOf(name));
-  const prior = (name: ParameterName): { mean: number; weight: number } | null => {
-    const setting = input.parameters[name];
-    if (!setting || setting.held) return null;
-    const { mean, sigma } =
-      setting.prior ?? (name === 'depthScale' ? { mean: 1, sigma: 0.03 } : {});
-    return mean === undefined || sigma === undefined ? null : { mean, weight: 1 / sigma ** 2 };
-  };
-  const levelPriors = levels.map(prior);
-  const shapePriors = shape.names.map(prior);
-  const scaleAt = shape.names.indexOf('depthScale');
-  let cap = { scale: NaN, share: new Float64Array(input.points.length) };
-  const box = {
-    lower: at.map((k) => model.lower[k]!),
-    upper: at.map((k) => model.upper[k]!),
-    held: at.map((k) => (model.held[k] ? model.neutral[k]! : null)),
-  };
-  const y = used.map((i) => input.points[i]!.value);
-  const n = used.length;
-  const size = levels.length;
-  const columns = Array.from({ length: size }, () => new Float64Array(n));
-  const weighted = Array.from({ length: size }, () => new Float64Array(n));
-  const residual = new Float64Array(n);
-  return {
-    of(x, share = shareAt(prepared, shape, x)) {
-      if (size > 2 && cap.scale !== x[scaleAt]) {
-        const values = Object.fromEntries(shape.names.map((name, k) => [name, x[k]!]));
-        const capOnly = { ...values, levelTop: 0, levelBulk: 0, levelCap: 1 };
-        cap = { scale: x[scaleAt]!, share: foldScan(prepared, capOnly) };
-      }
-      used.forEach((point, i) => {
-        columns[1]![i] = share[point]!;
-        if (size > 2) columns[2]![i] = cap.share[point]!;
-        columns[0]![i] = 1 - share[point]! - cap.share[point]!;
-      });
-      for (let k = 0; k < size; k++) multiply(weights, columns[k]!, weighted[k]!);
-      const gram = columns.map((a, k) =>
-        weighted.map((b, l) => dot(a, b) + (k === l ? (levelPriors[k]?.weight ?? 0) : 0)),
-      );
-      const right = weighted.map(
-        (b, k) => dot(b, y) + (levelPriors[k] ? levelPriors[k].weight * levelPriors[k].mean : 0),
-      );
-      const level = solveInBox(gram, right, box);
-      for (let i = 0; i < n; i++) {
-        residual[i] = y[i]!;
-        for (let k = 0; k < size; k++) residual[i]! -= level[k]! * columns[k]![i]!;
-      }
-      let sum = 0;
-      for (let i = 0; i < n; i++) sum += residual[i]! * dot(weights[i]!, residual);
-      levelPriors.forEach((p, k) => {
-        if (p) sum += p.weight * (level[k]! - p.mean) ** 2;
-      });
-      shapePriors.forEach((p, k) => {
-        if (p) sum += p.weight * (x[k]! - p.mean) ** 2;
-      });
-      return sum;
-    },
-  };
-}
-
-function varianceOf({ points, covariance }: FitInput, i: number, j: number): number {
-  if (covariance) return covariance[i]![j]!;
-  return i === j ? points[i]!.sigma ** 2 : 0;
-}
-
-/** V⁻¹ by Gauss-Jordan elimination. */
-function inverseOf(matrix: number[][]): Float64Array[] {
-  const n = matrix.length;
-  const work = matrix.map((row, i) => [...row, ...row.map((_, j) => (i === j ? 1 : 0))]);
-  for (let k = 0; k < n; k++) {
-    const pivot = work[k]![k]!;
-    for (let j = 0; j < 2 * n; j++) work[k]![j]! /= pivot;
-    for (let i = 0; i < n; i++) {
-      const factor = work[i]![k]!;
-      if (i === k || factor === 0) continue;
-      for (let j = 0; j < 2 * n; j++) work[i]![j]! -= factor * work[k]![j]!;
-    }
-  }
-  return work.map((row) => Float64Array.from(row.slice(n)));
-}
-
-function dot(a: ArrayLike<number>, b: ArrayLike<number>): number {
-  let sum = 0;
-  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!;
-  return sum;
-}
-
-function multiply(matrix: Float64Array[], x: Float64Array, into: Float64Array): void {
-  for (let i = 0; i < matrix.length; i++) into[i] = dot(matrix[i]!, x);
 }
 
 /** Places of a node on its axes, the first axis changing fastest. */

@@ -1,4 +1,5 @@
 import {
+  prepareFit,
   simulateScan,
   type FitInput,
   type ParameterName,
@@ -125,11 +126,11 @@ function bentScan(random: Random): FitInput {
       ? { response: { kind: 'saturating-fraction', halfPerCm3: 1e15, halfSigmaPerCm3: null } }
       : {}),
   };
-  const kT = 0.0172347;
+  const { lower, upper } = prepareFit({ ...input, capThicknessNm: drawn.capThicknessNm }).problem
+    .model;
+  const most = accumulated ? lower[0]! : upper[0]!;
   return measured(drawn, input, {
-    surfacePotentialEv: accumulated
-      ? -random.between(0, 5) * kT
-      : logBetween(random, 0.3 * kT, 0.7),
+    surfacePotentialEv: most * logBetween(random, 0.02, 1),
     bulkPerCm3,
     ...(rate && !parameters.levelTop ? { levelTop: 0.01 } : {}),
   });
