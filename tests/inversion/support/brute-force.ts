@@ -9,8 +9,11 @@ import { nelderMead, patternSearch, type Found, type Search } from './try-and-se
  */
 export interface BruteForce {
   chiSquare: number;
-  /** Largest minus smallest χ² over the first parameter of the shape, each at the best of the others. */
-  spread: number;
+  /**
+   * Largest minus smallest χ² over the first parameter of the shape, each at the best of the others: found on the lattice, and
+   * minimised there where the lattice has it largest.
+   */
+  spread: () => number;
   /** Where: the shape and the depth scale by name. */
   at: Partial<Record<ParameterName, number>>;
 }
@@ -60,7 +63,7 @@ export function bruteForce(prepared: PreparedFit): BruteForce {
   );
   return {
     chiSquare: best.value,
-    spread: highestOverFirst(shape, values) - best.value,
+    spread: () => highestOverFirst(search, shape, nodes, values) - best.value,
     at: Object.fromEntries(shape.names.map((name, k) => [name, best.x[k]!])),
   };
 }
@@ -194,11 +197,28 @@ function betweenNodes(shape: Shape, node: readonly number[], step: readonly numb
   );
 }
 
-function highestOverFirst({ axes }: Shape, values: number[]): number {
-  const lowest = axes[0]!.map(() => Infinity);
+/** Best node of each value of the first parameter, the highest of them minimised until it is the highest no more. */
+function highestOverFirst(
+  search: Search,
+  shape: Shape,
+  nodes: number[][],
+  values: number[],
+): number {
+  const { length } = shape.axes[0]!;
+  const lowest = Array.from({ length }, (): Found & { settled: boolean } => ({
+    x: [],
+    value: Infinity,
+    settled: false,
+  }));
   values.forEach((value, node) => {
-    const k = node % lowest.length;
-    lowest[k] = Math.min(lowest[k]!, value);
+    if (value >= lowest[node % length]!.value) return;
+    lowest[node % length] = { x: nodes[node]!, value, settled: false };
   });
-  return Math.max(...lowest);
+  const rest = { ...search, free: search.free.filter((k) => k !== 0) };
+  for (;;) {
+    const highest = lowest.reduce((a, b) => (b.value > a.value ? b : a));
+    if (highest.settled) return highest.value;
+    const found = nelderMead(rest, highest.x, stepsAt(shape, highest.x));
+    lowest[lowest.indexOf(highest)] = { ...lower(highest, found), settled: true };
+  }
 }
