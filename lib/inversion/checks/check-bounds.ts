@@ -9,7 +9,10 @@ export const checkBounds: FitCheck = ({ answer }) => {
   const words = pressed.map(
     ({ name, value, atBound }) => `${IN_WORDS[name]} (${figure(value)}, its ${atBound} bound)`,
   );
-  const harmless = pressed.every(({ name }) => name === 'edgeWidthNm' || name === 'farEdgeWidthNm');
+  const harmless = pressed.every(
+    ({ name, atBound }) =>
+      atBound === 'lower' && (name === 'edgeWidthNm' || name === 'farEdgeWidthNm'),
+  );
   const meaning = harmless
     ? 'The scan cannot tell the edge from a sharp one.'
     : 'Its interval is one-sided; holding it, or another trial profile, may be meant.';

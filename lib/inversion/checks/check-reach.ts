@@ -70,7 +70,11 @@ function checkBendingReach(context: CheckContext): Check {
   const [half] = trial.landmarks(trial.shape.map(({ name }) => values[name]!));
   const bending = locatorOf(context);
   const id = 'edge-reach';
-  const at = `the carriers reach half of the bulk at ${figure(half!.depthNm)} nm`;
+  const goal = prepared.input.polarity === 'depletion' ? 'half of' : 'twice';
+  const at =
+    half!.depthNm > 0
+      ? `the carriers reach ${goal} the bulk at ${figure(half!.depthNm)} nm`
+      : 'the bands bend too little for the carriers at the surface to differ from the bulk by a factor of two';
   if (half!.depthNm > profile.reachNm) {
     return {
       id,

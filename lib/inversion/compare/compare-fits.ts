@@ -1,4 +1,4 @@
-import type { FitAnswer } from '../types';
+import type { FitAnswer, FitInput } from '../types';
 
 export interface ComparisonRow {
   label: string;
@@ -14,6 +14,13 @@ export interface ComparisonRow {
   bicWeight: number | null;
 }
 
+/** A fit, and the covariance of its points where they have one: an answer does not carry it. */
+export interface ComparedAnswer {
+  label: string;
+  answer: FitAnswer;
+  covariance?: FitInput['covariance'];
+}
+
 export interface Comparison {
   rows: ComparisonRow[];
   /** False where the fits do not explain the same points; `reason` says why. */
@@ -26,8 +33,8 @@ export interface Comparison {
  * 2.9) of fits to one scan, and the same of BIC (Schwarz, Ann. Stat. 6, 461, 1978; as probabilities in Kass and Raftery, J. Am.
  * Stat. Assoc. 90, 773, 1995). Fits that do not share their enabled points, values and σ are listed but not weighed.
  */
-export function compareFits(list: readonly { label: string; answer: FitAnswer }[]): Comparison {
-  const reason = differenceOf(list.map(({ answer }) => answer));
+export function compareFits(list: readonly ComparedAnswer[]): Comparison {
+  const reason = differenceOf(list);
   const comparable = reason === undefined;
   const akaike = weigh(list.map(({ answer }) => (comparable ? answer.aicc : null)));
   const schwarz = weigh(list.map(({ answer }) => (comparable ? answer.bic : null)));
@@ -55,14 +62,14 @@ function weigh(
 }
 
 /** Why fits cannot be compared: their enabled points, values or σ differ; undefined where they can. */
-export function differenceOf(answers: readonly FitAnswer[]): string | undefined {
-  const fingerprint = ({ residuals }: FitAnswer): string =>
-    residuals
+export function differenceOf(list: readonly Omit<ComparedAnswer, 'label'>[]): string | undefined {
+  const fingerprint = ({ answer, covariance }: Omit<ComparedAnswer, 'label'>): string =>
+    answer.residuals
       .filter(({ enabled }) => enabled)
       .map(({ energyKeV, observed, sigma }) => `${energyKeV} ${observed} ${sigma}`)
       .sort()
-      .join('\n');
-  const prints = answers.map(fingerprint);
+      .join('\n') + JSON.stringify(covariance ?? null);
+  const prints = list.map(fingerprint);
   return prints.every((print) => print === prints[0])
     ? undefined
     : 'The fits do not use the same points with the same values and uncertainties, so their χ² cannot be compared.';

@@ -20,7 +20,7 @@ export interface NestedFits {
  * missing from the richer one, or has less freedom or another prior there.
  */
 export function checkNested({ simpler, richer }: NestedFits): void {
-  const difference = differenceOf([simpler.answer, richer.answer]);
+  const difference = differenceOf([simpler, richer]);
   if (difference) throw new InversionError('not-nested', difference);
   // W·y: the same values under another covariance are other data.
   const other = richer.prepared.problem.data.target;

@@ -14,10 +14,12 @@ export interface ZeroWidthTest {
  * Sharp against graded: width zero lies on the boundary, so the statistic follows ½χ²₀ + ½χ²₁ (Self and Liang, J. Am. Stat.
  * Assoc. 82, 605, 1987, case 5) and p = ½·P(χ²₁ > T) = ½ erfc(√(T/2)); a statistic of 0 has p = 1.
  *
- * @throws InversionError when the second fit has no width.
+ * @throws InversionError when the second fit is not of one graded edge with a free width.
  */
 export function zeroWidthTest(sharp: FitAnswer, graded: FitAnswer): ZeroWidthTest {
-  if (!graded.parameters.some(({ name }) => name === 'edgeWidthNm')) {
+  const width = graded.parameters.find(({ name }) => name === 'edgeWidthNm');
+  const layered = graded.parameters.some(({ name }) => name === 'layerThicknessNm');
+  if (!width || width.held || layered) {
     throw new InversionError(
       'wrong-fit',
       'The zero-width test compares a sharp edge with a graded one.',

@@ -38,9 +38,10 @@ export function fit(prepared: PreparedFit, options: FitOptions = {}): FitOutcome
   if (reason) return { status: 'no-minimum', reason };
   for (let restart = 0; ; restart++) {
     const covariance = covarianceAt(problem, minimum.theta);
-    const wanted = options.intervalsFor ?? prepared.freeNames;
+    // Where one lower minimum after another turns up, the last is given out with its linear intervals.
+    const wanted = restart > MOST_RESTARTS ? [] : (options.intervalsFor ?? prepared.freeNames);
     const report = reportParameters(problem, scratch, { ...minimum, covariance }, wanted);
-    if (!report.better || restart === MOST_RESTARTS) {
+    if (!report.better) {
       const answer = answerAt(prepared, minimum, covariance, report.parameters);
       return { status: answer.status, answer };
     }

@@ -21,10 +21,20 @@ export interface ParameterRow {
   prior: GaussianPrior | null;
 }
 
-export function depthScaleSetting({ parameters }: FitInput): ParameterSetting {
+/** The depth scale is held at 1 unless the settings say otherwise, and free only with a prior. */
+function depthScaleSetting({ parameters }: FitInput): ParameterSetting {
   const setting = parameters.depthScale;
   if (!setting) return { held: true, value: 1, prior: null };
   return setting.held ? setting : { ...setting, prior: setting.prior ?? DEPTH_SCALE_PRIOR };
+}
+
+export function depthScaleRow(input: FitInput): ParameterRow {
+  const [lower, upper] = DEPTH_SCALE_BOUNDS;
+  return row(
+    { depthScale: depthScaleSetting(input) },
+    { name: 'depthScale', lower, upper, closed: [false, false], given: null },
+    1,
+  );
 }
 
 /** One row per parameter of the trial profile: shape, levels, depth scale. */
@@ -33,7 +43,7 @@ export function parameterTable(input: FitInput, trial: TrialProfile): ParameterR
   const [lower, upper] = response.levelBounds(input.response);
   const level = { lower, upper, closed: [true, true], given: null } as const;
   const [capLower, capUpper] = response.capBounds;
-  const settings = { ...input.parameters, depthScale: depthScaleSetting(input) };
+  const settings = input.parameters;
   const rows = trial.shape.map((parameter) => row(settings, parameter, parameter.given ?? 0));
   rows.push(
     row(settings, { ...level, name: 'levelTop', given: carrierFreeLevel(input) }, 0),
@@ -41,15 +51,7 @@ export function parameterTable(input: FitInput, trial: TrialProfile): ParameterR
   );
   if (input.capThicknessNm > 0)
     rows.push(row(settings, { ...level, name: 'levelCap', lower: capLower, upper: capUpper }, 0));
-  const [smallest, largest] = DEPTH_SCALE_BOUNDS;
-  rows.push(
-    row(
-      settings,
-      { name: 'depthScale', lower: smallest, upper: largest, closed: [false, false], given: null },
-      1,
-    ),
-  );
-  return rows;
+  return [...rows, depthScaleRow(input)];
 }
 
 /** Bent bands leave no carriers at s = 0, where a rate is therefore known; null where the level is for the data to say. */

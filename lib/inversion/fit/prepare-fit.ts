@@ -8,7 +8,7 @@ import type { FitInput, ScanPoint, StoppingProfile } from '../types';
 import { checkInput } from './check-input';
 import { meanLevel } from './evaluate';
 import type { Data, Model } from './model';
-import { depthScaleSetting, parameterTable, type ParameterRow } from './parameter-table';
+import { depthScaleRow, parameterTable, type ParameterRow } from './parameter-table';
 import type { PreparedFit } from './prepared-fit';
 import { createRefineScratch } from './refine';
 import { rememberBySet } from './remember';
@@ -49,8 +49,7 @@ export function compileInput(input: FitInput): PreparedFit {
   if (enabledCount === 0)
     throw new InversionError('empty-scan', 'Every point of the energy scan is switched off.');
   const rows = rowsByEnergy(input.points, profiles);
-  const scaleSetting = depthScaleSetting(input);
-  const scale = scaleSetting.held ? (scaleSetting.value ?? 1) : scaleSetting.prior!.mean;
+  const scale = depthScaleRow(input).neutral;
   const deepestNm = deepestStop(input.points, profiles) * scale - input.capThicknessNm;
   if (!(deepestNm > 0)) {
     throw new InversionError(
@@ -97,14 +96,18 @@ function deepestStop(
   return deepest;
 }
 
-/** A kernel of the largest scan takes 100 MB, a lattice a few; the desk goes to and fro between few of them. */
+/** A kernel of the largest scan takes 100 MB and a lattice up to 15; the desk goes to and fro between few of them. */
 const rememberedKernel = rememberBySet<Kernel>(1);
-const rememberedLattice = rememberBySet<LatticeFolds>(8);
+const rememberedLattice = rememberBySet<LatticeFolds>(4);
 
 /** Everything else that the share seen by the probe depends on. */
 function whatIsFolded(input: FitInput): unknown {
   const { profile, polarity, response, carriers, semiconductor, parameters } = input;
-  return [profile, polarity, response, carriers, semiconductor, parameters.bulkPerCm3];
+  // Polarity and carriers bend nothing where the probe sees the share itself.
+  const plain = profile !== 'band-bending' && response.kind !== 'saturating-fraction';
+  return plain
+    ? profile
+    : [profile, polarity, response, carriers, semiconductor, parameters.bulkPerCm3];
 }
 
 function compileModel(
@@ -129,7 +132,6 @@ function compileModel(
     scale: table[table.length - 1]!.neutral,
     heldShape: table.slice(0, shapeCount).map((row) => (row.held ? row.neutral : null)),
     deepestNm,
-    enabled: Array.from(rows, (index) => input.points[index]!.enabled),
   };
   const folds = rememberedLattice(
     input.stopping,

@@ -18,8 +18,6 @@ export interface LatticeInput {
   /** Held value of each shape parameter, or null. */
   heldShape: readonly (number | null)[];
   deepestNm: number;
-  /** Rows that are used: they say where the stops are. */
-  enabled: readonly boolean[];
 }
 
 export interface LevelWeights {
@@ -129,7 +127,7 @@ function fillGram(
 
 /** Depths denser where more muons stop: at equal steps of half depth, half mean cumulative stopping. */
 function blendedDepths(
-  { kernel, capNm, scale, deepestNm, enabled }: LatticeInput,
+  { kernel, capNm, scale, deepestNm }: LatticeInput,
   count: number,
 ): Float64Array {
   const fine = 128;
@@ -138,14 +136,8 @@ function blendedDepths(
   const density = new Float64Array(kernel.rowCount);
   for (let k = 0; k <= fine; k++) {
     foldStart(kernel, (capNm + (deepestNm * k) / fine) / scale, share, density);
-    let sum = 0;
-    let used = 0;
-    for (let i = 0; i < share.length; i++) {
-      if (!enabled[i]) continue;
-      sum += share[i]!;
-      used++;
-    }
-    blend[k] = sum / used + k / fine;
+    const sum = share.reduce((total, value) => total + value, 0);
+    blend[k] = sum / share.length + k / fine;
   }
   let k = 0;
   return Float64Array.from({ length: count }, (_, node) => {

@@ -19,8 +19,8 @@ interface Quadrature {
 const SMOOTH: Quadrature = { nodes: GAUSS_NODES, weights: GAUSS_WEIGHTS };
 const CONSTANT: Quadrature = { nodes: [0], weights: [2] };
 
-/** Shape parameters of the profile with most of them. */
-const MOST_SHAPES = 4;
+/** More shape parameters than any profile has. */
+const MOST_SHAPES = 8;
 const slopes = new Float64Array(1 + MOST_SHAPES);
 /** Running ∫g and its derivatives by the shape. */
 const sums = new Float64Array(1 + MOST_SHAPES);

@@ -4,7 +4,7 @@ import { TAIL_BELOW } from '../electrostatics/potential-table';
 import { reducedCurve, type ReducedCurve } from '../electrostatics/reduced-curve';
 import { spaceChargeFunction } from '../electrostatics/space-charge';
 import { InversionError } from '../errors';
-import { isPositive } from '../fit/number-range';
+import { isNumber, isPositive } from '../fit/number-range';
 import { foldCumulative } from '../fold/fold-cumulative';
 import type { CumulativeScratch } from '../fold/share-fold';
 import type { FitInput, SemiconductorBulk } from '../types';
@@ -16,6 +16,9 @@ const LARGEST_BENDING_EV = 3.5;
 const LARGEST_ACCUMULATION = 10;
 /** Past strong inversion the depth hardly grows any more while exponentials overflow. */
 const PAST_INVERSION = 250;
+/** The bulk is searched over this factor both ways without a prior, over so many of its σ with one. */
+const BULK_FACTOR = 100;
+const BULK_SIGMAS = 6;
 const NODES = 48;
 const BULK_STEPS = [-2, -1, 0, 1, 2];
 /** ∂/∂N by central differences of the exact fold: step² of the third derivative, 1e-8 of the value. */
@@ -47,22 +50,16 @@ export function bandBending(deepestNm: number, input: FitInput): TrialProfile {
   const given = givenBulk(input);
   const sign = input.polarity === 'depletion' ? 1 : -1;
   const kT = BOLTZMANN_EV_PER_K * bulk.temperatureK;
-  const length = debyeOf(given, bulk);
+  const largestBulk = largestBulkOf(input, given);
   const largest =
     sign > 0
-      ? Math.min(
-          Math.max(5, (deepestNm / length) ** 2 / 2 + 1),
-          LARGEST_BENDING_EV / kT,
-          PAST_INVERSION +
-            (bulk.intrinsicPerCm3 === null ? 0 : 2 * Math.log(given / bulk.intrinsicPerCm3)),
-        )
+      ? largestDepletion(deepestNm / debyeOf(largestBulk, bulk), input, largestBulk, bulk)
       : LARGEST_ACCUMULATION;
   const curves: BulkCurve[] = [];
   const curveOf = (bulkPerCm3: number): BulkCurve =>
     curves.find((known) => known.bulkPerCm3 === bulkPerCm3) ?? addCurve(bulkPerCm3);
   const addCurve = (bulkPerCm3: number): BulkCurve => {
-    const fermi =
-      bulk.intrinsicPerCm3 === null ? Infinity : Math.log(bulkPerCm3 / bulk.intrinsicPerCm3);
+    const fermi = fermiOf(bulkPerCm3, bulk);
     const made = {
       bulkPerCm3,
       lengthNm: debyeOf(bulkPerCm3, bulk),
@@ -90,13 +87,14 @@ export function bandBending(deepestNm: number, input: FitInput): TrialProfile {
       },
       {
         name: 'bulkPerCm3',
-        lower: given / 1000,
-        upper: given * 1000,
+        lower: given / BULK_FACTOR,
+        upper: given * BULK_FACTOR,
         closed: [false, false],
         given,
       },
     ],
     edges: [],
+    crooked: false,
     kinked: false,
     share: (depthNm, shape) => Math.exp(-potentialOf(curveOf(shape[1]!), shape[0]! / kT, depthNm)),
     slopes(depthNm, shape, slopes) {
@@ -149,6 +147,36 @@ export function bandBending(deepestNm: number, input: FitInput): TrialProfile {
   };
 }
 
+/** φ_F/kT of the majority concentration; ∞ without minority carriers. n_i of a cold wide gap is too small to divide by. */
+function fermiOf(bulkPerCm3: number, { intrinsicPerCm3 }: SemiconductorBulk): number {
+  return intrinsicPerCm3 === null ? Infinity : Math.log(bulkPerCm3) - Math.log(intrinsicPerCm3);
+}
+
+function largestBulkOf({ parameters }: FitInput, given: number): number {
+  const setting = parameters.bulkPerCm3;
+  if (!setting || setting.held) return given;
+  const { prior } = setting;
+  return Math.min(given * BULK_FACTOR, prior ? prior.mean + BULK_SIGMAS * prior.sigma : Infinity);
+}
+
+/**
+ * v_s at which the edge leaves the scan: in depletion v = (depth/L_D)²/2 below the point where the bands are flat, and a saturating
+ * fraction sees its edge where e^(−v) has fallen to 1/K.
+ */
+function largestDepletion(
+  deepestInLengths: number,
+  { response }: FitInput,
+  bulkPerCm3: number,
+  bulk: SemiconductorBulk,
+): number {
+  const seen =
+    response.kind === 'saturating-fraction' ? Math.log1p(bulkPerCm3 / response.halfPerCm3) : 0;
+  const leaving = (Math.sqrt(seen) + deepestInLengths / Math.SQRT2) ** 2 + 1;
+  const kT = BOLTZMANN_EV_PER_K * bulk.temperatureK;
+  const inverted = PAST_INVERSION + 2 * fermiOf(bulkPerCm3, bulk);
+  return Math.min(Math.max(5, leaving), LARGEST_BENDING_EV / kT, inverted);
+}
+
 function bulkOf({ semiconductor, polarity, response }: FitInput): SemiconductorBulk {
   if (!semiconductor) {
     throw new InversionError(
@@ -165,10 +193,16 @@ function bulkOf({ semiconductor, polarity, response }: FitInput): SemiconductorB
   for (const [value, name] of [
     [semiconductor.relativePermittivity, 'relative permittivity'],
     [semiconductor.temperatureK, 'temperature (K)'],
-    [semiconductor.intrinsicPerCm3 ?? 1, 'intrinsic concentration (cm⁻³)'],
   ] as const) {
     if (!isPositive(value))
       throw new InversionError('bad-semiconductor', `The ${name} cannot be ${value}.`);
+  }
+  const { intrinsicPerCm3 } = semiconductor;
+  if (intrinsicPerCm3 !== null && !(intrinsicPerCm3 > 0 && isNumber(intrinsicPerCm3))) {
+    throw new InversionError(
+      'bad-semiconductor',
+      `The intrinsic concentration (cm⁻³) cannot be ${intrinsicPerCm3}.`,
+    );
   }
   return semiconductor;
 }

@@ -12,6 +12,8 @@ import { carriersAt } from './profile-value';
  */
 export function floorOf(prepared: PreparedFit, values: ParameterValues): number | null {
   const { input, problem } = prepared;
+  // Accumulated bent bands hold more than the bulk everywhere: there is no poor side.
+  if (input.profile === 'band-bending' && input.polarity === 'accumulation') return null;
   const { model, work } = problem;
   foldAt(model, work, thetaOf(prepared, values));
   let smallest = Infinity;

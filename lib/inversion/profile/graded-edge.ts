@@ -21,6 +21,7 @@ export function gradedEdge(deepestNm: number): TrialProfile {
     kind: 'graded',
     shape: [depthParameter('edgeDepthNm', deepestNm), extentParameter('edgeWidthNm', deepestNm)],
     edges: [{ position: [0], width: 1 }],
+    crooked: false,
     kinked: false,
     share: (depthNm, shape) => normalShare(depthNm - shape[0]!, shape[1]!),
     slopes(depthNm, shape, slopes) {

@@ -53,6 +53,7 @@ export function layer(deepestNm: number): TrialProfile {
       { position: [0], width: 1 },
       { position: [0, 2], width: 3 },
     ],
+    crooked: true,
     kinked: false,
     share(depthNm, shape) {
       const { near, nearWidth, far, farWidth } = readEdges(shape);

@@ -11,6 +11,7 @@ export function sharpEdge(deepestNm: number): TrialProfile {
     kind: 'sharp',
     shape: [depthParameter('edgeDepthNm', deepestNm)],
     edges: [{ position: [0], width: null }],
+    crooked: false,
     kinked: true,
     share: (depthNm, shape) => (depthNm < shape[0]! ? 0 : 1),
     slopes(depthNm, shape, slopes) {

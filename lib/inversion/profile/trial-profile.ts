@@ -37,6 +37,8 @@ export interface TrialProfile {
   kind: ProfileKind;
   shape: readonly ShapeParameter[];
   edges: readonly EdgeParameters[];
+  /** Valleys of χ² bend, or others run beside them: several edges, or a share that the probe sees bent. */
+  crooked: boolean;
   /** Always steps: χ² has kinks at the bin borders, and the last digits are found by bracketing instead of derivatives. */
   kinked: boolean;
   /** s(x) at a depth below the cap. */

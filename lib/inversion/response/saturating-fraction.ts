@@ -61,6 +61,7 @@ export const saturatingFraction: ResponseModel = {
     };
     return {
       ...trial,
+      crooked: true,
       fold: (kernel, shape, capNm, scale, out) =>
         foldSeenShare(trial, bending, kernel, shape, capNm, scale, out),
     };

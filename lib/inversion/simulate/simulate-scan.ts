@@ -42,7 +42,11 @@ export function simulateScan({ input, values, sigmas, seed }: Simulation): ScanP
   const noise = Float64Array.from(points, (_, index) => normalStream(seed, index)());
   if (covariance) correlate(prepared, noise);
   else template.forEach(({ sigma }, index) => (noise[index] = noise[index]! * sigma));
-  return template.map((point, index) => ({ ...point, value: expected[index]! + noise[index]! }));
+  // A point out of use beyond the stopping set has no expectation and keeps its value.
+  return points.map(({ value }, index) => ({
+    ...template[index]!,
+    value: Number.isNaN(expected[index]!) ? value : expected[index]! + noise[index]!,
+  }));
 }
 
 /** Unit noise of the points as noise of covariance V; a point out of use keeps its own σ. */

@@ -1,3 +1,4 @@
+import { InversionError } from '../errors';
 import { fit } from '../fit/fit';
 import { prepareFit } from '../fit/prepare-fit';
 import type { PreparedFit } from '../fit/prepared-fit';
@@ -19,7 +20,7 @@ export interface CalibrationError {
   /** σ over the value. */
   relativeSigma: number;
   depthsNm: Float64Array;
-  /** One σ below and one above; null where the calibration would not be positive, or leaves no minimum. */
+  /** One σ below and one above; null where the calibration would not be positive, cannot be fitted with, or leaves no minimum. */
   low: MovedCalibration | null;
   high: MovedCalibration | null;
 }
@@ -58,11 +59,22 @@ export function calibrationErrors(
 }
 
 function resultOf(input: FitInput, depths: Float64Array): MovedCalibration | null {
-  const prepared = prepareFit(input);
+  const prepared = preparedOrNull(input);
+  if (!prepared) return null;
   const outcome = fit(prepared, { intervalsFor: [] });
   if (outcome.status === 'no-minimum') return null;
   const values = valuesOf(outcome.answer);
   return { values, profile: depths.map(profileValue(prepared, values)) };
+}
+
+/** A moved calibration may leave a held value outside its bounds, or no contrast at all: then there is no such result. */
+function preparedOrNull(input: FitInput): PreparedFit | null {
+  try {
+    return prepareFit(input);
+  } catch (error) {
+    if (error instanceof InversionError) return null;
+    throw error;
+  }
 }
 
 function calibrationsOf(input: FitInput): Calibration[] {
@@ -95,11 +107,14 @@ function calibrationsOf(input: FitInput): Calibration[] {
     );
   }
   // A rate says the concentration itself: the bulk then matters to bent bands alone.
-  const bulkCounts = input.profile === 'band-bending' || response.kind !== 'capture-rate';
-  if (bulkCounts && parameters.bulkPerCm3 === undefined) {
-    add('bulk concentration', carriers.bulkPerCm3, carriers.bulkSigmaPerCm3, (value) => ({
+  const bent = input.profile === 'band-bending';
+  const setting = bent ? parameters.bulkPerCm3 : undefined;
+  if ((bent || response.kind !== 'capture-rate') && (!setting || setting.held)) {
+    const held = setting?.value ?? carriers.bulkPerCm3;
+    add('bulk concentration', held, carriers.bulkSigmaPerCm3, (value) => ({
       ...input,
       carriers: { ...carriers, bulkPerCm3: value },
+      parameters: setting ? { ...parameters, bulkPerCm3: { ...setting, value } } : parameters,
     }));
   }
   return list;

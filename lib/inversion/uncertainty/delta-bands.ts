@@ -46,7 +46,7 @@ export function bandsByDelta(
     const values = valuesOf(answer);
     const centre = profileValue(prepared, values);
     const moved = free.map((parameter) =>
-      endsOf(parameter, parameter[interval], sigmas).map((value) =>
+      endsOf(prepared, parameter, parameter[interval], sigmas).map((value) =>
         profileValue(prepared, { ...values, [parameter.name]: value }),
       ),
     );
@@ -68,14 +68,22 @@ export function bandsByDelta(
   return bands;
 }
 
-/** Ends of an interval; an open end is where the linear error bar puts it. */
+/** Ends of an interval; an open end is where the linear error bar puts it, or the bound without one. */
 function endsOf(
-  { value, sigma }: FitParameter,
+  { problem }: PreparedFit,
+  { name, value, sigma }: FitParameter,
   [lower, upper]: Interval,
   sigmas: number,
 ): [number, number] {
-  const reach = sigmas * (sigma ?? 0);
-  return [lower ?? Math.max(0, value - reach), upper ?? value + reach];
+  const { model } = problem;
+  const k = model.names.indexOf(name);
+  const reach = sigma === null ? Infinity : sigmas * sigma;
+  const end = (to: number, bound: number): number =>
+    Number.isFinite(to) ? to : Number.isFinite(bound) ? bound : value;
+  return [
+    lower ?? end(Math.max(model.lower[k]!, value - reach), model.lower[k]!),
+    upper ?? end(Math.min(model.upper[k]!, value + reach), model.upper[k]!),
+  ];
 }
 
 /** How far the value moves in one direction: `changes` holds, per parameter, the change at the lower and the upper end. */

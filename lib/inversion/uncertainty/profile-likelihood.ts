@@ -40,11 +40,6 @@ const INNER = { maxIterations: 200, tolerance: 1e-5, takeLastStep: true };
 /** A fall of Φ by more than this is a new minimum, less is rounding. */
 const NEW_MINIMUM = 1e-4;
 const MOST_STEPS = 40;
-/**
- * With more shape parameters a valley bends and others run beside it: each point is also reached from the minimum itself and from
- * nodes of the search, and the lowest counts.
- */
-const TWO_SHAPES = 2;
 /** A first step further than this share of the range would leave the valley of a poorly known parameter. */
 const FIRST_SHARE = 1 / 8;
 
@@ -83,7 +78,8 @@ function walkSide(
 ): Side {
   const { model } = problem;
   const bound = direction < 0 ? model.lower[k]! : model.upper[k]!;
-  const naturalEnd = (direction < 0 ? model.closedLower[k] : model.closedUpper[k]) ? bound : null;
+  const closed = direction < 0 ? model.closedLower[k] : model.closedUpper[k];
+  const naturalEnd = closed && Number.isFinite(bound) ? bound : null;
   const line = createLine(problem, scratch, minimum, k);
   const ends: (number | null)[] = [];
   let inside = { x: minimum.theta[k]!, rise: 0 };
@@ -125,7 +121,8 @@ function createLine(
   const point = Float64Array.from(theta);
   const slopes = slopesAlong(problem, covariance, k);
   const sigma = sigmaOf(covariance, model.names[k]!);
-  const afresh = model.shapeCount > TWO_SHAPES ? new Float64Array(model.size) : null;
+  // Where valleys are crooked each point is also reached from the minimum itself and from nodes of the search; the lowest counts.
+  const afresh = model.trial.crooked ? new Float64Array(model.size) : null;
   const valleys = afresh && otherValleys(problem, scratch, nodeChiSquares, held, k);
   const line: Line = {
     sigma,
