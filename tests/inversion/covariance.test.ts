@@ -1,8 +1,7 @@
-import { Matrix, inverse } from 'ml-matrix';
+import { CholeskyDecomposition, Matrix, inverse, solve } from 'ml-matrix';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
-  depthInformation,
   edgeInformationByEnergy,
   fit,
   foldScan,
@@ -146,17 +145,44 @@ describe('a full covariance of the points', () => {
     expect(Math.abs(spread / answer.parameters[0]!.sigma! - 1)).toBeLessThan(0.13);
   });
 
-  it('counts in what each energy and depth tells', () => {
+  // Source: the definition by hand. Slopes of ŷ by central differences, whitened by the Cholesky factor of V, the edge less what the other
+  // parameters explain by least squares, squared. Tolerance 1e-6: differences of 1e-3 of a σ are good to that, rounding to 1e-9.
+  it('counts in what each energy tells of the edge', () => {
     const input = correlated(0.7, 0.9, 1);
     const prepared = prepareFit(input);
     const answer = answerOf(fit(prepared));
+    const values = valuesOf(answer);
+    const slopes = answer.parameters
+      .filter(({ held }) => !held)
+      .map(({ name, value, sigma }) => {
+        const at = (move: number): Float64Array =>
+          foldScan(prepared, { ...values, [name]: value + move * sigma! });
+        const above = at(1e-3);
+        return [...at(-1e-3)].map((below, i) => (above[i]! - below) / 2e-3);
+      });
+    const sharesBy = (factor: Matrix): number[] => {
+      const [edge, ...others] = slopes.map((slope) => solve(factor, Matrix.columnVector(slope)));
+      const design = new Matrix(others.map((column) => column.to1DArray())).transpose();
+      const rest = Matrix.sub(edge!, design.mmul(solve(design, edge!, true))).to1DArray();
+      const total = rest.reduce((sum, value) => sum + value * value, 0);
+      return rest.map((value) => (value * value) / total);
+    };
+    const factorOf = (v: readonly (readonly number[])[]): Matrix =>
+      new CholeskyDecomposition(new Matrix(v.map((row) => [...row]))).lowerTriangularMatrix;
+    const hand = sharesBy(factorOf(input.covariance!));
     const shares = edgeInformationByEnergy(prepared, answer);
-    expect(shares.reduce((sum, share) => sum + share, 0)).toBeCloseTo(1, 9);
-    const depths = [10, 60, 75, 120];
-    const plain = prepareFit({ ...input, covariance: null });
-    const here = depthInformation(prepared, answer, depths);
-    expect(Math.max(...here)).toBe(1);
-    expect([...here]).not.toEqual([...depthInformation(plain, answer, depths)]);
+    shares.forEach((share, i) => expect(share, `point ${i}`).toBeCloseTo(hand[i]!, 6));
+    // It matters here: points that share nothing would tell something else.
+    const apart = sharesBy(factorOf(sharedError(hand.length, 0, 1)));
+    expect(Math.max(...hand.map((share, i) => Math.abs(share - apart[i]!)))).toBeGreaterThan(0.05);
+    // Whatever the order of the scan.
+    const turned = prepareFit({
+      ...input,
+      points: [...input.points].reverse(),
+      covariance: [...input.covariance!].reverse().map((row) => [...row].reverse()),
+    });
+    const back = edgeInformationByEnergy(turned, answer).reverse();
+    back.forEach((share, i) => expect(share, `point ${i}`).toBeCloseTo(shares[i]!, 9));
   });
 
   it('refuses what is no covariance, saying what is wrong', () => {

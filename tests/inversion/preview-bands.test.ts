@@ -55,8 +55,8 @@ describe('the preview of the bands', () => {
   }
 
   // Source: the delta method √(gᵀCg), g from the profile written out. Tolerance 2 %: what the finite ends of the intervals add is of the
-  // order of σ, seen as up to 6 % (68 %) and 11 % (95 %) at ten times this σ. Without the correlations the band would be 1.3 to 2.4
-  // times as wide at these depths.
+  // order of σ, seen as up to 1.1 % here and 11 % at ten times this σ. Without the correlations the band would be 1.4 to 2.4 times as
+  // wide at these depths.
   it('is the delta method where the intervals are short, correlations and all', () => {
     const truth = { edgeDepthNm: 75, edgeWidthNm: 16, levelTop: 0.1, levelBulk: 2 };
     const { prepared, answer } = fitted(rateInput({}, 0.0004), truth, 2);

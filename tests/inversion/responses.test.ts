@@ -1,3 +1,4 @@
+import erfc from '@stdlib/math-base-special-erfc';
 import { describe, expect, it } from 'vitest';
 import {
   MATERIALS,
@@ -10,6 +11,7 @@ import {
   runChecks,
   simulateScan,
   thermalVelocity,
+  valuesOf,
   type FitInput,
 } from '@/lib/inversion/index';
 import { answerOf, fractionInput, heldAt, rateInput } from './support/scans';
@@ -101,10 +103,32 @@ describe('the saturating fraction', () => {
     expect(Math.abs(edge.value - 75) / edge.sigma!).toBeLessThan(3);
     const profile = carrierProfile(prepared, answer);
     expect(profile.unit).toBe('cm⁻³');
-    const deep = profile.points.at(-1)!;
-    expect(deep.value / 1e17).toBeCloseTo(1, 2);
-    expect(profile.floor!).toBeGreaterThan(0);
-    expect(runChecks(prepared, answer, profile).length).toBeGreaterThan(8);
+    const { edgeDepthNm, edgeWidthNm, levelTop, levelBulk } = valuesOf(answer);
+    // p(x) = p_bulk·Φ((x − W)/w), written out. Tolerance: the table of Φ is good to 1e-11.
+    for (const { depthNm, value } of profile.points) {
+      const share = erfc((edgeDepthNm! - depthNm) / edgeWidthNm! / Math.SQRT2) / 2;
+      expect(Math.abs(value / 1e17 - share)).toBeLessThan(1e-9);
+    }
+    // F falls by (F_free − F_pop)/p_half per carrier where there are none, and the levels span 10/11 of F_free − F_pop.
+    const poor = foldScan(prepared, { ...valuesOf(answer), levelTop: 1, levelBulk: 0 });
+    const slope = ((levelTop! - levelBulk!) * 11) / 10 / 1e16;
+    expect(profile.floor! / (0.003 / (Math.max(...poor) * slope))).toBeCloseTo(1, 9);
+    const checks = runChecks(prepared, answer, profile);
+    // The concentrations bend the edge, so that its depth and width go together; all else is sound.
+    expect(checks.filter(({ state }) => state !== 'fine').map(({ id }) => id)).toEqual([
+      'correlation',
+    ]);
+    const stated = (id: string, words: RegExp): number =>
+      Number(words.exec(checks.find((check) => check.id === id)!.message)![1]);
+    const { covariance } = answer;
+    if (!covariance.ok) throw new Error(covariance.reason);
+    const strongest = Math.max(
+      ...covariance.correlation.flatMap((row, k) => row.slice(0, k).map(Math.abs)),
+    );
+    expect(Math.abs(stated('correlation', /is (0\.\d+), between/) - strongest)).toBeLessThan(0.006);
+    // Depths scale with the stopping calculation: 3 % of it are 3 % of the edge. Three figures are stated.
+    const moved = stated('depth-scale', /edge by ([\d.]+) nm/);
+    expect(Math.abs(moved - 0.03 * edgeDepthNm!)).toBeLessThan(0.006);
   });
 
   it('read as two levels, puts the edge where p crosses p_half instead', () => {
