@@ -55,8 +55,15 @@ export function profileIntervals(
   minimum: MinimumPoint,
   k: number,
 ): ProfileIntervals {
-  const down = walkSide(problem, scratch, minimum, k, -1);
-  const up = walkSide(problem, scratch, minimum, k, 1);
+  const side = (direction: 1 | -1): Side => {
+    const { crooked } = problem.model.trial;
+    const walked = walkSide(problem, scratch, minimum, k, direction, crooked);
+    return crooked || walked.better || !dipsBeyond(problem, minimum, k, direction, walked)
+      ? walked
+      : walkSide(problem, scratch, minimum, k, direction, true);
+  };
+  const down = side(-1);
+  const up = side(1);
   return {
     interval68: [down.ends[0]!, up.ends[0]!],
     interval95: [down.ends[1]!, up.ends[1]!],
@@ -75,12 +82,13 @@ function walkSide(
   minimum: MinimumPoint,
   k: number,
   direction: 1 | -1,
+  crooked: boolean,
 ): Side {
   const { model } = problem;
   const bound = direction < 0 ? model.lower[k]! : model.upper[k]!;
   const closed = direction < 0 ? model.closedLower[k] : model.closedUpper[k];
   const naturalEnd = closed && Number.isFinite(bound) ? bound : null;
-  const line = createLine(problem, scratch, minimum, k);
+  const line = createLine(problem, scratch, minimum, k, crooked);
   const ends: (number | null)[] = [];
   let inside = { x: minimum.theta[k]!, rise: 0 };
   for (const target of [DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95]) {
@@ -99,6 +107,34 @@ function walkSide(
   return { ends, better: line.better };
 }
 
+/** Nodes of the search are folded on coarse bins: what they say is meant to this. */
+const NODE_ACCURACY = 0.05;
+
+/**
+ * Whether the search has seen a lower Φ further out than an end that was found: the walk was then caught in one valley, or Φ falls
+ * again. Levels and the depth scale are no axes of the search.
+ */
+function dipsBeyond(
+  { model }: Problem,
+  { chiSquare, nodeChiSquares }: MinimumPoint,
+  k: number,
+  direction: 1 | -1,
+  { ends }: Side,
+): boolean {
+  const axis = model.grid.axes[k];
+  if (!axis) return false;
+  const stride = model.grid.axes.slice(0, k).reduce((product, { length }) => product * length, 1);
+  return [DELTA_CHI_SQUARE_68, DELTA_CHI_SQUARE_95].some((target, at) => {
+    const end = ends[at]!;
+    if (end === null) return false;
+    const limit = chiSquare + target - NODE_ACCURACY;
+    return nodeChiSquares.some(
+      (value, node) =>
+        value < limit && direction * (axis[Math.floor(node / stride) % axis.length]! - end) > 0,
+    );
+  });
+}
+
 interface Line {
   /** Rise of the profiled Φ over the minimum at θ_k = x. */
   rise: (x: number) => number;
@@ -114,6 +150,7 @@ function createLine(
   scratch: MinimiseScratch,
   { theta, chiSquare, covariance, nodeChiSquares }: MinimumPoint,
   k: number,
+  crooked: boolean,
 ): Line {
   const { model } = problem;
   const held = Uint8Array.from(model.held);
@@ -122,7 +159,7 @@ function createLine(
   const slopes = slopesAlong(problem, covariance, k);
   const sigma = sigmaOf(covariance, model.names[k]!);
   // Where valleys are crooked each point is also reached from the minimum itself and from nodes of the search; the lowest counts.
-  const afresh = model.trial.crooked ? new Float64Array(model.size) : null;
+  const afresh = crooked ? new Float64Array(model.size) : null;
   const valleys = afresh && otherValleys(problem, scratch, nodeChiSquares, held, k);
   const line: Line = {
     sigma,
