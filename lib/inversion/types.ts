@@ -89,13 +89,15 @@ export interface CarrierScale {
   topPerCm3: number | null;
 }
 
-/** What band bending needs to know of the semiconductor, at the temperature of the scan. */
+/** What band bending, and the checks of an edge, need to know of the semiconductor, at the temperature of the scan. */
 export interface SemiconductorBulk {
   /** ε_r, static. */
   relativePermittivity: number;
   temperatureK: number;
   /** n_i, for the minority carriers n_i²/N; null leaves them out. */
   intrinsicPerCm3: number | null;
+  /** E_g; only checked against. */
+  gapEv?: number | null;
 }
 
 /** Everything a fit depends on, and nothing else. */
@@ -111,7 +113,7 @@ export interface FitInput {
   carriers: CarrierScale;
   /** Thickness of the cap layer in front of the semiconductor, nm; 0 for none. Depths of the profile count from below it. */
   capThicknessNm: number;
-  /** For band bending only. */
+  /** Needed for band bending; elsewhere it lets an edge be checked against electrostatics. */
   semiconductor?: SemiconductorBulk | null;
   /**
    * Settings by name; what is missing is free, except depthScale, which is then held at 1, bulkPerCm3 at the bulk concentration

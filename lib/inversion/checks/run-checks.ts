@@ -6,6 +6,7 @@ import { checkClosure } from './check-closure';
 import type { FitCheck } from './check-context';
 import { checkCorrelation } from './check-correlation';
 import { checkDepthScale } from './check-depth-scale';
+import { checkBandBending, checkDebyeLength } from './check-electrostatics';
 import { checkInfluence } from './check-influence';
 import { checkPoints } from './check-points';
 import { checkReach } from './check-reach';
@@ -35,6 +36,8 @@ const CHECKS: readonly FitCheck[] = [
   checkBinWidth,
   checkInfluence,
   checkClosure,
+  checkDebyeLength,
+  checkBandBending,
   checkCaptureCoefficient,
 ];
 
