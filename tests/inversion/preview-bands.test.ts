@@ -75,6 +75,30 @@ describe('the preview of the bands', () => {
   });
 });
 
+describe('the preview of a layer whose thickness and level are hard to tell apart', () => {
+  // Source: no concentration is negative. What the parameters could take away together is more than there is, over tens of nm.
+  it('ends at zero carriers', () => {
+    const truth = {
+      edgeDepthNm: 75,
+      edgeWidthNm: 18,
+      layerThicknessNm: 40,
+      farEdgeWidthNm: 10,
+      levelTop: 0.03,
+      levelBulk: 2,
+    };
+    const { prepared, answer } = fitted(rateInput({ profile: 'layer' }, 0.03), truth, 3);
+    const depthsNm = Array.from({ length: 90 }, (_, k) => 2 * k);
+    const { points } = carrierProfile(prepared, answer, null, { depthsNm });
+    for (const { lower68, lower95 } of points) {
+      expect(lower68!).toBeGreaterThanOrEqual(0);
+      expect(lower95!).toBeGreaterThanOrEqual(0);
+    }
+    expect(
+      points.filter(({ value, lower95 }) => lower95 === 0 && value > 1e11).length,
+    ).toBeGreaterThan(9);
+  });
+});
+
 describe('an error bar', () => {
   const truth = { edgeDepthNm: 75, edgeWidthNm: 14, levelTop: 0.74, levelBulk: 0.32 };
   const edgeOf = (sigma: number, seed: number) => {
