@@ -18,7 +18,7 @@ export function defaultDepthGrid(prepared: PreparedFit, answer: FitAnswer): Floa
   const depthSigma = answer.parameters.find(({ name }) => name === 'edgeDepthNm')?.sigma ?? 0;
   const around = Math.floor(ROUND_EDGE / landmarks.length);
   const depths = new Set<number>();
-  for (let k = 0; k <= EVEN; k++) depths.add((endNm * k) / EVEN);
+  for (let k = 0; k <= EVEN; k++) depths.add(endNm * (k / EVEN));
   for (const { depthNm, widthNm } of landmarks) {
     const spreadNm = Math.max(4 * widthNm, 3 * depthSigma, endNm / 100);
     for (let k = -around; k <= around; k++) depths.add(depthNm + (spreadNm * k) / around);
