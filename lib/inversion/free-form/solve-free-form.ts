@@ -16,7 +16,10 @@ export interface FreeFormSolution extends CurvePoint {
   knotsNm: readonly number[];
   /** u per knot, in the unit of the unknown (observedLine). */
   unknowns: readonly number[];
-  /** Level of the cap where it is an unknown; null elsewhere. */
+  /**
+   * Level of the cap where it is an unknown; null elsewhere. It is kept at or above 0 only: a fraction above 1 says that cap, levels and
+   * stopping profiles contradict each other, and holding the level is then meant.
+   */
   levelCap: number | null;
   unit: ProfileUnit;
   /** Profile value per knot: cm⁻³ or share; null above the ceiling of a saturating fraction. */
