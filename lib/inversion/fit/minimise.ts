@@ -2,11 +2,12 @@ import type { EdgeParameters } from '../profile/trial-profile';
 import { evaluate } from './evaluate';
 import { minimiseOnLine } from './minimise-on-line';
 import type { Problem } from './model';
-import { OPENED_WIDTHS } from './widths';
+import { openings } from './widths';
 import { refine, type RefineOptions, type RefineResult, type RefineScratch } from './refine';
 
 /** Two steps are minimised in turn, each with the other at rest, at most this often. */
 const MOST_SWEEPS = 8;
+const ROUNDING = 1e-9;
 
 export interface MinimiseScratch {
   refine: RefineScratch;
@@ -145,11 +146,12 @@ function leaveZeroWidth(
   let opened = 0;
   for (const k of widths) {
     if (held[k] || theta[k]! > 0) continue;
-    for (const share of OPENED_WIDTHS) {
+    for (const share of openings(problem.model)) {
       inner.set(theta);
       inner[k] = share * upper[k]!;
       const chiSquare = evaluate(problem, inner, held);
-      if (chiSquare >= lowest) continue;
+      // Within a bin Φ is flat in the width: what is less than rounding opens nothing.
+      if (!(chiSquare < lowest - ROUNDING * (1 + lowest))) continue;
       lowest = chiSquare;
       width = k;
       opened = share * upper[k]!;
