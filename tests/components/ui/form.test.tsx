@@ -74,7 +74,7 @@ describe('Form', () => {
     expect(screen.getByLabelText<HTMLInputElement>('Name').value).toBe('NB-34');
     expect(doping.getAttribute('aria-invalid')).toBe('true');
     expect(screen.getByLabelText('Name').hasAttribute('aria-invalid')).toBe(false);
-    expect(document.activeElement).toBe(doping);
+    await waitFor(() => expect(document.activeElement).toBe(doping));
     expect(onDone).not.toHaveBeenCalled();
   });
 
