@@ -35,9 +35,15 @@ for (const { name, width, colorScheme } of LOOKS) {
     for (const { list, address } of DETAILS) {
       await page.goto(list);
       const links = page.getByRole('main').locator('a');
-      const hrefs = await links.evaluateAll((all) => all.map((a) => a.getAttribute('href') ?? ''));
-      const first = hrefs.find((href) => address.test(href));
-      expect(first, `a link from ${list}`).toBeDefined();
+      let first: string | undefined;
+      // A list may still be on its way when its page is there.
+      const find = async (): Promise<string | undefined> => {
+        const hrefs = await links.evaluateAll((all) =>
+          all.map((a) => a.getAttribute('href') ?? ''),
+        );
+        return (first = hrefs.find((href) => address.test(href)));
+      };
+      await expect.poll(find, { message: `a link from ${list}` }).toBeDefined();
       await page.goto(first!);
       await expectGoodPage(page, first!);
     }
