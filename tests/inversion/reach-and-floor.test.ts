@@ -15,7 +15,7 @@ import {
   type PreparedFit,
   type StoppingProfile,
 } from '@/lib/inversion/index';
-import { answerOf, fractionInput, heldAt, SHARED_SET, uniforms } from './support/scans';
+import { answerOf, fractionInput, heldAt, rateInput, SHARED_SET, uniforms } from './support/scans';
 
 const TRUTH = { edgeDepthNm: 75, edgeWidthNm: 14, levelTop: 0.74, levelBulk: 0.32 };
 const DEEPEST = SHARED_SET.profiles.at(-1)!;
@@ -200,5 +200,32 @@ describe('the depths of a picture', () => {
     outside.forEach(({ size }) => expect(size).toBeCloseTo(end / 200, 9));
     expect(outside.length).toBeGreaterThan(50);
     expect(Math.min(...depths.map((depth) => Math.abs(depth - value)))).toBeLessThan(1e-9);
+  });
+});
+
+describe('a rate too small to be seen', () => {
+  // Source: a relaxation below about 0.02 µs⁻¹ leaves the signal undamped in a 10 µs window, and in germanium near 200 K about
+  // 1 µs⁻¹ is 10¹² cm⁻³ (common practice, no source). So points that tell 0.02 µs⁻¹ apart cannot show less than 2·10¹⁰ cm⁻³, and
+  // nearly that where all muons of one energy stop in front of the edge. Tolerance: 1 % of them stop behind it.
+  it('sets the floor of the carriers where the signal is undamped', () => {
+    const values = { edgeDepthNm: 75, edgeWidthNm: 4, levelTop: 0.02, levelBulk: 4 };
+    const template = rateInput(
+      {
+        response: {
+          kind: 'capture-rate',
+          gammaCm3PerS: 1e-6,
+          gammaSigmaCm3PerS: null,
+          baselinePerUs: 0,
+        },
+      },
+      0.02,
+    );
+    const prepared = prepareFit({
+      ...template,
+      points: simulateScan({ input: template, values, seed: 1 }),
+    });
+    const { floor } = carrierProfile(prepared, answerOf(fit(prepared)));
+    expect(floor!).toBeGreaterThanOrEqual(2e10);
+    expect(floor!).toBeLessThan(1.01 * 2e10);
   });
 });
