@@ -1,24 +1,24 @@
 import { BOLTZMANN_EV_PER_K } from '../electrostatics/constants';
-import { debyeLengthNm } from '../electrostatics/debye-length';
 import { TAIL_BELOW } from '../electrostatics/potential-table';
 import { reducedCurve, type ReducedCurve } from '../electrostatics/reduced-curve';
 import { spaceChargeFunction } from '../electrostatics/space-charge';
-import { InversionError } from '../errors';
-import { isNumber, isPositive } from '../fit/number-range';
 import { foldCumulative } from '../fold/fold-cumulative';
 import type { CumulativeScratch } from '../fold/share-fold';
-import type { FitInput, SemiconductorBulk } from '../types';
+import type { FitInput } from '../types';
+import {
+  BULK_FACTOR,
+  bulkOf,
+  debyeOf,
+  fermiOf,
+  givenBulk,
+  largestBulkOf,
+  largestDepletion,
+  spreadOf,
+} from './bent-bulk';
 import type { TrialProfile } from './trial-profile';
 
-/** Widest gap of the materials in use is 3.3 eV; no band bends further. */
-const LARGEST_BENDING_EV = 3.5;
 /** An accumulated surface beyond this, 20,000 times the bulk, is degenerate and Boltzmann statistics end. */
 const LARGEST_ACCUMULATION = 10;
-/** Past strong inversion the depth hardly grows any more while exponentials overflow. */
-const PAST_INVERSION = 250;
-/** The bulk is searched over this factor both ways without a prior, over so many of its σ with one. */
-const BULK_FACTOR = 100;
-const BULK_SIGMAS = 6;
 const NODES = 48;
 const BULK_STEPS = [-2, -1, 0, 1, 2];
 /** ∂/∂N by central differences of the exact fold: step² of the third derivative, 1e-8 of the value. */
@@ -145,94 +145,6 @@ export function bandBending(deepestNm: number, input: FitInput): TrialProfile {
       });
     },
   };
-}
-
-/** φ_F/kT of the majority concentration; ∞ without minority carriers. n_i of a cold wide gap is too small to divide by. */
-function fermiOf(bulkPerCm3: number, { intrinsicPerCm3 }: SemiconductorBulk): number {
-  return intrinsicPerCm3 === null ? Infinity : Math.log(bulkPerCm3) - Math.log(intrinsicPerCm3);
-}
-
-function largestBulkOf({ parameters }: FitInput, given: number): number {
-  const setting = parameters.bulkPerCm3;
-  if (!setting || setting.held) return given;
-  const { prior } = setting;
-  return Math.min(given * BULK_FACTOR, prior ? prior.mean + BULK_SIGMAS * prior.sigma : Infinity);
-}
-
-/**
- * v_s at which the edge leaves the scan: in depletion v = (depth/L_D)²/2 below the point where the bands are flat, and a saturating
- * fraction sees its edge where e^(−v) has fallen to 1/K.
- */
-function largestDepletion(
-  deepestInLengths: number,
-  { response }: FitInput,
-  bulkPerCm3: number,
-  bulk: SemiconductorBulk,
-): number {
-  const seen =
-    response.kind === 'saturating-fraction' ? Math.log1p(bulkPerCm3 / response.halfPerCm3) : 0;
-  const leaving = (Math.sqrt(seen) + deepestInLengths / Math.SQRT2) ** 2 + 1;
-  const kT = BOLTZMANN_EV_PER_K * bulk.temperatureK;
-  const inverted = PAST_INVERSION + 2 * fermiOf(bulkPerCm3, bulk);
-  return Math.min(Math.max(5, leaving), LARGEST_BENDING_EV / kT, inverted);
-}
-
-function bulkOf({ semiconductor, polarity, response }: FitInput): SemiconductorBulk {
-  if (!semiconductor) {
-    throw new InversionError(
-      'no-semiconductor',
-      'Band bending needs the semiconductor: its permittivity, temperature and intrinsic concentration.',
-    );
-  }
-  if (polarity === 'accumulation' && response.kind === 'two-level') {
-    throw new InversionError(
-      'wrong-response',
-      'An accumulated surface holds more carriers than the bulk, which a two-level fraction cannot show; use the saturating fraction.',
-    );
-  }
-  for (const [value, name] of [
-    [semiconductor.relativePermittivity, 'relative permittivity'],
-    [semiconductor.temperatureK, 'temperature (K)'],
-  ] as const) {
-    if (!isPositive(value))
-      throw new InversionError('bad-semiconductor', `The ${name} cannot be ${value}.`);
-  }
-  const { intrinsicPerCm3 } = semiconductor;
-  if (intrinsicPerCm3 !== null && !(intrinsicPerCm3 > 0 && isNumber(intrinsicPerCm3))) {
-    throw new InversionError(
-      'bad-semiconductor',
-      `The intrinsic concentration (cm⁻³) cannot be ${intrinsicPerCm3}.`,
-    );
-  }
-  return semiconductor;
-}
-
-function givenBulk({ parameters, carriers }: FitInput): number {
-  const setting = parameters.bulkPerCm3;
-  const given = setting?.prior?.mean ?? setting?.value ?? carriers.bulkPerCm3;
-  if (given !== null && given !== undefined && isPositive(given)) return given;
-  throw new InversionError(
-    'no-bulk-concentration',
-    'Band bending needs the carrier concentration of the bulk, a positive number of cm⁻³.',
-  );
-}
-
-/** Factor between neighbouring bulk concentrations of the search: one σ of the prior, or 1.6 without one. */
-function spreadOf({ parameters }: FitInput): number {
-  const prior = parameters.bulkPerCm3?.prior;
-  return prior ? 1 + Math.min(1, prior.sigma / prior.mean) : 1.6;
-}
-
-function debyeOf(
-  bulkPerCm3: number,
-  { relativePermittivity, temperatureK }: SemiconductorBulk,
-): number {
-  const exact = (value: number) => ({ value, sigma: 0 });
-  return debyeLengthNm({
-    bulkPerCm3: exact(bulkPerCm3),
-    relativePermittivity: exact(relativePermittivity),
-    temperatureK: exact(temperatureK),
-  }).value;
 }
 
 /** v at a depth below a surface with v_s; where that is next to nothing the curve is a plain exponential. */
